@@ -1,0 +1,191 @@
+/**
+ * The result of one comparison. This is the JSON contract of `compare --json`, key for key, so that charts,
+ * reports and readers of the file share one shape: fields may be added, never renamed. What is not known is
+ * null, never 0. Shares are fractions (0.12 is 12 %). Money is in `currency`.
+ */
+import type { Finding } from './hourly-year.ts';
+
+export type MountKind = 'roof-plane' | 'fixed-tilt' | 'single-axis' | 'dual-axis';
+export type LimitStatus = 'kept' | 'broken' | 'within_reading_error' | 'not_checked';
+export type Confidence = 'clear' | 'likely' | 'too_close';
+export type SkyModel = 'perez' | 'hay-davies' | 'reindl' | 'isotropic';
+export type Objective = 'lowest cost per kWh' | 'most kWh per kW' | 'best worst month';
+
+export interface Comparison {
+  /** Version of this contract, `trackworth-comparison-1`. */
+  schema: string;
+  title: string;
+  /** Null where the study gives no money. */
+  currency: string | null;
+  reference_id: string;
+  objective: Objective;
+  /** What the ranking used: the objective, or energy where its costs are lacking. */
+  ranked_by: Objective;
+  site: { latitude_deg: number; longitude_deg: number; elevation_m: number; utc_offset_h: number };
+  weather: WeatherSummary;
+  sky_model: SkyModel;
+  array: ArraySummary;
+  best_orientation: { tilt_deg: number; azimuth_deg: number; irradiation_kwh_m2: number };
+  orientation_map: OrientationMapResult;
+  mounts: MountResult[];
+  /** Twelve entries: the fixed plane that yields most in that month, on the reference's rows and losses. */
+  tilted_for_month: { month: string; tilt_deg: number; azimuth_deg: number; kwh_per_kw_day: number }[];
+  comparisons: { same_money: null; same_energy: SameEnergy[]; same_land: null; own_best: null };
+  finance: { real_rate: number | null; years: number | null; ageing: number | null };
+  wind_basis: WindBasis | null;
+  not_counted: NotCounted[];
+  advice: AdviceResult;
+  assumptions: Assumption[];
+}
+
+export interface WeatherSummary {
+  source: string;
+  format: string;
+  station: string;
+  ghi_kwh_m2: number;
+  dni_kwh_m2: number;
+  dhi_kwh_m2: number;
+  ghi_monthly_kwh_m2: number[];
+  /** Minutes to add to the file's times so that the year fits the sun; null where it cannot be told. */
+  time_shift_min: number | null;
+  /** Light recorded in hours without sun, dropped and counted. */
+  dropped_night_kwh_m2: number;
+  findings: Finding[];
+}
+
+export interface ArraySummary {
+  /** False where the study has no `array`: then everything is for 1 kW. */
+  given: boolean;
+  dc_kw: number;
+  ac_kw: number | null;
+  modules: number | null;
+  module_w: number | null;
+  module_area_m2: number | null;
+}
+
+/** Yearly irradiation of an unshaded fixed plane, `irradiation_kwh_m2[tilt index][azimuth index]`. */
+export interface OrientationMapResult {
+  tilts_deg: number[];
+  azimuths_deg: number[];
+  irradiation_kwh_m2: number[][];
+}
+
+export interface MountResult {
+  id: string;
+  kind: MountKind;
+  label: string;
+  /** Null for trackers. */
+  tilt_deg: number | null;
+  azimuth_deg: number | null;
+  /** `given`, or `best: unshaded optimum of the orientation map`; null for trackers. */
+  tilt_basis: string | null;
+  /** TOF: irradiation over the map's maximum, 0..1; null for trackers. */
+  orientation_factor: number | null;
+  /** Ground coverage ratio of the rows; null without rows. */
+  gcr: number | null;
+  /** What the rows are in words: `rows at GCR 0.45`, `no rows`, `lone mast`. */
+  rows: string;
+  irradiation_kwh_m2: number;
+  irradiation_monthly_kwh_m2: number[];
+  beam_kwh_m2: number;
+  sky_diffuse_kwh_m2: number;
+  ground_reflected_kwh_m2: number;
+  /** Fraction: `energy_kwh_per_kw` over the reference's, less 1. */
+  gain_over_reference: number;
+  /** The same gain under every sky model. */
+  gain_by_sky: Record<SkyModel, number>;
+  dc_kw: number;
+  ac_kw: number | null;
+  modules: number | null;
+  land_m2: number | null;
+  /** AC kWh delivered in the first year, whole array. */
+  energy_kwh: number;
+  energy_kwh_per_kw: number;
+  energy_monthly_kwh_per_kw: number[];
+  worst_month: { month: string; kwh_per_kw_day: number };
+  /** Product of the efficiencies times `irradiation_kwh_m2` is `energy_kwh_per_kw`. Counted stages only. */
+  stages: { name: string; efficiency: number; kwh_per_kw_after: number; source: string }[];
+  weakest_stage: string;
+  capital: number | null;
+  capital_per_kw: number | null;
+  upkeep_per_year: number | null;
+  lcoe_per_kwh: number | null;
+  /** Cost per kWh at 4, 7 and 10 % where the study gives no rate; else empty. */
+  lcoe_at_rates: Record<string, number>;
+  /** True where a cost that decides is blank: then the cost per kWh is from what is known. */
+  cost_incomplete: boolean;
+  /** Trackers only: capital per kW at which costs per kWh are equal, less the reference's; may be negative. */
+  break_even_premium_per_kw: number | null;
+  /** Trackers only: gain in delivered energy at which costs per kWh are equal (fraction). */
+  break_even_gain: number | null;
+  /** Capital per kW above the reference's, as quoted. */
+  premium_per_kw: number | null;
+  wind: MountWind;
+  limits: { name: string; status: LimitStatus; detail: string; excess_m: number | null }[];
+}
+
+export interface MountWind {
+  /** Above ground, at the steepest working angle; null where geometry is missing. */
+  highest_edge_m: number | null;
+  /** Above the roof surface; null for ground mounts or where geometry is missing. */
+  roof_projection_m: number | null;
+  /** At the highest edge. */
+  velocity_pressure_pa: number | null;
+  kz: number | null;
+  /** Which of the geometry keys are missing. */
+  missing: string[];
+}
+
+export interface WindBasis {
+  edition: string;
+  design_gust_ms: number;
+  exposure: 'B' | 'C' | 'D';
+  kzt: number;
+  kd: number;
+  ke: number;
+  deferral: string;
+}
+
+/** The fixed array that delivers as much as one tracker in the first year, under the same inverter. */
+export interface SameEnergy {
+  tracker_id: string;
+  reference_id: string;
+  reachable: boolean;
+  target_kwh: number;
+  /** Null where modules are not given; then `dc_kw` is exact rather than whole modules. */
+  modules: number | null;
+  dc_kw: number;
+  energy_kwh: number;
+  module_area_m2: number | null;
+  capital: number | null;
+  /** Its capital less the tracker's; negative: the fixed array is cheaper. */
+  capital_difference: number | null;
+  text: string;
+}
+
+export interface NotCounted {
+  /** The study's key, for example `mounts.tracker.drive.working`. */
+  what: string;
+  /** What one plausible value would do, with its numbers. */
+  effect: string;
+}
+
+export interface AdviceResult {
+  choice: string | null;
+  confidence: Confidence | null;
+  headline: string;
+  /** Chosen mount against each other one. */
+  leads: { over: string; confidence: Confidence; lead: number; doubt: number; unit: string; why: string }[];
+  reasons: string[];
+  switch_points: string[];
+  doubts: string[];
+  cautions: string[];
+  /** Mounts put aside by a hard limit, with the limit. */
+  excluded: { id: string; why: string }[];
+}
+
+export interface Assumption {
+  what: string;
+  value: string;
+  source: string;
+}
