@@ -36,7 +36,8 @@ test('a folder imports only from folders below it, through their index.ts', () =
       const [here, there] = [folderOf(file), folderOf(to)];
       if (here === there) continue;
       const front = to === join(SRC, there, 'index.ts') || to === join(SRC, `${there}.ts`);
-      if (ORDER.indexOf(there) >= ORDER.indexOf(here)) faults.push(`${relative(SRC, file)} imports upward: ${target}`);
+      if (ORDER.indexOf(there) >= ORDER.indexOf(here))
+        faults.push(`${relative(SRC, file)} imports upward: ${target}`);
       else if (!front) faults.push(`${relative(SRC, file)} goes round the front door: ${target}`);
     }
   }

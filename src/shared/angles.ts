@@ -31,4 +31,5 @@ const POINTS = [
 ]; // biome-ignore format: one quadrant a line
 
 /** An azimuth (degrees clockwise from true north) in the words of a sixteen-point compass. */
-export const compassWords = (azimuthDeg: number): string => POINTS[Math.round(wrap360(azimuthDeg) / 22.5) % 16];
+export const compassWords = (azimuthDeg: number): string =>
+  POINTS[Math.round(wrap360(azimuthDeg) / 22.5) % 16];

@@ -1,11 +1,27 @@
 /** A typical year has 365 days of 24 hours; hour 0 begins at 00:00 local standard time on 1 January. */
 export const HOURS = 8760;
 export const DAYS = 365;
-export const MONTH_NAMES = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec'] as const;
+export const MONTH_NAMES = [
+  'Jan',
+  'Feb',
+  'Mar',
+  'Apr',
+  'May',
+  'Jun',
+  'Jul',
+  'Aug',
+  'Sep',
+  'Oct',
+  'Nov',
+  'Dec',
+] as const;
 export const MONTH_DAYS = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31] as const;
 
 /** Day of the year (0-based) on which each month begins; the thirteenth entry is 365. */
-export const MONTH_FIRST_DAY: readonly number[] = MONTH_DAYS.reduce<number[]>((days, n) => [...days, days[days.length - 1] + n], [0]);
+export const MONTH_FIRST_DAY: readonly number[] = MONTH_DAYS.reduce<number[]>(
+  (days, n) => [...days, days[days.length - 1] + n],
+  [0],
+);
 
 /** Sums an hourly column by month: 12 numbers, in the column's unit times hours. */
 export const monthlySums = (column: Float64Array): number[] =>

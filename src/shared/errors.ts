@@ -21,7 +21,9 @@ export interface Problem {
 
 /** `study.yaml:4:13 site.latitude: expected a number from -90 to 90, found 95. Write ...` */
 export const describeProblem = (p: Problem): string => {
-  const place = [p.file, p.line, p.line === undefined ? undefined : p.column].filter((x) => x !== undefined).join(':');
+  const place = [p.file, p.line, p.line === undefined ? undefined : p.column]
+    .filter((x) => x !== undefined)
+    .join(':');
   const field = p.field ? `${p.field}: ` : '';
   return `${place}${place ? ' ' : ''}${field}expected ${p.expected}, found ${p.found}. ${p.fix}`;
 };

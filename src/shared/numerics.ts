@@ -13,7 +13,12 @@ export const bisect = (f: (x: number) => number, low: number, high: number, tole
 const INVERSE_GOLDEN = (Math.sqrt(5) - 1) / 2;
 
 /** Finds the maximum of a single-peaked `f` on `low..high` to within `tolerance` (golden-section search, Kiefer 1953). */
-export const goldenMaximum = (f: (x: number) => number, low: number, high: number, tolerance: number): number => {
+export const goldenMaximum = (
+  f: (x: number) => number,
+  low: number,
+  high: number,
+  tolerance: number,
+): number => {
   let [a, b] = [low, high];
   let c = b - INVERSE_GOLDEN * (b - a);
   let d = a + INVERSE_GOLDEN * (b - a);
@@ -33,4 +38,5 @@ export const goldenMaximum = (f: (x: number) => number, low: number, high: numbe
 };
 
 /** Rounds to `digits` significant digits; the JSON output carries 10. */
-export const toSignificant = (x: number, digits: number): number => (Number.isFinite(x) ? Number(x.toPrecision(digits)) : x);
+export const toSignificant = (x: number, digits: number): number =>
+  Number.isFinite(x) ? Number(x.toPrecision(digits)) : x;
