@@ -1,0 +1,160 @@
+import { cosDeg, goldenMaximum, sinDeg, wrap360 } from '../shared/index.ts';
+import type { SunHours } from '../sun/index.ts';
+import type { SkyHours } from './sky-over-hours.ts';
+
+/** Yearly irradiation of an unshaded fixed plane for every tilt and azimuth, kWh/m2: `at[tilt index][azimuth index]`. */
+export interface OrientationMap {
+  readonly tiltsDeg: readonly number[];
+  readonly azimuthsDeg: readonly number[];
+  readonly irradiationKwhM2: readonly (readonly number[])[];
+  readonly best: { readonly tiltDeg: number; readonly azimuthDeg: number; readonly irradiationKwhM2: number };
+}
+
+/** Sums over the year that do not depend on where a plane faces, kWh/m2. */
+interface DiffuseYear {
+  isotropic: number;
+  horizon: number;
+  steep: number;
+  ground: number;
+}
+
+/** Light that comes straight from the sun's direction, one vector per sample: length kWh/m2, towards the sun. */
+interface SunVectors {
+  readonly east: Float64Array;
+  readonly north: Float64Array;
+  readonly up: Float64Array;
+}
+
+const sunVectors = (sun: SunHours, sky: SkyHours): SunVectors => {
+  const n = sun.up.length;
+  const [east, north, up] = [new Float64Array(n), new Float64Array(n), new Float64Array(n)];
+  for (let h = 0; h < sky.direct.length; h++) {
+    const [from, to] = [sun.first[h], sun.first[h + 1]];
+    if (to === from) continue;
+    const share = (sky.direct[h] + sky.circumsolar[h]) / (1000 * (to - from));
+    for (let s = from; s < to; s++) {
+      east[s] = share * sun.east[s];
+      north[s] = share * sun.north[s];
+      up[s] = share * sun.up[s];
+    }
+  }
+  return { east, north, up };
+};
+
+const diffuseYear = (sky: SkyHours): DiffuseYear => {
+  const year: DiffuseYear = { isotropic: 0, horizon: 0, steep: 0, ground: 0 };
+  for (let h = 0; h < sky.isotropic.length; h++) {
+    year.isotropic += sky.isotropic[h] / 1000;
+    year.horizon += sky.horizon[h] / 1000;
+    year.steep += sky.steep[h] / 1000;
+    year.ground += sky.ground[h] / 1000;
+  }
+  return year;
+};
+
+const diffuseOn = (year: DiffuseYear, tiltDeg: number): number => {
+  const skyView = (1 + cosDeg(tiltDeg)) / 2;
+  return (
+    skyView * (year.isotropic + year.steep * sinDeg(tiltDeg / 2) ** 3) +
+    year.horizon * sinDeg(tiltDeg) +
+    year.ground * (1 - skyView)
+  );
+};
+
+/**
+ * Beam and circumsolar light on planes of every whole-numbered tilt 0..90 facing one way, kWh/m2. Seen from the
+ * side, each sun vector is (forward, up); it lights the plane of tilt b while forward sin b + up cos b > 0. For a
+ * sun behind (forward < 0) that ends at a tilt of atan(up / -forward), so summing vectors by the tilt at which they
+ * go out, and then down the tilts, gives all 91 planes in one pass.
+ */
+const beamByTilt = (v: SunVectors, azimuthDeg: number): Float64Array => {
+  const [sinAz, cosAz] = [sinDeg(azimuthDeg), cosDeg(azimuthDeg)];
+  const [forwardUntil, upUntil] = [new Float64Array(92), new Float64Array(92)];
+  for (let s = 0; s < v.up.length; s++) {
+    const forward = v.east[s] * sinAz + v.north[s] * cosAz;
+    const up = v.up[s];
+    let last = 91;
+    if (forward < 0) last = Math.ceil(Math.atan(up / -forward) * (180 / Math.PI));
+    forwardUntil[last] += forward;
+    upUntil[last] += up;
+  }
+  const onPlane = new Float64Array(91);
+  let [forward, up] = [forwardUntil[91], upUntil[91]];
+  for (let tilt = 90; tilt >= 0; tilt--) {
+    onPlane[tilt] = forward * sinDeg(tilt) + up * cosDeg(tilt);
+    forward += forwardUntil[tilt];
+    up += upUntil[tilt];
+  }
+  return onPlane;
+};
+
+const beamOn = (v: SunVectors, tiltDeg: number, azimuthDeg: number): number => {
+  const [e, n, u] = [
+    sinDeg(tiltDeg) * sinDeg(azimuthDeg),
+    sinDeg(tiltDeg) * cosDeg(azimuthDeg),
+    cosDeg(tiltDeg),
+  ]; // biome-ignore format: one vector
+  let sum = 0;
+  for (let s = 0; s < v.up.length; s++) {
+    const light = v.east[s] * e + v.north[s] * n + v.up[s] * u;
+    if (light > 0) sum += light;
+  }
+  return sum;
+};
+
+/** Yearly irradiation of one unshaded fixed plane, kWh/m2. */
+export const planeIrradiation = (sun: SunHours, sky: SkyHours, tiltDeg: number, azimuthDeg: number): number =>
+  beamOn(sunVectors(sun, sky), tiltDeg, azimuthDeg) + diffuseOn(diffuseYear(sky), tiltDeg);
+
+/** Climbs from the best grid point by turns in tilt and azimuth, to 0.05 degrees. */
+const refine = (
+  at: (tiltDeg: number, azimuthDeg: number) => number,
+  tiltDeg: number,
+  azimuthDeg: number,
+  step: number,
+) => {
+  let [tilt, azimuth] = [tiltDeg, azimuthDeg];
+  for (let round = 0; round < 3; round++) {
+    azimuth = goldenMaximum((a) => at(tilt, a), azimuth - step, azimuth + step, 0.05);
+    tilt = goldenMaximum((t) => at(t, azimuth), Math.max(0, tilt - 2), Math.min(90, tilt + 2), 0.05);
+  }
+  return { tilt, azimuth };
+};
+
+/**
+ * The orientation map of a site from its own hours, and its optimum in tilt and azimuth (0.05 degrees). On a site
+ * where lying flat is best the azimuth has no meaning and is given towards the equator.
+ * @param azimuthStepDeg 5 gives 72 columns; tilts are 0, 1 .. 90
+ */
+export const orientationMap = (
+  sun: SunHours,
+  sky: SkyHours,
+  latitudeDeg: number,
+  azimuthStepDeg = 5,
+): OrientationMap => {
+  const vectors = sunVectors(sun, sky);
+  const diffuse = diffuseYear(sky);
+  const tiltsDeg = Array.from({ length: 91 }, (_, tilt) => tilt);
+  const azimuthsDeg = Array.from({ length: Math.round(360 / azimuthStepDeg) }, (_, i) => i * azimuthStepDeg);
+  const columns = azimuthsDeg.map((azimuth) => beamByTilt(vectors, azimuth));
+  const irradiationKwhM2 = tiltsDeg.map((tilt) => {
+    const fromSky = diffuseOn(diffuse, tilt);
+    return columns.map((column) => column[tilt] + fromSky);
+  });
+  let [bestTilt, bestAzimuth] = [0, 0];
+  for (const tilt of tiltsDeg)
+    for (let a = 0; a < azimuthsDeg.length; a++)
+      if (irradiationKwhM2[tilt][a] > irradiationKwhM2[bestTilt][bestAzimuth])
+        [bestTilt, bestAzimuth] = [tilt, a];
+  const at = (tilt: number, azimuth: number) => beamOn(vectors, tilt, azimuth) + diffuseOn(diffuse, tilt);
+  const fine = refine(at, bestTilt, azimuthsDeg[bestAzimuth], azimuthStepDeg);
+  const flat = fine.tilt < 0.5;
+  const tiltDeg = flat ? 0 : Math.round(fine.tilt * 10) / 10;
+  const azimuthDeg = flat ? (latitudeDeg >= 0 ? 180 : 0) : wrap360(Math.round(fine.azimuth * 10) / 10);
+  return {
+    tiltsDeg,
+    azimuthsDeg,
+    irradiationKwhM2,
+    best: { tiltDeg, azimuthDeg, irradiationKwhM2: at(tiltDeg, azimuthDeg) },
+  };
+};
