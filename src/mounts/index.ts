@@ -1,1 +1,10 @@
+export * from './dual-axis.ts';
+export * from './fixed.ts';
+export * from './mast-field.ts';
+export * from './point-mount.ts';
+export * from './pointing.ts';
+export * from './row-shade.ts';
+export * from './row-view.ts';
+export * from './single-axis.ts';
+export * from './slope.ts';
 export type * from './spec.ts';

@@ -1,0 +1,28 @@
+import type { SunHours } from '../sun/index.ts';
+import { mastFieldShade } from './mast-field.ts';
+import { emptyPointing, type Pointing } from './pointing.ts';
+import { groundLeftByRows, skyLeftByRows } from './row-view.ts';
+import type { DualAxis } from './spec.ts';
+
+/**
+ * A plane that always faces the sun: alone, or in a level square field of masts. What the neighbours of a field take
+ * of sky and ground is that of long rows at the same pitch times the share of a row that the masts fill (assumption:
+ * no published figure is known to us).
+ */
+export const pointDualAxis = (sun: SunHours, mount: DualAxis): Pointing => {
+  const pointing = emptyPointing(sun, mount.rows !== null);
+  pointing.cosIncidence.fill(1);
+  pointing.cosTilt.set(sun.up);
+  for (let s = 0; s < sun.up.length; s++)
+    pointing.sinTilt[s] = Math.sqrt(Math.max(0, 1 - sun.up[s] * sun.up[s]));
+  if (mount.rows && pointing.neighbours) {
+    const { shaded, skyLeft, groundLeft } = pointing.neighbours;
+    const filled = Math.sqrt(mount.rows.gcr);
+    for (let s = 0; s < sun.up.length; s++) {
+      shaded[s] = mastFieldShade(sun.east[s], sun.north[s], sun.up[s], mount.rows.gcr);
+      skyLeft[s] = 1 - filled * (1 - skyLeftByRows(sun.up[s], filled));
+      groundLeft[s] = 1 - filled * (1 - groundLeftByRows(sun.up[s], filled));
+    }
+  }
+  return pointing;
+};

@@ -1,0 +1,34 @@
+import type { SunHours } from '../sun/index.ts';
+
+/**
+ * Where a plane points and what its neighbours take, for every sample of the sun. One shape for every kind of
+ * mount, fixed or tracking: to add a kind, fill one of these.
+ */
+export interface Pointing {
+  /** Cosine of the angle of incidence; below 0 the sun is behind the plane. */
+  readonly cosIncidence: Float64Array;
+  readonly cosTilt: Float64Array;
+  readonly sinTilt: Float64Array;
+  /** Set where there are rows. */
+  readonly neighbours: Neighbours | null;
+}
+
+/** What the other rows take from a plane, per sample; shares 0..1. */
+export interface Neighbours {
+  /** Share of the plane in their shade. */
+  readonly shaded: Float64Array;
+  /** Share of the open plane's view of the sky that they leave. */
+  readonly skyLeft: Float64Array;
+  /** Share of the open plane's view of the ground that they leave. */
+  readonly groundLeft: Float64Array;
+}
+
+export const emptyPointing = (sun: SunHours, withRows: boolean): Pointing => {
+  const column = () => new Float64Array(sun.up.length);
+  return {
+    cosIncidence: column(),
+    cosTilt: column(),
+    sinTilt: column(),
+    neighbours: withRows ? { shaded: column(), skyLeft: column(), groundLeft: column() } : null,
+  };
+};

@@ -1,0 +1,71 @@
+import { acosDeg, atan2Deg, cosDeg, DEG, sinDeg, tanDeg } from '../shared/index.ts';
+import type { SunHours } from '../sun/index.ts';
+import { emptyPointing, type Pointing } from './pointing.ts';
+import { rowShade } from './row-shade.ts';
+import { groundLeftByRows, skyLeftByRows } from './row-view.ts';
+import type { SingleAxis } from './spec.ts';
+
+/**
+ * Turn of a single-axis tracker that keeps out of its neighbours' shade when the sun is low, degrees: back from the
+ * turn towards the sun until the rows just touch, edge to edge. Anderson & Mikofski 2020, NREL/TP-5K00-76626,
+ * eqs. 11 to 14; on level ground that of Lorenzo, Narvarte & Munoz 2011, Prog. Photovolt. 19, 747.
+ * @param trueTurnDeg turn that faces the sun, -180..180, 0 lying flat
+ * @param crossAxisTiltDeg see {@link crossAxisTilt}; 0 on level ground
+ */
+export const backtrackTurn = (trueTurnDeg: number, gcr: number, crossAxisTiltDeg = 0): number => {
+  const room = Math.abs(cosDeg(trueTurnDeg - crossAxisTiltDeg)) / (gcr * cosDeg(crossAxisTiltDeg));
+  return room < 1 ? trueTurnDeg - Math.sign(trueTurnDeg) * acosDeg(room) : trueTurnDeg;
+};
+
+/**
+ * Share of a tracker row shaded by the next, 0..1: Anderson & Mikofski 2020, eq. 32, by {@link rowShade}.
+ * @param turnDeg actual turn of the rows
+ * @param trueTurnDeg turn that would face the sun
+ */
+export const trackerRowShade = (
+  turnDeg: number,
+  trueTurnDeg: number,
+  gcr: number,
+  crossAxisTiltDeg = 0,
+): number => {
+  const cosIncidence = cosDeg(turnDeg - trueTurnDeg);
+  const up = cosDeg(trueTurnDeg) + tanDeg(crossAxisTiltDeg) * sinDeg(trueTurnDeg);
+  return cosIncidence > 0 ? rowShade(up, cosIncidence, gcr) : 0;
+};
+
+/**
+ * A plane that turns about one axis, as near to the sun as its swing and its neighbours allow. The sun is taken into
+ * the axis's own frame (across, along, out): Marion & Dobos 2013, NREL/TP-6A20-58891, eq. 3; turning right-handed
+ * about the axis, so that with the axis falling south a positive turn faces west. Limits apply after backtracking.
+ */
+export const pointSingleAxis = (sun: SunHours, mount: SingleAxis): Pointing => {
+  const gcr = mount.rows?.gcr ?? null;
+  const pointing = emptyPointing(sun, gcr !== null);
+  const { cosIncidence, cosTilt, sinTilt, neighbours } = pointing;
+  const [sinAz, cosAz] = [sinDeg(mount.axisAzimuthDeg), cosDeg(mount.axisAzimuthDeg)];
+  const [sinAxis, cosAxis] = [sinDeg(mount.axisTiltDeg), cosDeg(mount.axisTiltDeg)];
+  const backtracks = mount.rows?.lowSun === 'backtrack';
+  const cosSwing = cosDeg(mount.swingDeg);
+  for (let s = 0; s < cosIncidence.length; s++) {
+    const across = sun.east[s] * cosAz - sun.north[s] * sinAz;
+    const out = (sun.east[s] * sinAz + sun.north[s] * cosAz) * sinAxis + sun.up[s] * cosAxis;
+    const reach = Math.sqrt(across * across + out * out);
+    let [sinTurn, cosTurn] = reach > 0 ? [across / reach, out / reach] : [0, 1];
+    if (cosTurn < cosSwing || (backtracks && gcr !== null && Math.abs(cosTurn) < gcr)) {
+      let turnDeg = atan2Deg(across, out);
+      if (backtracks && gcr !== null) turnDeg = backtrackTurn(turnDeg, gcr);
+      const turn = Math.max(-mount.swingDeg, Math.min(mount.swingDeg, turnDeg)) * DEG;
+      [sinTurn, cosTurn] = [Math.sin(turn), Math.cos(turn)];
+    }
+    const incidence = across * sinTurn + out * cosTurn;
+    cosIncidence[s] = incidence;
+    cosTilt[s] = cosTurn * cosAxis;
+    sinTilt[s] = Math.sqrt(Math.max(0, 1 - cosTilt[s] * cosTilt[s]));
+    if (gcr !== null && neighbours) {
+      neighbours.shaded[s] = incidence > 0 ? rowShade(out, incidence, gcr) : 0;
+      neighbours.skyLeft[s] = skyLeftByRows(cosTurn, gcr);
+      neighbours.groundLeft[s] = groundLeftByRows(cosTurn, gcr);
+    }
+  }
+  return pointing;
+};
