@@ -1,1 +1,5 @@
+export * from './delivered.ts';
+export * from './heat.ts';
+export * from './incidence.ts';
+export * from './plane-views.ts';
 export type * from './spec.ts';
