@@ -3,7 +3,7 @@ import { CALENDAR_YEAR, GROUND_ALBEDO, ORLIN_BENCH, type SampleYear } from './sa
 
 const HEADER = [
   [
-    'LOCATION,Orlin Bench,Invented,Invented,invented data,000000',
+    'LOCATION,Orlin Bench,invented place,,invented data,000000',
     ORLIN_BENCH.latitudeDeg.toFixed(2),
     ORLIN_BENCH.longitudeDeg.toFixed(2),
     ORLIN_BENCH.utcOffsetH.toFixed(1),

@@ -39,7 +39,7 @@ test('rebuilding the year in memory gives the committed file, byte for byte', ()
 test('the file says that it is invented, names no station and stays small', () => {
   const head = file.split('\n').slice(0, 8).join('\n');
   expect(head).toMatch(
-    /^LOCATION,Orlin Bench,Invented,Invented,invented data,000000,40\.10,-104\.92,-7\.0,1600\.0\n/,
+    /^LOCATION,Orlin Bench,invented place,,invented data,000000,40\.10,-104\.92,-7\.0,1600\.0\n/,
   );
   expect(head).toMatch(/\nCOMMENTS 1,INVENTED DATA/);
   expect(file.length).toBeLessThan(900_000);
