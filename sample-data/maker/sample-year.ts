@@ -52,7 +52,7 @@ const airOn = (day: number, pressurePa: number): ClearAir => {
 };
 
 const rounded = (column: Float64Array, perUnit: number): Float64Array =>
-  column.map((x) => Math.round(x * perUnit) / perUnit);
+  column.map((x) => Math.round(x * perUnit) / perUnit + 0); // + 0 turns -0 into 0
 
 /**
  * Makes the invented year of Orlin Bench: the same seed gives the same year. The beam reaches the ground during the
