@@ -1,0 +1,210 @@
+import type { Comparison, MountResult } from '../shared/index.ts';
+import { energyInPlaceOfCost } from './energy.ts';
+import { type Chart, frame, GROUPED_AXIS_LABEL, type Layer, textLayer } from './frame.ts';
+import { axisValues, forSpec, money, percentSize } from './numbers.ts';
+import { HAIRLINE, INK, MUTED, seriesStyle } from './palette.ts';
+import { ROW_HEIGHT, rowNames, rowPosition } from './rows.ts';
+import { labelOf, listed, named, ranked, sentence } from './words.ts';
+
+const RIGHT = 150;
+
+/** What is known of one mount's cost per kWh: one likely value, or one for each of several rates. */
+interface CostRow {
+  readonly mount: MountResult;
+  readonly likely: number | null;
+  /** From the lowest rate to the highest. */
+  readonly atRates: readonly { rate: string; cost: number }[];
+}
+
+/** Cost per kWh by mount; delivered energy instead where no mount has a cost. */
+export const costChart = (comparison: Comparison): Chart => {
+  const rows = costRows(comparison.mounts);
+  if (!rows.some(hasCost)) return energyInPlaceOfCost(comparison);
+  const unit = `${comparison.currency ?? 'money'} per kWh`;
+  const title = headline(rows, unit);
+  const incomplete = rows.filter((r) => hasCost(r) && r.mount.cost_incomplete).map((r) => named(r.mount));
+  const finding = `${title}.${incomplete.length > 0 ? ` Some costs are blank for ${listed(incomplete)}: from what is known only.` : ''}`;
+  const altText = `Points on a common scale: cost per kWh by mount, ${unit}. ${finding} ${rows.map((r) => `${labelOf(r.mount)}: ${inWords(r)}`).join('; ')}.`;
+  const names = rowNames(rows.map((r) => labelOf(r.mount)));
+  const top = Math.max(...rows.flatMap((r) => [r.likely ?? 0, ...r.atRates.map((a) => a.cost)]));
+  const x = {
+    type: 'quantitative',
+    scale: { domain: [0, forSpec(top > 0 ? top : 1)], nice: false },
+    axis: { title: unit, grid: true, values: axisValues(top > 0 ? top : 1), labelExpr: GROUPED_AXIS_LABEL },
+  };
+  const withRates = rows.some((r) => r.likely === null && r.atRates.length > 0);
+  return {
+    name: 'cost',
+    title,
+    finding,
+    altText,
+    spec: frame({
+      title,
+      subtitle: withRates
+        ? 'Cost per kWh over the life of each mount. The study gives no rate, so it is shown at several real rates.'
+        : 'Cost per kWh over the life of each mount, likely value.',
+      altText,
+      left: names.left,
+      right: RIGHT,
+      height: rows.length * ROW_HEIGHT,
+      above: 30,
+      below: 56,
+      layers: [...rowGuides(rows), ...rateRanges(rows, x), ...likelyPoints(rows, comparison, x), endTexts(rows, x), names.layer],
+    }), // biome-ignore format: the layers on one line
+  };
+};
+
+const hasCost = (row: CostRow): boolean => row.likely !== null || row.atRates.length > 0;
+/** What a row is ranked by: its likely cost, else its cost at the middle rate. */
+const middle = (row: CostRow): number =>
+  row.likely ?? row.atRates[Math.floor(row.atRates.length / 2)]?.cost ?? Number.POSITIVE_INFINITY;
+
+const costRows = (mounts: readonly MountResult[]): CostRow[] =>
+  ranked(
+    mounts.map((mount) => ({
+      mount,
+      likely: finite(mount.lcoe_per_kwh),
+      atRates: Object.entries(mount.lcoe_at_rates)
+        .filter(([, cost]) => Number.isFinite(cost))
+        .map(([rate, cost]) => ({ rate: rateWords(rate), cost }))
+        .sort((a, b) => Number.parseFloat(a.rate) - Number.parseFloat(b.rate)),
+    })),
+    (row) => -middle(row),
+  );
+
+const finite = (x: number | null): number | null => (x !== null && Number.isFinite(x) ? x : null);
+/** Keys of `lcoe_at_rates` as `7 %`, whether they were written `7 %`, `7` or `0.07`. */
+const rateWords = (key: string): string => {
+  const value = Number.parseFloat(key);
+  return Number.isFinite(value) ? `${forSpec(value < 1 ? value * 100 : value)}\u00A0%` : key;
+};
+
+/** A hairline through each row, so that the eye finds the name of a point far to the right. */
+const rowGuides = (rows: readonly CostRow[]): Layer[] => [
+  {
+    data: { values: rows.map((_, row) => ({ row })) },
+    mark: { type: 'rule', color: HAIRLINE, strokeDash: [1, 3] },
+    encoding: { y: rowPosition, x: { value: 0 }, x2: { value: 'width' } },
+  },
+];
+
+const rateRanges = (rows: readonly CostRow[], x: Record<string, unknown>): Layer[] => {
+  const shown = rows
+    .map((r, row) => ({ ...r, row }))
+    .filter((r) => r.likely === null && r.atRates.length > 0);
+  if (shown.length === 0) return [];
+  const points = shown.flatMap(({ row, mount, atRates }) =>
+    atRates.map(({ rate, cost }) => ({
+      row,
+      mount: labelOf(mount),
+      rate,
+      cost_per_kwh: forSpec(cost),
+      text: rate,
+    })),
+  );
+  return [
+    {
+      data: {
+        values: shown.map(({ row, atRates }) => {
+          const costs = atRates.map((a) => a.cost);
+          return { row, low: forSpec(Math.min(...costs)), high: forSpec(Math.max(...costs)) };
+        }),
+      },
+      mark: { type: 'rule', strokeWidth: 2, color: MUTED },
+      encoding: { y: rowPosition, x: { field: 'low', ...x }, x2: { field: 'high' } },
+    },
+    {
+      data: { values: points },
+      mark: { type: 'tick', thickness: 2, size: 14, color: INK, opacity: 1 },
+      encoding: { y: rowPosition, x: { field: 'cost_per_kwh', ...x } },
+    },
+    textLayer(
+      points,
+      { y: rowPosition, x: { field: 'cost_per_kwh', ...x } },
+      { dy: -14, fontSize: 10, color: MUTED },
+    ),
+  ];
+};
+
+const likelyPoints = (
+  rows: readonly CostRow[],
+  comparison: Comparison,
+  x: Record<string, unknown>,
+): Layer[] =>
+  rows.flatMap(({ mount, likely }, row) => {
+    if (likely === null) return [];
+    const { color, shape } = seriesStyle(comparison.mounts.indexOf(mount));
+    return [
+      {
+        data: { values: [{ row, mount: labelOf(mount), cost_per_kwh: forSpec(likely) }] },
+        mark: {
+          type: 'point',
+          shape,
+          size: 110,
+          opacity: 1,
+          stroke: color,
+          strokeWidth: 2,
+          fill: mount.cost_incomplete ? '#FFFFFF' : color,
+        },
+        encoding: { y: rowPosition, x: { field: 'cost_per_kwh', ...x } },
+      },
+    ];
+  });
+
+const endTexts = (rows: readonly CostRow[], x: Record<string, unknown>): Layer =>
+  textLayer(
+    rows.map((r, row) => ({
+      row,
+      end: forSpec(r.likely ?? Math.max(0, ...r.atRates.map((a) => a.cost))),
+      text: valueWords(r),
+    })),
+    { y: rowPosition, x: { field: 'end', ...x } },
+    { align: 'left', dx: 12, fontWeight: 'bold', stroke: null },
+  );
+
+/** Short, at the point. */
+const valueWords = (row: CostRow): string => {
+  if (!hasCost(row)) return 'no cost known';
+  const costs = row.atRates.map((a) => a.cost);
+  const figure =
+    row.likely !== null ? money(row.likely) : `${money(Math.min(...costs))} to ${money(Math.max(...costs))}`;
+  return row.mount.cost_incomplete ? `${figure}, in part` : figure;
+};
+
+const inWords = (row: CostRow): string =>
+  row.likely === null && row.atRates.length > 0
+    ? row.atRates.map((a) => `${money(a.cost)} at ${a.rate}`).join(', ')
+    : valueWords(row);
+
+const headline = (rows: readonly CostRow[], unit: string): string => {
+  const costed = rows.filter(hasCost);
+  const [best, next] = costed;
+  if (best.likely === null) return headlineAtRates(costed, unit);
+  const figure = `${money(best.likely)} ${unit}`;
+  if (next === undefined) return sentence(`energy from ${named(best.mount)} costs ${figure}`);
+  const ahead = middle(next) > 0 ? 1 - middle(best) / middle(next) : 0;
+  return Math.abs(ahead) < 0.0005
+    ? sentence(`${named(best.mount)} and ${named(next.mount)} cost the same, ${figure}`)
+    : sentence(`${named(best.mount)} makes the cheapest energy: ${figure}, ${percentSize(ahead)} below ${named(next.mount)}`);
+}; // biome-ignore format: one sentence a line
+
+/** Which mount is cheapest at which rate. */
+const headlineAtRates = (rows: readonly CostRow[], unit: string): string => {
+  const rates = rows[0].atRates.map((a) => a.rate);
+  const costAt = (row: CostRow, rate: string) =>
+    row.atRates.find((a) => a.rate === rate)?.cost ?? Number.POSITIVE_INFINITY;
+  const winners = rates.map((rate) =>
+    rows.reduce((best, row) => (costAt(row, rate) < costAt(best, rate) ? row : best)),
+  );
+  const spans = rows
+    .map((row) => ({ row, won: rates.filter((_, i) => winners[i] === row) }))
+    .filter(({ won }) => won.length > 0);
+  if (spans.length > 1)
+    return sentence(
+      `cheapest energy: ${listed(spans.map(({ row, won }) => `${named(row.mount)} at ${listed(won)}`))}`,
+    );
+  const costs = rows[0].atRates.map((a) => a.cost);
+  return sentence(
+    `${named(spans[0].row.mount)} makes the cheapest energy at ${listed(rates)}: ${money(Math.min(...costs))} to ${money(Math.max(...costs))} ${unit}`,
+  );
+};
