@@ -1,0 +1,176 @@
+import type { CostSpec } from '../cost/index.ts';
+import type { ArraySpec, DriveSpec } from '../energy/index.ts';
+import type { MountGeometry, MountLengths, RowSpec } from '../mounts/index.ts';
+import type { MountKind } from '../shared/index.ts';
+import type { TableColumn, TableColumns } from '../weather/index.ts';
+import type { WindSpec } from '../wind/index.ts';
+import type { RawMount } from './mount-schema.ts';
+import type { Study, StudyMount } from './study-file.ts';
+import type { RawStudy } from './study-schema.ts';
+
+/** In the words of a report; the id comes first since tables are read by it. */
+const KIND_WORDS: Record<MountKind, string> = {
+  'roof-plane': 'roof plane',
+  'fixed-tilt': 'fixed rack',
+  'single-axis': 'single-axis tracker',
+  'dual-axis': 'dual-axis tracker',
+};
+
+/** Common practice, no source: grass and bare soil lie between 0.15 and 0.25. */
+const DEFAULT_ALBEDO = 0.2;
+/** Common practice, no source: the usual limit of a horizontal tracker. */
+const DEFAULT_SWING_DEG = 60;
+
+/** Only single-axis rows turn back; other rows take the shade as it falls. */
+const rowsOf = (
+  rows: { gcr: number; low_sun?: 'backtrack' | 'shade' | undefined } | undefined,
+  otherwise: RowSpec['lowSun'],
+): RowSpec | null => (rows ? { gcr: rows.gcr, lowSun: rows.low_sun ?? otherwise } : null);
+
+const geometryOf = (mount: RawMount): MountGeometry => {
+  switch (mount.kind) {
+    case 'roof-plane':
+      return { kind: mount.kind, tiltDeg: mount.tilt, azimuthDeg: mount.azimuth };
+    case 'fixed-tilt':
+      return {
+        kind: mount.kind,
+        tiltDeg: mount.tilt ?? 'best',
+        azimuthDeg: mount.azimuth ?? 'best',
+        rows: rowsOf(mount.rows, 'shade'),
+      };
+    case 'single-axis':
+      return {
+        kind: mount.kind,
+        axisAzimuthDeg: mount.axis?.azimuth ?? 180,
+        axisTiltDeg: mount.axis?.tilt ?? 0,
+        swingDeg: mount.swing ?? DEFAULT_SWING_DEG,
+        rows: rowsOf(mount.rows, 'backtrack'),
+      };
+    case 'dual-axis':
+      return { kind: mount.kind, rows: rowsOf(mount.rows, 'shade') };
+  }
+};
+
+const lengthsOf = (mount: RawMount): MountLengths => ({
+  slantM: ('slant' in mount ? mount.slant : null) ?? null,
+  axisHeightM: ('axis_height' in mount ? mount.axis_height : null) ?? null,
+  lowerEdgeM: ('lower_edge' in mount ? mount.lower_edge : null) ?? null,
+  airBehindM: ('air_behind' in mount ? mount.air_behind : null) ?? null,
+});
+
+/** Every tracker has a drive, even where the study says nothing of it. */
+const driveOf = (mount: RawMount): DriveSpec | null =>
+  mount.kind === 'single-axis' || mount.kind === 'dual-axis'
+    ? {
+        working: mount.drive?.working ?? null,
+        stuck: mount.drive?.stuck ?? null,
+        ownUse: mount.drive?.own_use ?? null,
+      }
+    : null;
+
+const costOf = ({ cost }: RawMount): CostSpec | null => {
+  if (!cost || Object.values(cost).every((value) => value === undefined)) return null;
+  return {
+    capitalPerKw: cost.capital_per_kw ?? null,
+    capital: cost.capital ?? null,
+    upkeepPerKw: cost.upkeep_per_kw ?? null,
+    upkeep: cost.upkeep ?? null,
+    renewals: cost.renewals ?? [],
+  };
+};
+
+const mountOf = (mount: RawMount): StudyMount => ({
+  id: mount.id,
+  label: mount.label ?? `${mount.id} (${KIND_WORDS[mount.kind]})`,
+  geometry: geometryOf(mount),
+  lengths: lengthsOf(mount),
+  drive: driveOf(mount),
+  cost: costOf(mount),
+});
+
+const arrayOf = (array: RawStudy['array']): ArraySpec => ({
+  given: array !== undefined,
+  dcKw: array?.dc ?? 1,
+  inverterKw: array?.inverter ?? null,
+  module: array?.module
+    ? {
+        powerW: array.module.power,
+        lengthM: array.module.length ?? null,
+        widthM: array.module.width ?? null,
+        thicknessM: array.module.thickness ?? null,
+        heatPerK: array.module.heat ?? null,
+      }
+    : null,
+});
+
+type RawColumn = string | { column: string; unit?: string | undefined };
+const columnOf = (raw: RawColumn): TableColumn =>
+  typeof raw === 'string' ? { name: raw, unit: null } : { name: raw.column, unit: raw.unit ?? null };
+
+const tableOf = (table: RawStudy['weather']['table']): TableColumns | null => {
+  if (!table) return null;
+  const orNull = (raw: RawColumn | undefined) => (raw === undefined ? null : columnOf(raw));
+  return {
+    time: columnOf(table.time),
+    ghi: orNull(table.ghi),
+    dni: orNull(table.dni),
+    dhi: orNull(table.dhi),
+    temperature: orNull(table.temperature),
+    wind: orNull(table.wind),
+  };
+};
+
+const windOf = (wind: RawStudy['wind']): WindSpec | null => {
+  const spec: WindSpec = {
+    designGustMs: wind?.design_gust ?? null,
+    exposure: wind?.exposure ?? null,
+    limits: { roofProjectionM: wind?.limits?.roof_projection ?? null, heightM: wind?.limits?.height ?? null },
+  };
+  const given = [spec.designGustMs, spec.exposure, ...Object.values(spec.limits)].some(
+    (value) => value !== null,
+  );
+  return given ? spec : null;
+};
+
+/** The last part of a path without its ending: `sites/orlin.yaml` gives `orlin`. */
+const nameOf = (file: string): string => {
+  const last = file.split(/[\\/]/).at(-1) ?? '';
+  return last.replace(/\.[^.]+$/, '') || 'study';
+};
+
+/** Fills the documented defaults in; all else that is blank becomes null. */
+export const toStudy = (frame: RawStudy, mounts: readonly RawMount[], file: string): Study => ({
+  title: frame.title ?? nameOf(file),
+  site: {
+    latitudeDeg: frame.site?.latitude ?? null,
+    longitudeDeg: frame.site?.longitude ?? null,
+    elevationM: frame.site?.elevation ?? null,
+    utcOffsetH: frame.site?.utc_offset ?? null,
+    roofHeightM: frame.site?.roof_height ?? null,
+  },
+  weather: {
+    file: frame.weather.file,
+    table: tableOf(frame.weather.table),
+    label: frame.weather.label ?? null,
+    addMinutes: frame.weather.add_minutes ?? 0,
+    acceptClock: frame.weather.accept_clock ?? false,
+  },
+  sky: { model: frame.sky?.model ?? 'perez', albedo: frame.sky?.albedo ?? DEFAULT_ALBEDO },
+  array: arrayOf(frame.array),
+  mounts: mounts.map(mountOf),
+  losses: {
+    dirt: frame.losses?.dirt ?? null,
+    moduleSpread: frame.losses?.module_spread ?? null,
+    cables: frame.losses?.cables ?? null,
+    conversion: frame.losses?.conversion ?? null,
+  },
+  finance: {
+    realRate: frame.finance?.real_rate ?? null,
+    years: frame.finance?.years ?? null,
+    ageing: frame.finance?.ageing ?? null,
+    currency: frame.finance?.currency ?? null,
+  },
+  wind: windOf(frame.wind),
+  objective: frame.advice?.objective ?? null,
+  compareWith: frame.compare_with ?? null,
+});
