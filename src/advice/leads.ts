@@ -1,0 +1,91 @@
+import { inWords } from '../cost/index.ts';
+import type { AdviceResult, Confidence, SkyModel } from '../shared/index.ts';
+import type { AdviceMount } from './input.ts';
+import type { Metric, Ranking } from './ranking.ts';
+import { isTracker, nameOf } from './words.ts';
+
+export type Lead = AdviceResult['leads'][number];
+
+/** The skies whose spread is the doubt. The isotropic sky is biased low and only ever shown as a lower bound. */
+export const DOUBT_SKIES: readonly SkyModel[] = ['perez', 'hay-davies', 'reindl'];
+
+/** A lead under this share of the metric itself is the rounding of sums. */
+const ROUNDING = 1e-9;
+
+/** Half the range, over the three skies, of the difference between two mounts in the metric; the same either way round. */
+export const doubtBetween = (a: AdviceMount, b: AdviceMount, metric: Metric): number => {
+  const differences = DOUBT_SKIES.map(
+    (sky) => (metric.underSky(a, sky) ?? Number.NaN) - (metric.underSky(b, sky) ?? Number.NaN),
+  );
+  return (Math.max(...differences) - Math.min(...differences)) / 2;
+};
+
+/** `clear` above twice the doubt, `likely` above the doubt, else `too_close`. */
+export const confidenceOf = (lead: number, doubt: number): Confidence =>
+  lead > 2 * doubt ? 'clear' : lead > doubt ? 'likely' : 'too_close';
+
+const onGround = (m: AdviceMount): boolean => m.kind !== 'roof-plane';
+export const isLoneMast = (m: AdviceMount): boolean => m.kind === 'dual-axis' && m.gcr === null;
+
+/** Between ground mounts only one of which has rows; a lone mast never has any. */
+export const rowsDiffer = (a: AdviceMount, b: AdviceMount): boolean =>
+  onGround(a) && onGround(b) && !isLoneMast(a) && !isLoneMast(b) && (a.gcr === null) !== (b.gcr === null);
+
+/** Why a lead is `likely` at most, whatever its size: one clause for each like-with-like rule that is not met. */
+const caps = (chosen: AdviceMount, other: AdviceMount, ranking: Ranking): string[] => {
+  const clauses: string[] = [];
+  if (rowsDiffer(chosen, other)) {
+    clauses.push(`rows differ: ${nameOf(chosen)} has ${chosen.rows}, ${nameOf(other)} ${other.rows}`);
+  }
+  const incomplete = [chosen, other].filter((m) => m.cost_incomplete).map(nameOf);
+  if (ranking.rankedBy === 'lowest cost per kWh' && incomplete.length > 0) {
+    clauses.push(`the costs of ${incomplete.join(' and ')} are incomplete, and blank is not zero`);
+  }
+  if (ranking.lacking !== null) clauses.push(`costs were not weighed, for lack of ${ranking.lacking}`);
+  if (isTracker(chosen) && chosen.downtime_blank) {
+    clauses.push(`downtime of ${nameOf(chosen)} is blank, and blank is not zero`);
+  }
+  return clauses;
+};
+
+/** What differs without forbidding a clear lead, so that a reader sees it. */
+const remarks = (chosen: AdviceMount, other: AdviceMount): string[] => {
+  if (!onGround(chosen) || !onGround(other)) return [];
+  if (isLoneMast(chosen) !== isLoneMast(other)) {
+    return [`${nameOf(isLoneMast(chosen) ? chosen : other)} is a lone mast without rows`];
+  }
+  return chosen.gcr !== null && other.gcr !== null && chosen.gcr !== other.gcr
+    ? [`GCR ${chosen.gcr.toFixed(2)} against ${other.gcr.toFixed(2)}`]
+    : [];
+};
+
+const sizeWords = (lead: number, doubt: number, unit: string): string => {
+  const size = `the lead is ${inWords(lead)} ${unit}`;
+  if (!(doubt > 0)) return `${size} and the sky models do not differ`;
+  return `${size}, ${lead > doubt ? `${inWords(lead / doubt, 2)} times` : 'within'} the doubt of ${inWords(doubt)}`;
+};
+
+/** How far `chosen` leads `other`, how sure that is, and why. */
+export const leadOver = (chosen: AdviceMount, other: AdviceMount, ranking: Ranking): Lead => {
+  const { metric } = ranking;
+  const [a, b] = [metric.of(chosen) ?? Number.NaN, metric.of(other) ?? Number.NaN];
+  const raw = metric.lowWins ? b - a : a - b;
+  const lead = Math.abs(raw) <= ROUNDING * Math.abs(b) ? 0 : raw;
+  const doubt = doubtBetween(chosen, other, metric);
+  const bySize = confidenceOf(lead, doubt);
+  const clauses = caps(chosen, other, ranking);
+  return {
+    over: other.id,
+    confidence: bySize === 'clear' && clauses.length > 0 ? 'likely' : bySize,
+    lead,
+    doubt,
+    unit: metric.unit,
+    why: [sizeWords(lead, doubt, metric.unit), ...clauses, ...remarks(chosen, other)].join('; '),
+  };
+};
+
+const SURENESS: readonly Confidence[] = ['too_close', 'likely', 'clear'];
+
+/** The least sure of all leads; null without any. */
+export const leastSure = (leads: readonly Lead[]): Confidence | null =>
+  SURENESS.find((confidence) => leads.some((lead) => lead.confidence === confidence)) ?? null;
