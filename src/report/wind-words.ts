@@ -1,0 +1,18 @@
+import type { Comparison } from '../shared/index.ts';
+
+const DEFERRAL =
+  'Screening only: whether a roof, rack, tracker or foundation holds is for the local code and a licensed engineer.';
+
+/** True where the output shows any figure or verdict about wind, height or projection. */
+export const showsWind = (c: Comparison): boolean =>
+  c.wind_basis !== null ||
+  c.mounts.some(
+    ({ limits, wind }) =>
+      limits.length > 0 ||
+      wind.highest_edge_m !== null ||
+      wind.roof_projection_m !== null ||
+      wind.velocity_pressure_pa !== null,
+  );
+
+/** The sentence that stands beside every wind figure. */
+export const windDeferral = (c: Comparison): string => c.wind_basis?.deferral ?? DEFERRAL;

@@ -1,0 +1,202 @@
+import { expect, test } from 'vitest';
+import { memoMarkdown } from '../../src/report/index.ts';
+import { stageOrder } from '../../src/report/memo/energy.ts';
+import {
+  EXTRAS,
+  HOSTILE,
+  invented,
+  inventedAlone,
+  inventedBare,
+  inventedBlocked,
+  inventedHostile,
+  inventedWithoutRate,
+  VARIANTS,
+} from './invented.ts';
+
+const memo = (make: () => ReturnType<typeof invented>) => memoMarkdown(make(), EXTRAS);
+const cellsOf = (line: string) =>
+  line.split(/(?<!\\)\|/).slice(1, -1).map((cell) => cell.replaceAll('\u00a0', ' ').trim()); // biome-ignore format: short
+
+/** Tables as rows of cells, header first, rule left out. */
+const tablesOf = (text: string): string[][][] =>
+  text
+    .split('\n\n')
+    .filter((block) => block.startsWith('|'))
+    .map((block) => block.split('\n').map(cellsOf));
+
+test.each(VARIANTS)('every table has the same number of cells in each row: %s', (_, make) => {
+  const tables = tablesOf(memo(make));
+  expect(tables.length).toBeGreaterThanOrEqual(7);
+  for (const rows of tables) {
+    expect(rows.length).toBeGreaterThanOrEqual(3);
+    expect(new Set(rows.map((row) => row.length)).size).toBe(1);
+    expect(rows[1].every((cell) => /^-{3}:?$/.test(cell))).toBe(true);
+  }
+});
+
+test.each(VARIANTS)('nothing unknown prints as null, NaN, undefined or an empty cell: %s', (_, make) => {
+  const text = memo(make);
+  expect(text).not.toMatch(/null|NaN|undefined|Infinity|\[object/);
+  for (const rows of tablesOf(text)) for (const row of rows) expect(row).not.toContain('');
+});
+
+test.each(VARIANTS)(
+  'headings are those of the memo, none comes from a study, and no date is printed: %s',
+  (_, make) => {
+    const text = memo(make);
+    const headings = text.split('\n').filter((line) => /^#{1,6} /.test(line));
+    expect(headings[0]).toMatch(/^# /);
+    expect(headings.slice(1).every((line) => /^#{2,3} [A-Z][A-Za-z ,?]+$/.test(line))).toBe(true);
+    expect(text).not.toMatch(/\b20\d\d-\d\d-\d\d\b/);
+    expect(text.endsWith('\n') && !text.endsWith('\n\n')).toBe(true);
+  },
+);
+
+test('the answer and what would reverse it come before anything else', () => {
+  const text = memo(invented);
+  const places = ['# Orlin Bench', 'CHOOSE Ground rack', 'What would reverse it', '## Results at a glance', 'charts/cost.svg', 'charts/months.svg', '## Site and weather', '## Mounts compared', '## Energy and losses', '## Wind', '## Costs', '## Tracker, or more modules', '## Not counted', '## Doubts', '## Cautions', 'charts/dial.svg', '## Assumptions', '## Inputs'].map((part) => text.indexOf(part));
+  expect(places.every((place) => place >= 0)).toBe(true);
+  expect(places).toEqual([...places].sort((a, b) => a - b));
+}); // biome-ignore format: the outline on one line
+
+test('page one holds one table of results and two charts, and every chart appears once', () => {
+  const text = memo(invented);
+  const glance = text.slice(text.indexOf('## Results at a glance'), text.indexOf('## Objective'));
+  expect(tablesOf(glance)).toHaveLength(1);
+  expect(glance.match(/!\[/g)).toHaveLength(2);
+  for (const { file } of EXTRAS.chartFiles) expect(text.split(`](${file})`)).toHaveLength(2);
+  const withoutCost = { ...EXTRAS, chartFiles: EXTRAS.chartFiles.filter(({ name }) => name !== 'cost') };
+  const bare = memoMarkdown(inventedBare(), withoutCost);
+  expect(bare.indexOf('charts/months.svg')).toBeLessThan(bare.indexOf('charts/irradiation.svg'));
+  expect(bare.indexOf('charts/irradiation.svg')).toBeLessThan(bare.indexOf('## Objective'));
+});
+
+test('the printed light times the printed shares is the printed energy, within their rounding', () => {
+  const c = invented();
+  const table = tablesOf(memo(invented)).find(([head]) => head[0] === 'Share kept')!;
+  const number = (cell: string) => Number(cell.replace(/[*%]/g, '').replaceAll(' ', ''));
+  const row = (name: string) => table.find(([first]) => first === name)!;
+  let compared = 0;
+  for (const [i, mount] of c.mounts.entries()) {
+    const printed = stageOrder(c.mounts).map((name) => row(name)[i + 1]);
+    const shares = printed.filter((cell) => cell !== '—').map((cell) => number(cell) / 100);
+    expect(shares).toHaveLength(mount.stages.length);
+    const product = shares.reduce(
+      (whole, share) => whole * share,
+      number(row('Light on the plane, kWh/m²')[i + 1]),
+    );
+    const energy = number(row('Delivered, kWh/kW')[i + 1]);
+    // Each share is rounded by at most 0.00005 of about 0.95; the light and the energy by 0.05 kWh.
+    const rounding = energy * shares.length * (0.00005 / 0.9) + 0.1;
+    expect(Math.abs(product - energy)).toBeLessThan(rounding);
+    expect(Math.abs(energy - mount.energy_kwh_per_kw)).toBeLessThanOrEqual(0.0501);
+    expect(row('Weakest stage')[i + 1]).toBe(mount.weakest_stage);
+    expect(row(mount.weakest_stage)[i + 1]).toMatch(/^\*\*.*\*\*$/);
+    compared++;
+  }
+  expect(compared).toBe(4);
+});
+
+test('stages that only some mounts have keep their place in the chain', () => {
+  const [ground, , , mast] = invented().mounts;
+  expect(stageOrder([ground, mast]).at(-1)).toBe('drive');
+  const only = (names: string[]) => ({
+    ...ground,
+    stages: names.map((name) => ({ name, efficiency: 1, kwh_per_kw_after: 1, source: '' })),
+  });
+  expect(stageOrder([only(['rows', 'heat', 'conversion']), only(['incidence', 'heat', 'drive', 'conversion'])])).toEqual([
+    'incidence', 'rows', 'heat', 'drive', 'conversion',
+  ]); // biome-ignore format: one chain
+});
+
+test('the month table compares each mount with the plane tilted for that month', () => {
+  const c = invented();
+  const table = tablesOf(memo(invented)).find(([head]) => head[0] === 'kWh/kW·day')!;
+  expect(table).toHaveLength(14);
+  // By hand: January, 31 days.
+  const ground = c.mounts[0].energy_monthly_kwh_per_kw[0] / 31;
+  const plane = c.tilted_for_month[0].kwh_per_kw_day;
+  expect(table[2][2]).toBe(`${ground.toFixed(2)} (${Math.round((ground / plane - 1) * 100)} %)`);
+  expect(memo(invented)).toMatch(
+    /Tracker delivers least in December: 2\.21 kWh\/kW·day, 41\.9 % less than a fixed plane/,
+  );
+});
+
+test('every table or sentence of gains names its reference', () => {
+  for (const make of [invented, inventedBare, inventedWithoutRate]) {
+    const gains = memo(make)
+      .split('\n')
+      .filter((line) => /\bgains?\b|Against/i.test(line));
+    expect(gains.length).toBeGreaterThan(3);
+    // A line that says what break-even needs holds no figure of a gain.
+    for (const line of gains) expect(line).toMatch(/Ground rack|^## |^Break-even needs/);
+  }
+});
+
+test('wind figures carry their basis and the sentence that defers to others', () => {
+  const text = memo(invented);
+  for (const part of [
+    'ASCE 7-16',
+    '51.4 m/s',
+    'exposure C',
+    'Kzt 1,',
+    'Kd 0.85',
+    'Ke 1.',
+    '0.849',
+    '1\u00a0123',
+  ])
+    expect(text).toContain(part);
+  expect(text).toContain('**Screening only: structure belongs to the local code and a licensed engineer.**');
+  const c = invented();
+  const withoutGust = memoMarkdown({ ...c, wind_basis: null }, EXTRAS);
+  expect(withoutGust).toContain('no wind pressure was worked out: not counted');
+  expect(withoutGust).toMatch(/Screening only: .*licensed engineer/);
+  expect(memo(inventedBare)).toContain('Not checked: the study gives no wind');
+});
+
+test('blanks are words, never 0', () => {
+  const bare = memo(inventedBare);
+  expect(bare).toContain('no capital cost is given');
+  expect(bare).not.toMatch(/\| 0(?:\.0+)? \|/);
+  expect(memo(inventedWithoutRate)).toMatch(/Real discount rate not given/);
+  expect(memo(inventedWithoutRate)).toMatch(
+    /\| Tracker \| 27\u00a0692 \| 2\u00a0300 \| not counted \| 0\.091\\\*/,
+  );
+});
+
+test('a blocked study says so at the top', () => {
+  const text = memo(inventedBlocked);
+  expect(text.indexOf('**Blocked:**')).toBeGreaterThan(0);
+  expect(text.indexOf('**Blocked:**')).toBeLessThan(text.indexOf('## Results'));
+  expect(text).toContain('Settle the warnings');
+});
+
+test('one mount alone has no gains to show', () => {
+  const text = memo(inventedAlone);
+  expect(text).not.toMatch(/Against|How the sky model|Tracker, or more/);
+});
+
+test('break-even figures stand beside what was quoted, negative ones too', () => {
+  const c = invented();
+  c.mounts[3].break_even_premium_per_kw = -120.4;
+  const text = memoMarkdown(c, EXTRAS);
+  expect(text).toContain('| Tracker | +400 | +67 | +13.1\u00a0% | +27.9\u00a0% |');
+  expect(text).toContain('| Mast | +1\u00a0500 | -120 |');
+});
+
+test('hostile text is inert everywhere', () => {
+  const text = memo(inventedHostile);
+  expect(HOSTILE).toMatch(/<\/script>.*\n/s);
+  expect(text.split('HYPERLINK').length).toBeGreaterThan(25);
+  // Every `<`, `[`, backtick and `*b*` of the study is escaped; what is left bare is the memo's own.
+  const bare = text.replace(/\\[!-/:-@[-`{-~]/g, '');
+  expect(bare).not.toMatch(/[<>`]/);
+  expect(bare.match(/\[[^\]]*\]/g)).toHaveLength(EXTRAS.chartFiles.length);
+  expect(bare).not.toMatch(/https?:\/\/|[^\P{Cc}\n]|\u202e/u);
+});
+
+test('inputs are listed with their checksums, and the version is named', () => {
+  const text = memo(invented);
+  expect(text).toContain(`| study.yaml | ${EXTRAS.inputs[0].sha256} |`);
+  expect(text).toContain('trackworth 0.0.0-invented');
+});
