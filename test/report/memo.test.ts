@@ -126,7 +126,7 @@ test('every table or sentence of gains names its reference', () => {
   for (const make of [invented, inventedBare, inventedWithoutRate]) {
     const gains = memo(make)
       .split('\n')
-      .filter((line) => /\bgains?\b|Against/i.test(line));
+      .filter((line) => /\b[Gg]ains?\b|Against/.test(line));
     expect(gains.length).toBeGreaterThan(3);
     // A line that says what break-even needs holds no figure of a gain.
     for (const line of gains) expect(line).toMatch(/Ground rack|^## |^Break-even needs/);
