@@ -1,0 +1,198 @@
+/**
+ * The whole calculation, start to finish; no disk, clock or console.
+ *
+ *     study file ─┐
+ *     weather ────┼→ sun → sky → mounts → energy → wind, cost → advice → one Comparison
+ *     survey ─────┘
+ */
+import { type AdviceMount, advise, rankingBasis } from './advice/index.ts';
+import { costOfEnergy, sameEnergy } from './cost/index.ts';
+import { energyUnderInverter } from './energy/index.ts';
+import type { Study } from './inputs/index.ts';
+import { isTracker } from './mounts/index.ts';
+import {
+  type ArraySummary,
+  type Comparison,
+  type HourlyYear,
+  type MountResult,
+  type SameEnergy,
+  type SkyModel,
+  TrackworthError,
+} from './shared/index.ts';
+import { orientationMap, skyOverHours } from './sky/index.ts';
+import { arrayOf } from './study/array.ts';
+import { assumptionsOf } from './study/assumptions.ts';
+import { mountResult, worstMonth } from './study/mount-result.ts';
+import { ALL_MODELS, type MountRun, runMount, type Skies } from './study/mount-run.ts';
+import { notCounted } from './study/not-counted.ts';
+import { type ReadyYear, readyYear } from './study/ready-year.ts';
+import { referenceOf } from './study/reference.ts';
+import { tiltedForMonth } from './study/tilted-for-month.ts';
+import type { RawYear } from './weather/index.ts';
+import { windBasis } from './wind/index.ts';
+
+export const SCHEMA = 'trackworth-comparison-1';
+
+/** Compares every mount of a study over one year of weather. The weather has been read with the study's place and label. */
+export const compareMounts = (study: Study, raw: RawYear): Comparison => {
+  const model = study.sky.model;
+  const array = arrayOf(study.array);
+
+  // weather → sun: the study's clock, what the file lacks, what looks wrong
+  const ready = readyYear(raw, study.weather);
+  const { year, sun } = ready;
+
+  // sky: the light of every hour under each model, and the best fixed plane under the study's own
+  const skies = skiesOf(study, ready);
+  const map = orientationMap(sun, skies[model], year.place.latitudeDeg);
+
+  // mounts → energy: where each points, what it collects and delivers
+  const runs = study.mounts.map((mount) => runMount(mount, map.best, study, ready, array, skies));
+  const reference = referenceOf(study, runs);
+  const facing =
+    reference.geometry.kind === 'fixed-tilt' ? reference.geometry.azimuthDeg : map.best.azimuthDeg;
+  const monthPlanes = tiltedForMonth(sun, skies[model], reference, facing);
+
+  // wind and cost, mount by mount
+  const maximum = Math.max(
+    map.best.irradiationKwhM2,
+    ...runs.filter((r) => !isTracker(r.geometry)).map((r) => r.delivered[model].irradiationKwhM2),
+  );
+  const mounts = runs.map((run) => mountResult(run, reference, study, array, skies, maximum));
+  const fixedInstead = fixedArraysInstead(study, array, runs, reference, mounts);
+
+  // advice
+  const counted = { study, year, sun, sky: skies[model], array, runs, reference };
+  const blanks = notCounted(counted);
+  const adviceInput = {
+    mounts: mounts.map((result, i) => adviceMount(result, runs[i], study, array)),
+    referenceId: reference.mount.id,
+    objective: study.objective,
+    skyModel: model,
+    findings: ready.found.findings,
+    notCounted: blanks,
+    inverterGiven: array.ac_kw !== null,
+    globalOnly: ready.globalOnly,
+    currency: study.finance.currency,
+    realRate: study.finance.realRate,
+    years: study.finance.years,
+    sameEnergy: fixedInstead,
+    tiltedForMonth: monthPlanes,
+  };
+  const basis = rankingBasis(adviceInput);
+  return {
+    schema: SCHEMA,
+    title: study.title,
+    currency: study.finance.currency,
+    reference_id: reference.mount.id,
+    objective: basis.objective,
+    ranked_by: basis.rankedBy,
+    site: {
+      latitude_deg: year.place.latitudeDeg,
+      longitude_deg: year.place.longitudeDeg,
+      elevation_m: year.place.elevationM,
+      utc_offset_h: year.place.utcOffsetH,
+    },
+    weather: weatherSummary(ready),
+    sky_model: model,
+    array,
+    best_orientation: {
+      tilt_deg: map.best.tiltDeg,
+      azimuth_deg: map.best.azimuthDeg,
+      irradiation_kwh_m2: map.best.irradiationKwhM2,
+    },
+    orientation_map: {
+      tilts_deg: [...map.tiltsDeg],
+      azimuths_deg: [...map.azimuthsDeg],
+      irradiation_kwh_m2: map.irradiationKwhM2.map((row) => [...row]),
+    },
+    mounts,
+    tilted_for_month: monthPlanes,
+    comparisons: { same_money: null, same_energy: fixedInstead, same_land: null, own_best: null },
+    finance: { real_rate: study.finance.realRate, years: study.finance.years, ageing: study.finance.ageing },
+    wind_basis: windBasis(study.wind),
+    not_counted: blanks,
+    advice: advise(adviceInput),
+    assumptions: assumptionsOf(counted),
+  };
+};
+
+const skiesOf = (study: Study, { sun, year }: ReadyYear): Skies => {
+  const albedo = study.sky.albedo === 'file' ? albedoOfFile(year) : study.sky.albedo;
+  return Object.fromEntries(
+    ALL_MODELS.map((model) => [model, skyOverHours(sun, year, albedo, model)]),
+  ) as Skies;
+};
+
+const albedoOfFile = (year: HourlyYear): Float64Array => {
+  if (year.albedo) return year.albedo;
+  throw new TrackworthError('input', [
+    {
+      code: 'no-albedo',
+      file: year.source,
+      field: 'sky.albedo',
+      expected: 'a ground reflectance column, since the study says `albedo: file`',
+      found: 'none in the weather file',
+      fix: 'Write a number such as `albedo: 0.2`.',
+    },
+  ]);
+};
+
+/** For each tracker, the array on the reference mount that delivers as much under the same inverter. */
+const fixedArraysInstead = (
+  study: Study,
+  array: ArraySummary,
+  runs: readonly MountRun[],
+  reference: MountRun,
+  mounts: readonly MountResult[],
+): SameEnergy[] =>
+  isTracker(reference.geometry)
+    ? []
+    : mounts
+        .filter((_, i) => isTracker(runs[i].geometry))
+        .map((tracker) =>
+          sameEnergy({
+            tracker,
+            reference: reference.mount,
+            targetKwh: tracker.energy_kwh,
+            energyOfDcKw: (dcKw) =>
+              energyUnderInverter(reference.delivered[study.sky.model].uncappedKwPerKw, dcKw, array.ac_kw),
+            startDcKw: array.dc_kw,
+            moduleKw: array.module_w === null ? null : array.module_w / 1000,
+            moduleAreaM2: array.module_area_m2,
+            inverterKw: array.ac_kw,
+            currency: study.finance.currency,
+          }),
+        );
+
+const adviceMount = (result: MountResult, run: MountRun, study: Study, array: ArraySummary): AdviceMount => ({
+  ...result,
+  by_sky: Object.fromEntries(
+    ALL_MODELS.map((model) => {
+      const { energyKwhPerKw, energyMonthlyKwhPerKw } = run.delivered[model];
+      const cost = costOfEnergy(run.mount.cost, study.finance, array.dc_kw, energyKwhPerKw * array.dc_kw);
+      return [
+        model,
+        {
+          energy_kwh_per_kw: energyKwhPerKw,
+          worst_month_kwh_per_kw_day: worstMonth(energyMonthlyKwhPerKw).kwh_per_kw_day,
+          lcoe_per_kwh: cost.lcoePerKwh,
+        },
+      ];
+    }),
+  ) as Record<SkyModel, AdviceMount['by_sky'][SkyModel]>,
+  downtime_blank: isTracker(run.geometry) && (run.mount.drive?.working ?? null) === null,
+});
+
+const weatherSummary = ({ year, found }: ReadyYear): Comparison['weather'] => ({
+  source: year.source,
+  format: year.format,
+  station: year.station,
+  ghi_kwh_m2: found.annual.ghiKwhM2,
+  dni_kwh_m2: found.annual.dniKwhM2,
+  dhi_kwh_m2: found.annual.dhiKwhM2,
+  ghi_monthly_kwh_m2: [...found.ghiMonthlyKwhM2],
+  time_shift_min: found.timeShiftMin,
+  dropped_night_kwh_m2: found.droppedNightKwhM2,
+  findings: [...found.findings],
+});

@@ -1,0 +1,95 @@
+import { isTracker } from '../mounts/index.ts';
+import type { Assumption } from '../shared/index.ts';
+import { SAMPLES_PER_HOUR, SOLAR_CONSTANT_WM2 } from '../sun/index.ts';
+import { type MountRun, USUAL_HEAT_PER_K } from './mount-run.ts';
+import type { Counted } from './not-counted.ts';
+
+const SKY_SOURCES = {
+  perez: 'Perez et al. 1990, Solar Energy 44, 271',
+  'hay-davies': 'Hay & Davies 1980',
+  reindl: 'Reindl, Beckman & Duffie 1990, Solar Energy 45, 9',
+  isotropic: 'Liu & Jordan 1963; a lower bound for trackers',
+} as const;
+
+const ids = (runs: readonly MountRun[]): string => runs.map((run) => run.mount.id).join(', ');
+
+const arrayHeights = ({ runs }: Counted): Assumption => ({
+  what: 'height of the modules, for the wind that cools them',
+  value: runs.map((run) => `${run.mount.id} ${Number(run.arrayHeightM.toFixed(2))} m`).join(', '),
+  source: 'from the lengths given, else 2 m on the ground and 4 m on a roof (assumption)',
+});
+
+/** Every model, default and convention that the figures rest on, each with its source. */
+export const assumptionsOf = (c: Counted): Assumption[] => {
+  const { study, year, runs } = c;
+  const trackers = runs.filter((run) => isTracker(run.geometry));
+  const list: Assumption[] = [
+    { what: 'sky model', value: study.sky.model, source: SKY_SOURCES[study.sky.model] },
+    {
+      what: 'ground reflectance',
+      value: study.sky.albedo === 'file' ? 'from the weather file' : String(study.sky.albedo),
+      source:
+        study.sky.albedo === 'file' ? 'weather file' : 'the study, else 0.2 (common practice, no source)',
+    },
+    {
+      what: 'sun',
+      value: `${SAMPLES_PER_HOUR} positions over the sunlit part of each hour; solar constant ${SOLAR_CONSTANT_WM2} W/m2`,
+      source: 'VSOP87 leading terms (Bretagnon & Francou 1988); Gueymard 2018',
+    },
+    {
+      what: 'time labels of the weather file',
+      value: `${year.label} of the hour${study.weather.addMinutes ? `, ${study.weather.addMinutes} minutes added by the study` : ''}`,
+      source: study.weather.label ? 'the study' : 'the file format',
+    },
+    {
+      what: 'glass',
+      value: 'Martin & Ruiz, a_r 0.16',
+      source: 'Martin & Ruiz 2001, Sol. Energy Mater. Sol. Cells 70, 25',
+    },
+    ...[...new Set(runs.map((run) => run.chain.heatLoss))].map((loss) => ({
+      what: `cooling of ${ids(runs.filter((run) => run.chain.heatLoss === loss))}`,
+      value: `U0 ${Number(loss.u0.toFixed(2))} W/m2K, U1 ${Number(loss.u1.toFixed(2))} Ws/m3K`,
+      source: loss.source,
+    })),
+    {
+      what: 'change of power with heat',
+      value: `${((study.array.module?.heatPerK ?? USUAL_HEAT_PER_K) * 100).toFixed(2)} %/K`,
+      source:
+        study.array.module?.heatPerK == null
+          ? 'common practice for crystalline silicon, no source'
+          : 'the study',
+    },
+    {
+      what: 'wind at the modules',
+      value: year.windMs
+        ? '10 m wind by the 1/7 power law'
+        : 'still air, since the file has no wind: heat is overstated',
+      source: 'power law, open ground',
+    },
+    arrayHeights(c),
+    {
+      what: 'power against light',
+      value: 'in proportion to light at constant module temperature',
+      source: 'rating at 1000 W/m2; weak-light loss not counted (assumption)',
+    },
+  ];
+  if (runs.some((run) => run.gcr !== null))
+    list.push({
+      what: 'rows',
+      value:
+        'long, level and equal; every row is shaded like one in the middle; loss in proportion to the shaded area',
+      source: 'assumption: strings of modules may lose more, a first row loses nothing',
+    });
+  if (trackers.length > 0)
+    list.push({ what: 'trackers', value: 'point exactly; level ground', source: 'assumption' });
+  if (study.array.given === false)
+    list.push({ what: 'array', value: '1 kW of DC rating', source: 'the study gives no array' });
+  if (study.finance.years !== null)
+    list.push({
+      what: 'discounting',
+      value:
+        'real money; yearly sums at the end of each year, renewals at the end of theirs, capital at year 0; ageing geometric',
+      source: 'present cost over present energy; tax, land rent and a value left at the end are not counted',
+    });
+  return list;
+};
