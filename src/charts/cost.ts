@@ -30,7 +30,14 @@ export const costChart = (comparison: Comparison): Chart => {
   const x = {
     type: 'quantitative',
     scale: { domain: [0, forSpec(top > 0 ? top : 1)], nice: false },
-    axis: { title: unit, grid: true, values: axisValues(top > 0 ? top : 1), labelExpr: GROUPED_AXIS_LABEL },
+    axis: {
+      title: unit,
+      grid: false,
+      ticks: true,
+      tickColor: HAIRLINE,
+      values: axisValues(top > 0 ? top : 1),
+      labelExpr: GROUPED_AXIS_LABEL,
+    },
   };
   const withRates = rows.some((r) => r.likely === null && r.atRates.length > 0);
   return {
@@ -49,7 +56,7 @@ export const costChart = (comparison: Comparison): Chart => {
       height: rows.length * ROW_HEIGHT,
       above: 30,
       below: 56,
-      layers: [...rowGuides(rows), ...rateRanges(rows, x), ...likelyPoints(rows, comparison, x), endTexts(rows, x), names.layer],
+      layers: [...rowGuides(rows, x), ...rateRanges(rows, x), ...likelyPoints(rows, comparison, x), endTexts(rows, x), names.layer],
     }), // biome-ignore format: the layers on one line
   };
 };
@@ -79,14 +86,16 @@ const rateWords = (key: string): string => {
   return Number.isFinite(value) ? `${forSpec(value < 1 ? value * 100 : value)}\u00A0%` : key;
 };
 
-/** A hairline through each row, so that the eye finds the name of a point far to the right. */
-const rowGuides = (rows: readonly CostRow[]): Layer[] => [
+/** A dotted line from each name to its point. */
+const rowGuides = (rows: readonly CostRow[], x: Record<string, unknown>): Layer[] => [
   {
-    data: { values: rows.map((_, row) => ({ row })) },
-    mark: { type: 'rule', color: HAIRLINE, strokeDash: [1, 3] },
-    encoding: { y: rowPosition, x: { value: 0 }, x2: { value: 'width' } },
+    data: { values: rows.filter(hasCost).map((r, row) => ({ row, from: 0, to: forSpec(start(r)) })) },
+    mark: { type: 'rule', color: MUTED, opacity: 0.5, strokeDash: [1, 3] },
+    encoding: { y: rowPosition, x: { field: 'from', ...x }, x2: { field: 'to' } },
   },
 ];
+
+const start = (row: CostRow): number => row.likely ?? Math.min(...row.atRates.map((a) => a.cost));
 
 const rateRanges = (rows: readonly CostRow[], x: Record<string, unknown>): Layer[] => {
   const shown = rows
@@ -159,7 +168,7 @@ const endTexts = (rows: readonly CostRow[], x: Record<string, unknown>): Layer =
       text: valueWords(r),
     })),
     { y: rowPosition, x: { field: 'end', ...x } },
-    { align: 'left', dx: 12, fontWeight: 'bold', stroke: null },
+    { align: 'left', dx: 12, fontWeight: 'bold' },
   );
 
 /** Short, at the point. */

@@ -25,6 +25,8 @@ export const FONT = "Inter, 'Helvetica Neue', Arial, sans-serif";
 export const LABEL_SIZE = 12;
 export const LINE_HEIGHT = 15;
 
+/** Vega leaves some air over a title itself. */
+const TOP_MARGIN = 12;
 const TITLE_SIZE = 16;
 const TITLE_LINE = 21;
 const SUBTITLE_SIZE = 12;
@@ -66,7 +68,7 @@ export const frame = (plot: Plot): VegaLiteSpec => {
     width: plotWidth(plot.left, plot.right),
     height: plot.height,
     autosize: { type: 'none' },
-    padding: { left: plot.left, right: plot.right, top: MARGIN + head + plot.above, bottom: plot.below },
+    padding: { left: plot.left, right: plot.right, top: TOP_MARGIN + head + plot.above, bottom: plot.below },
     title: {
       text: title,
       subtitle,
@@ -98,6 +100,7 @@ export const frame = (plot: Plot): VegaLiteSpec => {
         domain: false,
         ticks: false,
         labelPadding: 6,
+        labelFlush: false,
       },
       text: { fontSize: LABEL_SIZE, color: INK, lineHeight: LINE_HEIGHT, baseline: 'middle' },
     },

@@ -5,6 +5,7 @@ import type { Chart } from './frame.ts';
 import { irradiationChart } from './irradiation.ts';
 import { lossesChart } from './losses.ts';
 import { monthsChart } from './months.ts';
+import { orientationChart } from './orientation.ts';
 
 export { type FontFiles, type FontMetrics, prepareFont } from './font.ts';
 export type { Chart, VegaLiteSpec } from './frame.ts';
@@ -18,5 +19,6 @@ export const chartSpecs = (comparison: Comparison): Chart[] => [
   irradiationChart(comparison),
   monthsChart(comparison),
   costChart(comparison),
+  orientationChart(comparison),
   lossesChart(comparison),
 ];

@@ -73,8 +73,7 @@ export const lossesChart = (comparison: Comparison): Chart => {
     altText,
     spec: frame({
       title,
-      subtitle:
-        'What each stage takes on the way from light to delivered energy, kWh per kW a year. All bars on one scale; “+” marks a gain.',
+      subtitle: howToRead(losses.flat()),
       altText,
       left,
       right: MARGIN,
@@ -86,6 +85,17 @@ export const lossesChart = (comparison: Comparison): Chart => {
   };
 };
 
+/** Signs are explained only where they occur. */
+const howToRead = (losses: readonly StageLoss[]): string =>
+  [
+    'What each stage takes on the way from light to delivered energy, kWh per kW a year, all on one scale.',
+    losses.some((l) => l.taken === null) ? 'A dash: no such stage is counted.' : '',
+    losses.some((l) => (l.taken ?? 0) < -0.5) ? 'A plus: the stage gives.' : '',
+  ]
+    .filter((part) => part !== '')
+    .join(' ');
+
+/** Stages in the order of the chain, those of every mount merged. */
 const stageOrder = (mounts: readonly MountResult[]): string[] => {
   const order: string[] = [];
   for (const mount of mounts) {
@@ -126,7 +136,7 @@ const panel = (mount: MountResult, losses: readonly StageLoss[], place: Place): 
   const rows = losses.map(({ stage, taken }, s) => {
     const y = y0 + (s + 0.5) * ROW;
     const end = x0 + (taken ?? 0) * pxPerUnit;
-    return { stage, mount: labelOf(mount), taken_kwh_per_kw: taken === null ? null : forSpec(taken), y, top: y - BAR_THICK / 2, bottom: y + BAR_THICK / 2, x: forSpec(x0), x2: forSpec(end), text: taken === null ? 'not counted' : taken < -0.5 ? `+${whole(-taken)}` : whole(Math.abs(taken)) };
+    return { stage, mount: labelOf(mount), taken_kwh_per_kw: taken === null ? null : forSpec(taken), y, top: y - BAR_THICK / 2, bottom: y + BAR_THICK / 2, x: forSpec(x0), x2: forSpec(end), text: taken === null ? '\u2013' : taken < -0.5 ? `+${whole(-taken)}` : whole(Math.abs(taken)) };
   }); // biome-ignore format: one row
   const name = wrap(labelOf(mount), Math.min(place.columnWidth, 300) - 14, LABEL_SIZE, 2, true);
   const counted = rows.filter((r) => r.taken_kwh_per_kw !== null);
@@ -145,7 +155,7 @@ const panel = (mount: MountResult, losses: readonly StageLoss[], place: Place): 
     },
     text(counted.filter((r) => !r.text.startsWith('+')), 'left', 5),
     text(counted.filter((r) => r.text.startsWith('+')), 'right', -5),
-    text(rows.filter((r) => r.taken_kwh_per_kw === null), 'left', 5, { color: MUTED, fontStyle: 'italic' }),
+    text(rows.filter((r) => r.taken_kwh_per_kw === null), 'left', 5, { color: MUTED }),
     {
       data: { values: [{ mount: labelOf(mount) }] },
       mark: { type: 'rule', color: HAIRLINE },

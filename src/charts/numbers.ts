@@ -23,10 +23,11 @@ export const percentSize = (fraction: number): string => {
   return `${size < 9.95 ? fixed(size, 1) : whole(size)}${NARROW_GAP}%`;
 };
 
-/** `0.109`, `12.3`, `1 240`: money per kWh in three significant digits. */
+/** `0.109`, `12.3`, `1 240`: money per kWh to a thousandth, in three significant digits where that says more or is enough. */
 export const money = (x: number): string => {
   const size = Math.abs(x);
   if (size >= 100) return whole(x);
+  if (size >= 0.01 && size < 1) return fixed(x, 3);
   const decimals = size === 0 ? 0 : Math.min(8, Math.max(0, 2 - Math.floor(Math.log10(size))));
   return fixed(x, decimals);
 };

@@ -24,10 +24,11 @@ export const textWidth = (text: string, fontSize: number, bold = false): number 
   return ems * fontSize * (bold ? BOLD : 1);
 };
 
-/** Control, line-break, direction-override and unpaired surrogate characters: not drawable, or forbidden in XML. */
-// biome-ignore lint/suspicious/noControlCharactersInRegex: these are what it removes
-const UNDRAWABLE =
-  /[\u0000-\u001F\u007F-\u009F\u200B-\u200F\u2028-\u202E\u2060-\u206F\uFEFF\uFFFE\uFFFF]|\p{Cs}/gu;
+/**
+ * Control (Cc), direction-override and zero-width (Cf), line-break (Zl, Zp), unpaired surrogate (Cs) and unassigned
+ * (Cn) characters: not drawable, or forbidden in XML.
+ */
+const UNDRAWABLE = /[\p{Cc}\p{Cf}\p{Zl}\p{Zp}\p{Cs}\p{Cn}]/gu;
 
 /** A user's text as one line: what cannot be drawn becomes a space, runs of space become one. */
 export const oneLine = (text: string): string => text.replace(UNDRAWABLE, ' ').replace(/\s+/g, ' ').trim();
