@@ -25,12 +25,15 @@ const EXAMPLES: Record<string, string> = {
 };
 
 const groupFault = (path: Path, raw: unknown, keys: readonly string[]): Fault => {
-  const name = String(path.at(-1) ?? '');
+  const last = path.at(-1);
   const glued = typeof raw === 'string' ? /^(\w+):(\S.*)$/.exec(raw) : null;
   const fix = glued
     ? `Put a space after the colon: ${glued[1]}: ${glued[2]}.`
-    : `Write for example ${EXAMPLES[name] ?? `{ ${keys[0]}: ... }`}.`;
-  const expected = keys.length === 0 ? 'a group of keys' : `a group with the keys ${keys.join(', ')}`;
+    : `Write for example ${typeof last === 'number' && path.length === 2 ? '{ id: ground, kind: fixed-tilt }' : (EXAMPLES[String(last)] ?? `{ ${keys[0]}: ... }`)}.`;
+  const expected =
+    keys.length === 0
+      ? 'a group of keys'
+      : `a group with the key${keys.length === 1 ? '' : 's'} ${keys.join(', ')}`;
   return { code: raw === undefined ? 'missing-key' : 'wrong-type', path, expected, found: found(raw), fix };
 };
 
@@ -58,7 +61,8 @@ const faultsOf = (
     }
     if (issue.code === 'custom') {
       const { code, expected, fix } = issue.params as { code: string; expected: string; fix: string };
-      return [{ code, path, expected, found: found(here), fix }];
+      const advice = code === 'missing-key' ? `Add for example ${String(issue.path.at(-1))}: ${fix}.` : fix;
+      return [{ code, path, expected, found: found(here), fix: advice }];
     }
     if (issue.code === 'invalid_union') {
       // A column is a name or a group: judge it by the form that was tried.

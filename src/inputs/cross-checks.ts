@@ -55,7 +55,7 @@ const lateRenewals = (raw: unknown, mounts: readonly unknown[]): Fault[] => {
     const renewals = rawAt(mount, ['cost', 'renewals']);
     return (Array.isArray(renewals) ? renewals : []).flatMap((renewal, j): Fault[] => {
       const year = asWhole(rawAt(renewal, ['year']));
-      if (!(year > years)) return [];
+      if (!Number.isInteger(year) || !(year > years)) return [];
       return [
         {
           code: 'late-renewal',
@@ -73,7 +73,7 @@ const reference = (raw: unknown, mounts: readonly unknown[]): Fault[] => {
   const given = rawAt(raw, ['compare_with']);
   const id = idOf({ id: given });
   if (id === null || id === '') return [];
-  const ids = mounts.map(idOf).filter((other) => other !== null);
+  const ids = [...new Set(mounts.map(idOf))].filter((other) => other !== null);
   const path = ['compare_with'];
   const kind = rawAt(
     mounts.find((mount) => idOf(mount) === id),

@@ -28,7 +28,8 @@ export interface FieldText {
 
 /**
  * One field of a study: `read` takes the raw value to trackworth's own unit or throws a Refusal. The problem's
- * words travel in the issue's `params`, since only the caller knows file and line.
+ * words travel in the issue's `params`, since only the caller knows file, line and key; the `fix` of a missing value is
+ * the example alone.
  */
 export const field = <T>(text: FieldText, read: (raw: unknown) => T) => {
   const { description, example, expected, form } = text;
@@ -39,8 +40,7 @@ export const field = <T>(text: FieldText, read: (raw: unknown) => T) => {
         context.issues.push({ code: 'custom', input: raw, params });
         return z.NEVER;
       };
-      if (raw === undefined)
-        return refuse({ code: 'missing-key', expected, fix: `Write it, for example ${example}.` });
+      if (raw === undefined) return refuse({ code: 'missing-key', expected, fix: example });
       try {
         return read(raw);
       } catch (trouble) {

@@ -15,7 +15,7 @@ export const readHeat = (raw: unknown): number => {
   if (typeof raw === 'number')
     throw new Refusal(
       EXPECTED,
-      `A bare number may be per cent or a fraction; write ${raw} %/K or ${raw} /K.`,
+      `A bare number may be per cent or a fraction, a hundredfold apart; write its unit, as in ${EXAMPLE} or -0.0034 /K.`,
     );
   const parts = typeof raw === 'string' ? NUMBER_AND_REST.exec(plainText(raw)) : null;
   const unit = parts ? UNIT.exec(parts[2]) : null;

@@ -17,7 +17,7 @@ const asPercent = (x: number): string => `${Number((x * 100).toPrecision(12))} %
 
 /** `6 %`, `0.06` or `0.5 %/yr` to a fraction. A bare number above 1 can only be meant as per cent, so it is refused. */
 export const readShare = (raw: unknown, { what, range, example }: ShareRule): number => {
-  const expected = `${what}${rangeWords(range, asPercent)}`;
+  const expected = `${what},${rangeWords(range, asPercent)}`;
   const [amount, written] = numberAndRest(raw, expected, example);
   if (written === '' && amount > 1)
     throw new Refusal(expected, `Write ${amount} % if per cent is meant; a bare number is a fraction of 1.`);
@@ -39,7 +39,7 @@ export const share = (rule: ShareRule) =>
     {
       description: rule.description,
       example: rule.example,
-      expected: `${rule.what}${rangeWords(rule.range, asPercent)}`,
+      expected: `${rule.what},${rangeWords(rule.range, asPercent)}`,
       form: numberOrText(rule.range),
     },
     (raw) => readShare(raw, rule),
@@ -47,7 +47,7 @@ export const share = (rule: ShareRule) =>
 
 /** A share, or the one word given. */
 export const shareOr = <const W extends string>(rule: ShareRule, word: W) => {
-  const expected = `${rule.what}${rangeWords(rule.range, asPercent)}, or ${word}`;
+  const expected = `${rule.what},${rangeWords(rule.range, asPercent)}, or ${word}`;
   const { anyOf } = numberOrText(rule.range) as { anyOf: object[] };
   const form = { anyOf: [...anyOf, { const: word }] };
   return field(
