@@ -9,6 +9,8 @@ const LEAST_COSINE = Math.cos(87 * DEG);
 const EDGE_HOURS = 2;
 
 type Component = 'ghi' | 'dni' | 'dhi';
+type Columns = Record<Component, Float64Array>;
+type Count = Record<'night' | 'edge' | 'derived' | 'negative' | 'least', number>;
 const COMPONENTS: readonly Component[] = ['ghi', 'dni', 'dhi'];
 
 /**
@@ -25,20 +27,13 @@ export const fillByClosure = (raw: RawYear, sun: SunHours): HourlyYear => {
   const problems = new Problems(raw.source);
   checkComponents(raw, problems);
   const columns = { ghi: raw.ghi.slice(), dni: raw.dni.slice(), dhi: raw.dhi.slice() };
-  const count = { night: 0, edge: 0, derived: 0, negative: 0, least: 0 };
+  const count: Count = { night: 0, edge: 0, derived: 0, negative: 0, least: 0 };
   const given = COMPONENTS.filter((name) => raw.origin[name] !== 'missing');
   const unfilled: number[] = [];
   for (let h = 0; h < HOURS; h++) {
-    const missing = given.filter((name) => Number.isNaN(columns[name][h]));
-    if (missing.length > 0) {
-      const dark = sun.sunlit[h] === 0;
-      if (dark || (missing.length === given.length && nearNight(sun, h))) {
-        count[dark ? 'night' : 'edge']++;
-        for (const name of missing) columns[name][h] = 0;
-      } else if (given.length < 3 || missing.length > 1) {
-        unfilled.push(h);
-        continue;
-      }
+    if (!settleMissing(columns, given, h, sun, count)) {
+      unfilled.push(h);
+      continue;
     }
     for (const name of given) clampNegative(columns[name], h, count);
     if (given.length > 1) count.derived += derive(columns, h, sun);
@@ -57,12 +52,30 @@ export const fillByClosure = (raw: RawYear, sun: SunHours): HourlyYear => {
   };
 };
 
+/** Sets to 0 what is missing at night; false where it is day and too little is there to derive the rest from. */
+const settleMissing = (
+  columns: Columns,
+  given: readonly Component[],
+  h: number,
+  sun: SunHours,
+  count: Count,
+): boolean => {
+  const missing = given.filter((name) => Number.isNaN(columns[name][h]));
+  if (missing.length === 0) return true;
+  const dark = sun.sunlit[h] === 0;
+  if (!dark && !(missing.length === given.length && nearNight(sun, h)))
+    return given.length === 3 && missing.length === 1;
+  count[dark ? 'night' : 'edge']++;
+  for (const name of missing) columns[name][h] = 0;
+  return true;
+};
+
 const nearNight = (sun: SunHours, h: number): boolean => {
   for (let k = -EDGE_HOURS; k <= EDGE_HOURS; k++) if (sun.sunlit[(h + k + HOURS) % HOURS] === 0) return true;
   return false;
 };
 
-const clampNegative = (column: Float64Array, h: number, count: { negative: number; least: number }): void => {
+const clampNegative = (column: Float64Array, h: number, count: Count): void => {
   if (!(column[h] < 0)) return;
   count.negative++;
   count.least = Math.min(count.least, column[h]);
@@ -70,7 +83,7 @@ const clampNegative = (column: Float64Array, h: number, count: { negative: numbe
 };
 
 /** Fills the one component that is NaN in hour `h`; returns 1 where it did. */
-const derive = (c: Record<Component, Float64Array>, h: number, sun: SunHours): number => {
+const derive = (c: Columns, h: number, sun: SunHours): number => {
   const cosine = sun.cosZenith[h];
   if (Number.isNaN(c.ghi[h])) c.ghi[h] = c.dhi[h] + c.dni[h] * cosine;
   else if (Number.isNaN(c.dhi[h])) c.dhi[h] = Math.max(0, c.ghi[h] - c.dni[h] * cosine);
@@ -104,10 +117,7 @@ const reportUnfilled = (raw: RawYear, hours: readonly number[], problems: Proble
     });
 };
 
-const notesOn = (
-  count: { night: number; edge: number; derived: number; negative: number; least: number },
-  given: readonly Component[],
-): Finding[] => {
+const notesOn = (count: Count, given: readonly Component[]): Finding[] => {
   const notes: Finding[] = [];
   const note = (code: string, severity: Finding['severity'], text: string) =>
     notes.push({ code, severity, text, fix: '' });

@@ -13,7 +13,10 @@
  * `WeatherFormat` in `src/shared/hourly-year.ts`, write a small writer under `test/support/` and read its output back.
  */
 
+export { BLOCKING_SHIFT_MIN } from './clock.ts';
+export type { Closure } from './closure.ts';
 export { fillByClosure } from './fill.ts';
+export { type WeatherFindings, weatherFindings } from './findings.ts';
 export type { PartialPlace, RawYear } from './raw-year.ts';
 export { readWeather, type WeatherInput } from './read.ts';
 export type * from './spec.ts';
