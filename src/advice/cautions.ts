@@ -5,7 +5,7 @@ const ALWAYS = [
   'Electricity: modules are live whenever light falls on them. Isolate and test before touching; wiring belongs to a ' +
     'licensed person under the local code.',
   'Lifting: a module is a heavy sail. Carry it with two people, never in wind, and use a machine for poles and long beams.',
-  `Wind: ${DEFERRAL}`,
+  DEFERRAL,
   'Structure: roof capacity, attachments, foundations, frost, snow and uplift are for a licensed engineer, and permits ' +
     'for the local authority.',
   'Yield: these are expected values from a typical year; no yield is guaranteed.',

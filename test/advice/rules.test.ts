@@ -197,7 +197,7 @@ test('an objective of energy or of the worst month is followed, and may be clear
 });
 
 test('equal mounts are too close to call and the reference stands first', () => {
-  const result = advise(study([ground, tracker({ cost: 0.109 })], { referenceId: 'ground' }));
+  const result = advise(study([tracker({ cost: 0.109 }), ground], { referenceId: 'ground' }));
   expect([result.choice, result.confidence]).toEqual(['ground', 'too_close']);
   expect(result.headline).toContain('ground and tracker are equal in cost per kWh');
 });

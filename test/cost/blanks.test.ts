@@ -106,3 +106,12 @@ test('numbers in sentences keep three digits or all whole ones, with spaced thou
   ];
   for (const [x, words] of rows) expect(inWords(x)).toBe(words);
 });
+
+test('a renewal in the last year is paid and one after the life is not', () => {
+  const cost = { ...BLANK, capitalPerKw: 1000, upkeep: 0 };
+  const at = (year: number) =>
+    costOfEnergy({ ...cost, renewals: [{ what: 'drive', year, cost: 500 }] }, finance, 2, 3000).lcoePerKwh;
+  const none = costOfEnergy(cost, finance, 2, 3000).lcoePerKwh;
+  expect(at(20)).toBeGreaterThan(none ?? Number.NaN);
+  expect(at(21)).toBe(none);
+});

@@ -92,3 +92,9 @@ test('the answer reaches the target and one module fewer does not', () => {
     ),
   );
 });
+
+test('whole modules that fill the search exactly are not lost to rounding', () => {
+  // 2.5 x 0.12 kW / 0.1 kW is 2.9999999999999996 in floating point
+  const found = sameEnergy(question({ inverterKw: 0.12, startDcKw: 0.2, moduleKw: 0.1, targetKwh: 440 }));
+  expect(found).toMatchObject({ reachable: true, modules: 3 });
+});

@@ -92,6 +92,11 @@ test('below 15 ft the pressure is that of 15 ft', () => {
   );
 });
 
+test('from the gradient height up the coefficient is 2.01 in every exposure', () => {
+  for (const exposure of ['B', 'C', 'D'] as const)
+    for (const heightM of [365.76, 400]) expect(exposureCoefficient(exposure, heightM)).toBeCloseTo(2.01, 12);
+});
+
 test('open water presses more than open ground, and that more than suburbs', () => {
   fc.assert(
     fc.property(fc.double({ min: 0, max: 200, noNaN: true }), (heightM) => {
