@@ -1,7 +1,7 @@
 import type { Comparison } from '../shared/index.ts';
 import { outlines, sampleGrid, withinCircle } from './contours.ts';
 import type { Layer } from './frame.ts';
-import { dialColor, INK, PAPER } from './palette.ts';
+import { dialColor, INK } from './palette.ts';
 import { type DialPoint, polarField } from './polar-field.ts';
 
 /** Pixels from the centre to the rim, which stands for 90 degrees of tilt. */
@@ -46,10 +46,16 @@ export const dialMap = (comparison: Comparison): DialMap => {
     shades: SHADES.toReversed()
       .map((loss, i) => ({
         color: dialColor((loss + (SHADES[SHADES.length - 2 - i] ?? 0)) / 2),
-        outlines: outlines(grid, peak * (1 - loss)),
+        outlines: outlines(grid, peak * (1 - loss)).map((line) => line.map(ontoDial)),
       }))
       .filter((shade) => shade.outlines.length > 0),
   };
+};
+
+/** Draws what lies past the rim in onto the rim: an outline keeps its shape inside and gains no area outside. */
+const ontoDial = (p: DialPoint): DialPoint => {
+  const shrink = RIM_DEG / Math.max(RIM_DEG, Math.hypot(...p));
+  return [p[0] * shrink, p[1] * shrink];
 };
 
 /** The field, its tilt rings and spokes, the contour lines and the rim. */
@@ -86,8 +92,6 @@ export const mapLayers = (map: DialMap): Layer[] => [
     projection: DIAL_PROJECTION,
     mark: { type: 'geoshape', filled: false, stroke: INK, strokeWidth: 1, strokeJoin: 'round' },
   },
-  // Shades reach past the rim: paper covers what lies outside.
-  disc(DIAL_RADIUS, DIAL_RADIUS + 3 * STEP_DEG * PX_PER_DEG + 70, { color: PAPER }),
   disc(DIAL_RADIUS, DIAL_RADIUS + 1.5, { color: INK }),
   {
     data: { values: Array.from({ length: 12 }, (_, i) => ({ azimuth: i * 30, ...rimTick(i * 30) })) },

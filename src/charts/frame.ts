@@ -25,8 +25,6 @@ export const FONT = "Inter, 'Helvetica Neue', Arial, sans-serif";
 export const LABEL_SIZE = 12;
 export const LINE_HEIGHT = 15;
 
-/** Vega leaves some air over a title itself. */
-const TOP_MARGIN = 12;
 const TITLE_SIZE = 16;
 const TITLE_LINE = 21;
 const SUBTITLE_SIZE = 12;
@@ -68,14 +66,14 @@ export const frame = (plot: Plot): VegaLiteSpec => {
     width: plotWidth(plot.left, plot.right),
     height: plot.height,
     autosize: { type: 'none' },
-    padding: { left: plot.left, right: plot.right, top: TOP_MARGIN + head + plot.above, bottom: plot.below },
+    padding: { left: plot.left, right: plot.right, top: MARGIN + head + plot.above, bottom: plot.below },
     title: {
       text: title,
       subtitle,
       anchor: 'start',
       frame: 'group',
       dx: MARGIN - plot.left,
-      offset: plot.above,
+      offset: 0,
       fontSize: TITLE_SIZE,
       lineHeight: TITLE_LINE,
       color: INK,
@@ -84,7 +82,7 @@ export const frame = (plot: Plot): VegaLiteSpec => {
       subtitleColor: MUTED,
       subtitlePadding: SUBTITLE_GAP,
     },
-    layer: plot.layers,
+    layer: [ceiling(plot.above), ...plot.layers],
     ...plot.rest,
     config: {
       font: FONT,
@@ -106,6 +104,16 @@ export const frame = (plot: Plot): VegaLiteSpec => {
     },
   };
 };
+
+/**
+ * An invisible rule above the plot. Vega stacks the title on the topmost mark: with the rule in place that is always
+ * here, whatever a chart prints above its plot.
+ */
+const ceiling = (above: number): Layer => ({
+  data: { values: [{}] },
+  mark: { type: 'rule', opacity: 0 },
+  encoding: { x: { value: 0 }, x2: { value: 1 }, y: { value: -above }, y2: { value: -above } },
+});
 
 /** Numbers on axes as everywhere: `1 500`, without the comma of d3. */
 export const GROUPED_AXIS_LABEL = "replace(format(datum.value, ',~f'), /,/g, '\u00A0')";

@@ -34,7 +34,7 @@ export const orientationChart = (comparison: Comparison): Chart => {
   const map = dialMap(comparison);
   const planes = markedPlanes(comparison);
   const title = headline(comparison);
-  const finding = `${title}. ${flatness(map.contours)}`;
+  const finding = `${title}.${freedom(comparison, map.contours)}`;
   const altText = `Dial of yearly light on fixed planes: compass on the rim with north up, tilt from flat in the centre to upright at the rim, contour lines of loss. ${finding} ${planes.map((p) => `${p.name}: ${p.details.join(', ')}`).join('; ')}.`;
   const labels = placeLabels(planes);
   const avoid = [
@@ -224,9 +224,9 @@ const haloed = (text: string, p: DialPoint, fontSize: number): Layer[] => [
   textLayer([{ text }], at(p), { fontSize }),
 ];
 
-/** Distance in pixels with words wider than high: what is beside a label is nearer than what is above it. */
+/** How clear of its neighbours a short label is; from 1 on they do not touch. Words are wider than high. */
 const clearance = (p: DialPoint, others: readonly DialPoint[]): number =>
-  Math.min(60, ...others.map((o) => Math.hypot((p[0] - o[0]) / 2.2, p[1] - o[1])));
+  Math.min(2, ...others.map((o) => Math.max(Math.abs(p[0] - o[0]) / 44, Math.abs(p[1] - o[1]) / 17)));
 
 /** Tilt along the spoke that is freest of marks. Pushes what it places onto `taken`. */
 const tiltLabels = (taken: DialPoint[]): Layer[] => {
@@ -240,22 +240,20 @@ const tiltLabels = (taken: DialPoint[]): Layer[] => {
   return layers;
 };
 
-/** Each contour is named at the vertex that is freest of marks, leaders and earlier labels. */
-const contourLabels = (contours: readonly LossContour[], taken: DialPoint[]): Layer[] => {
-  const rim = DIAL_RADIUS - 8;
-  return contours.toReversed().flatMap(({ loss, lines }) => {
-    const text = `loses ${whole(loss * 100)}\u00A0%`;
+/** Each contour is named at the vertex that is freest of marks, leaders and earlier labels; the outermost has the verb. */
+const contourLabels = (contours: readonly LossContour[], taken: DialPoint[]): Layer[] =>
+  contours.toReversed().flatMap(({ loss, lines }, i) => {
+    const text = `${i === 0 ? 'loses ' : ''}${whole(loss * 100)}\u00A0%`;
     const half = textWidth(text, 11) / 2;
     const inside = lines
       .flat()
       .map(toPixels)
-      .filter(([x, y]) => Math.hypot(Math.abs(x - DIAL_RADIUS) + half, y - DIAL_RADIUS) < rim);
+      .filter(([x, y]) => Math.hypot(Math.abs(x - DIAL_RADIUS) + half, y - DIAL_RADIUS) < DIAL_RADIUS - 8);
     if (inside.length === 0) return [];
     const place = highest(inside, (p) => clearance(p, taken));
     taken.push(place);
     return haloed(text, place, 11);
   });
-};
 
 const headline = (comparison: Comparison): string => {
   const { tilt_deg, azimuth_deg } = comparison.best_orientation;
@@ -268,10 +266,17 @@ const headline = (comparison: Comparison): string => {
   return `${best}; ${known.length > 1 ? 'every fixed mount' : named(worst)} keeps all but 0.5 % of its light`;
 };
 
-/** How much freedom there is: the ways that the 5 % contour lets a plane lean. */
-const flatness = (contours: readonly LossContour[]): string => {
+/** How much freedom there is: the tilts within the 5 % contour. */
+const freedom = (
+  { orientation_map, best_orientation }: Comparison,
+  contours: readonly LossContour[],
+): string => {
   const line = contours.find((c) => c.loss === 0.05)?.lines.flat() ?? [];
-  if (line.length === 0) return 'Every plane keeps within 5 % of it, or none is near it.';
+  if (line.length === 0) return '';
   const tilts = line.map(([x, y]) => Math.hypot(x, y));
-  return `Planes that lose 5 % are tilted between ${whole(Math.min(...tilts))}° and ${whole(Math.max(...tilts))}°.`;
+  const [least, most] = [whole(Math.min(...tilts)), whole(Math.max(...tilts))];
+  const flatKeeps = orientation_map.irradiation_kwh_m2[0][0] / best_orientation.irradiation_kwh_m2;
+  return flatKeeps >= 0.95
+    ? ` Up to ${least}° of tilt, whichever way a plane faces, it stays within 5 % of that.`
+    : ` Tilts from ${least}° to ${most}° can stay within 5 % of that.`;
 };

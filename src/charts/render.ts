@@ -1,3 +1,4 @@
+import type { LoggerInterface } from 'vega';
 import type { FontMetrics } from './font.ts';
 import type { VegaLiteSpec } from './frame.ts';
 
@@ -48,13 +49,19 @@ const draw = async (spec: VegaLiteSpec, font: FontMetrics): Promise<string> => {
 
 const isBold = (weight: TextItem['fontWeight']): boolean => weight === 'bold' || Number(weight) >= 600;
 
-const collector = (warnings: string[]) => {
+const collector = (warnings: string[]): LoggerInterface => {
+  // Setting a level gives the logger back, asking for it gives the level: warnings and up.
+  function level(_: number): LoggerInterface;
+  function level(): number;
+  function level(set?: number): number | LoggerInterface {
+    return set === undefined ? 2 : logger;
+  }
   const keep = (...parts: readonly unknown[]) => {
     warnings.push(parts.map(String).join(' '));
     return logger;
   };
-  const logger = {
-    level: (_?: number): any => logger,
+  const logger: LoggerInterface = {
+    level,
     error: keep,
     warn: keep,
     info: () => logger,
