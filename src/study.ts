@@ -1,5 +1,5 @@
 /**
- * The whole calculation, start to finish; no disk, clock or console.
+ * The whole calculation, start to finish; pure: no disk, no clock, no screen.
  *
  *     study file ─┐
  *     weather ────┼→ sun → sky → mounts → energy → wind, cost → advice → one Comparison
