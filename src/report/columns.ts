@@ -40,11 +40,15 @@ const wordsOf = (text: string, columns: number): string[] =>
     return [...pieces, rest];
   });
 
+/** Spaces inside a number, and before its per cent sign, do not end a line. */
+const glued = (text: string): string => text.replace(/(?<=\d) (?=%|\d{3}(?!\d))/g, GLUE);
+const GLUE = '\u00a0';
+
 /** Breaks one line of text at spaces so that none exceeds `columns` (at least 2). */
 export const wrap = (text: string, columns: number): string[] => {
   const lines: string[] = [];
   let line: string | null = null;
-  for (const word of wordsOf(text, columns)) {
+  for (const word of wordsOf(glued(text), columns)) {
     if (line === null) line = word;
     else if (columnsOf(line) + 1 + columnsOf(word) <= columns) line += ` ${word}`;
     else {
@@ -52,7 +56,8 @@ export const wrap = (text: string, columns: number): string[] => {
       line = word;
     }
   }
-  return line === null ? lines : [...lines, line];
+  if (line !== null) lines.push(line);
+  return lines.map((whole) => whole.replaceAll(GLUE, ' ').trimEnd());
 };
 
 /** A paragraph behind a name in a left column: `Doubt     the text goes on\n          and on`. */

@@ -1,5 +1,7 @@
 import type { Comparison, MountResult } from '../shared/index.ts';
 import { decimalsFor, formatNumber, formatPercent, UNKNOWN } from './numbers.ts';
+import { listed } from './plain-text.ts';
+import { nameOf } from './words.ts';
 
 /** Marks a cost per kWh that rests on part of the costs only. */
 export const INCOMPLETE_MARK = '*';
@@ -47,11 +49,13 @@ export const hasCapital = (c: Comparison): boolean => c.mounts.some((mount) => m
 
 /** What is lacking before costs per kWh can be compared; null where nothing is. */
 export const costLack = (c: Comparison): string | null => {
-  if (!hasCapital(c)) return 'no capital cost is given, so the mounts are compared by energy only';
-  if (lcoeColumns(c).length === 0)
-    return c.finance.years === null
-      ? 'no years of life are given, so there is no cost per kWh'
-      : 'the costs given do not make a cost per kWh';
+  const unpriced = c.mounts.filter((mount) => mount.capital_per_kw === null).map((mount) => nameOf(c, mount));
+  const lacking = [
+    ...(c.finance.real_rate === null ? ['finance.real_rate'] : []),
+    ...(c.finance.years === null ? ['finance.years'] : []),
+    ...(unpriced.length > 0 ? [`the capital of ${listed(unpriced)}`] : []),
+  ];
+  if (lacking.length > 0) return `the study lacks ${listed(lacking)}, so costs are not fully weighed`;
   return c.currency === null ? 'the study does not name its currency' : null;
 };
 

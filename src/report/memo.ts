@@ -1,6 +1,6 @@
 import type { Comparison } from '../shared/index.ts';
 import type { ReportExtras } from './extras.ts';
-import { answer } from './memo/answer.ts';
+import { answer, reasons } from './memo/answer.ts';
 import { appendix, cautions, notCountedAndDoubts } from './memo/closing.ts';
 import { cost, skySpread, trackerOrModules } from './memo/cost.ts';
 import { energy } from './memo/energy.ts';
@@ -26,6 +26,7 @@ export const memoMarkdown = (c: Comparison, extras: ReportExtras): string => {
   const memo = blocks(
     answer(c),
     overview(c, first),
+    reasons(c),
     siteAndWeather(c),
     mountsCompared(c),
     energy(c),

@@ -1,11 +1,12 @@
-import type { Comparison, Finding } from '../shared/index.ts';
+import type { Comparison } from '../shared/index.ts';
 import { columnsOf, hanging, shorten, wrap } from './columns.ts';
 import { costLack } from './cost-columns.ts';
+import { gainSentences } from './gain-words.ts';
 import { formatNumber, formatPlace } from './numbers.ts';
 import { capitalised, oneLine } from './plain-text.ts';
 import { tableLines, tableNotes } from './screen-table.ts';
 import { showsWind, windDeferral } from './wind-words.ts';
-import { monthInFull, mountById, nameOf, ratingWords, yearWords } from './words.ts';
+import { monthInFull, mountById, nameOf, ratingWords, withShortNames, yearWords } from './words.ts';
 
 export interface ScreenOptions {
   /** Where the memo lies, as the user would type it; null or absent: no report was written. */
@@ -17,9 +18,9 @@ export interface ScreenOptions {
 const INDENT = 16;
 const TITLE_COLUMNS = 48;
 /** A screen has room for so many paragraphs of one sort; the memo has them all. */
-const MOST_NOT_COUNTED = 6;
+const MOST_NOT_COUNTED = 4;
 const MOST_DOUBTS = 2;
-const MOST_REASONS = 5;
+const MOST_GAINS = 3;
 const MOST_SWITCH_POINTS = 3;
 /** The design's limit for a clock that a recommendation can stand on. */
 const CLOCK_LIMIT_MIN = 20;
@@ -53,14 +54,13 @@ const placeLines = (c: Comparison, width: number): string[] =>
     width,
   );
 
-/** The choice, the reasons with their numbers, and what would reverse it. */
-const answerLines = (c: Comparison, width: number): string[] => {
-  const { headline, reasons, switch_points } = c.advice;
-  const why = [...reasons.slice(0, MOST_REASONS), ...switch_points.slice(0, MOST_SWITCH_POINTS)];
-  return [oneLine(headline), ...why.map((text) => capitalised(oneLine(text)))].flatMap((text) =>
-    wrap(text, width),
-  );
-};
+/** The choice, what each other mount gains and costs, and what would reverse the choice. */
+const answerLines = (c: Comparison, width: number): string[] =>
+  [
+    c.advice.headline,
+    ...gainSentences(c).slice(0, MOST_GAINS),
+    ...c.advice.switch_points.slice(0, MOST_SWITCH_POINTS),
+  ].flatMap((text) => wrap(capitalised(withShortNames(c, text)), width));
 
 /** What the month that is worst for the chosen mount (else the reference) could give at its best fixed tilt. */
 const monthLine = (c: Comparison, width: number): string[] => {
@@ -81,25 +81,32 @@ const insteadLines = (c: Comparison, width: number): string[] => {
     return [
       ...(i === 0 ? [''] : []),
       shorten(`Instead of ${tracker}`, width),
-      ...hanging('  same energy', oneLine(answer.text), INDENT, width),
+      ...hanging('  same energy', withShortNames(c, answer.text), INDENT, width),
     ];
   });
 };
 
-const findingLines = (findings: readonly Finding[], width: number): string[] =>
-  findings
-    .filter(({ severity }) => severity !== 'note')
+/** Blocks and warnings, save those that the headline already tells. */
+const findingLines = (c: Comparison, width: number): string[] =>
+  c.weather.findings
+    .filter(({ severity, text }) => severity !== 'note' && !c.advice.headline.includes(text))
     .sort((a, b) => Number(b.severity === 'block') - Number(a.severity === 'block'))
     .flatMap(({ severity, text, fix }) =>
       hanging(severity === 'block' ? 'BLOCKED' : 'Warning', oneLine(`${text} ${fix}`), INDENT, width),
     );
 
 /** Paragraphs under one name, the first few, and how many the memo adds. */
-const namedLines = (name: string, texts: readonly string[], most: number, width: number): string[] => {
+const namedLines = (
+  c: Comparison,
+  name: string,
+  texts: readonly string[],
+  most: number,
+  width: number,
+): string[] => {
   const shown = texts.slice(0, most);
   const left = texts.length - shown.length;
   const all = left > 0 ? [...shown, `and ${left} more, in the memo and in --json`] : shown;
-  return all.flatMap((text, i) => hanging(i === 0 ? name : '', oneLine(text), INDENT, width));
+  return all.flatMap((text, i) => hanging(i === 0 ? name : '', withShortNames(c, text), INDENT, width));
 };
 
 /** A file name as it may be pasted into a shell. */
@@ -123,7 +130,7 @@ export const screenTable = (
   { reportPath = null, width = 100 }: ScreenOptions = {},
 ): string => {
   const lack = costLack(c);
-  const findings = findingLines(c.weather.findings, width);
+  const findings = findingLines(c, width);
   const lines = [
     ...placeLines(c, width),
     '',
@@ -137,12 +144,13 @@ export const screenTable = (
     '',
     ...(lack === null ? [] : hanging('Costs', lack, INDENT, width)),
     ...namedLines(
+      c,
       'Not counted',
       c.not_counted.map(({ what, effect }) => (effect ? `${what}: ${effect}` : what)),
       MOST_NOT_COUNTED,
       width,
     ),
-    ...namedLines('Doubt', c.advice.doubts, MOST_DOUBTS, width),
+    ...namedLines(c, 'Doubt', c.advice.doubts, MOST_DOUBTS, width),
     ...(showsWind(c) ? hanging('Wind', oneLine(windDeferral(c)), INDENT, width) : []),
     ...closingLines(c, reportPath, width),
   ];

@@ -1,14 +1,12 @@
 import type { Comparison } from '../shared/index.ts';
-
-const DEFERRAL =
-  'Screening only: whether a roof, rack, tracker or foundation holds is for the local code and a licensed engineer.';
+import { DEFERRAL } from '../wind/index.ts';
 
 /** True where the output shows any figure or verdict about wind, height or projection. */
 export const showsWind = (c: Comparison): boolean =>
   c.wind_basis !== null ||
   c.mounts.some(
     ({ limits, wind }) =>
-      limits.length > 0 ||
+      limits.some(({ status }) => status !== 'not_checked') ||
       wind.highest_edge_m !== null ||
       wind.roof_projection_m !== null ||
       wind.velocity_pressure_pa !== null,

@@ -36,6 +36,10 @@ test('wrapped text loses nothing and no line is too wide', () => {
   );
 });
 
+test('a line never ends inside a number or before its per cent sign', () => {
+  expect(wrap('costs 26.8 % more than 1 600 USD', 10)).toEqual(['costs', '26.8 %', 'more than', '1 600 USD']);
+});
+
 test('a hanging paragraph names itself once', () => {
   expect(hanging('Doubt', 'one two three', 8, 16)).toEqual(['Doubt   one two', '        three']);
 });

@@ -104,7 +104,12 @@ export const inventedMount = (m: Invented): MountResult => {
       missing: tracker ? [] : ['slant', 'lower_edge'],
     },
     limits: [
-      { name: 'height', status: 'not_checked', detail: 'slant and lower_edge are blank', excess_m: null },
+      {
+        name: 'height',
+        status: 'not_checked',
+        detail: 'not checked: slant and lower_edge are blank',
+        excess_m: null,
+      },
     ],
   };
 };
@@ -119,11 +124,11 @@ export const invented = (): Comparison => {
     inventedMount({ id: 'mast', kind: 'dual-axis', label: 'Mast', irradiation: 2090.2, stages: { incidence: 0.989, ...drive, rows: 1 }, capitalPerKw: 3400, lcoe: 0.16322 }),
   ]; // biome-ignore format: a mount a line
   mounts[1].limits = [
-    { name: 'roof projection', status: 'kept', detail: '0.135 m of 0.254 m allowed', excess_m: null },
+    { name: 'roof projection', status: 'kept', detail: 'within: 0.135 of 0.254 m', excess_m: null },
   ];
   mounts[3].limits = [
-    { name: 'height', status: 'broken', detail: '3.9 m where 3 m is allowed', excess_m: 0.9 },
-    { name: 'roof projection', status: 'not_checked', detail: 'not on a roof', excess_m: null },
+    { name: 'height', status: 'broken', detail: 'exceeds 3 m by 0.9 m', excess_m: 0.9 },
+    { name: 'roof projection', status: 'not_checked', detail: 'not checked: not on a roof', excess_m: null },
   ];
   return {
     schema: 'trackworth-comparison-1',
@@ -196,8 +201,8 @@ export const invented = (): Comparison => {
       confidence: 'clear',
       headline: 'CHOOSE Ground rack: 34° tilt, facing 186° (south). Lead: CLEAR over Tracker, LIKELY over Barn roof.',
       leads: [
-        { over: 'tracker', confidence: 'clear', lead: 0.0149, doubt: 0.0021, unit: 'USD/kWh', why: 'the lead is over twice the doubt' },
-        { over: 'roof', confidence: 'likely', lead: 0.0043, doubt: 0.0026, unit: 'USD/kWh', why: 'rows differ' },
+        { over: 'tracker', confidence: 'clear', lead: 0.0149, doubt: 0.0021, unit: 'USD per kWh', why: 'the lead is over twice the doubt' },
+        { over: 'roof', confidence: 'likely', lead: 0.0043, doubt: 0.0026, unit: 'USD per kWh', why: 'rows differ' },
       ],
       reasons: [
         'Tracker delivers 13.1 % more per kW than Ground rack and costs 13.6 % more per kWh.',
@@ -206,7 +211,7 @@ export const invented = (): Comparison => {
       switch_points: ['Tracker wins if its premium over Ground rack falls below 67 USD/kW (quoted 400).'],
       doubts: ['The sky models move the gain of Tracker over Ground rack from 12.6 % to 13.1 %.'],
       cautions: ['Falls: work above 1.8 m needs protection.', 'Modules are live in daylight.'],
-      excluded: [{ id: 'mast', why: 'height 3.9 m, limit 3 m' }],
+      excluded: [{ id: 'mast', why: 'height exceeds 3 m by 0.9 m' }],
     },
     assumptions: [
       { what: 'sky.albedo', value: '0.2', source: 'assumption: common ground, default of the study file' },

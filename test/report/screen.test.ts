@@ -98,11 +98,11 @@ test('limits are in words, and a broken one shouts', () => {
 test('without costs the cost columns go and the lack is named; without limits no wind figure is shown', () => {
   const text = screen(inventedBare);
   expect(text).not.toMatch(/capital {2}|\/kWh$|limits/m);
-  expect(text).toContain('no capital cost is given');
+  expect(text).toContain('the study lacks finance.real_rate, finance.years and the capital of');
   expect(text).toContain('1 kW DC (no array given), no inverter given');
   expect(text).toContain('clock cannot be checked');
   expect(text).not.toContain('licensed engineer');
-  expect(text).toContain('and 2 more, in the memo');
+  expect(text).toContain('and 4 more, in the memo');
 });
 
 test('without a rate the cost per kWh is shown at 4, 7 and 10 %, and what is incomplete is marked', () => {
@@ -149,6 +149,39 @@ test('the report path is shown only where a report was written, and the next com
   const c = invented();
   const spaced = { ...c, weather: { ...c.weather, source: "a b's.epw" } };
   expect(screenTable(spaced)).toContain(`trackworth weather 'a b'\\''s.epw'`);
+});
+
+test('a label that only repeats the id and the kind gives way to the id, in sentences too', () => {
+  const c = invented();
+  const long = 'tracker (single-axis tracker)';
+  const mounts = c.mounts.map((m) => (m.id === 'tracker' ? { ...m, label: long } : m));
+  const advice = {
+    ...c.advice,
+    switch_points: [`On cost per kWh ${long} wins over Ground rack below 67 USD/kW.`],
+  };
+  const text = screenTable({ ...c, mounts, advice });
+  expect(text).not.toContain(long);
+  expect(text).toMatch(/^ {2}tracker +1 558/m);
+  expect(text).toContain('On cost per kWh tracker wins over Ground rack');
+});
+
+test('each gain is told with its reference, its range over the skies and what it costs', () => {
+  const text = screen(invented);
+  expect(text).toMatch(
+    /Tracker delivers 13\.1 % more per kW than Ground rack \(12\.6 to 13\.1 % over the sky models\) and\s+costs\s+27\.9 % more per kW over 25 years\./,
+  );
+  expect(text).toContain(
+    'Barn roof delivers 7.3 % less per kW than Ground rack (7.0 to 7.3 % over the sky models).',
+  );
+  expect(text).toContain('Tracker wins if its premium over Ground rack falls below 67 USD/kW (quoted 400).');
+});
+
+test('what the headline tells is not told again below it', () => {
+  const c = inventedBlocked();
+  const block = c.weather.findings.find(({ severity }) => severity === 'block')!;
+  const told = { ...c, advice: { ...c.advice, headline: `NO RECOMMENDATION: ${block.text} ${block.fix}` } };
+  expect(screenTable(told)).not.toContain('BLOCKED');
+  expect(screenTable(told).replace(/\s+/g, ' ')).toContain(block.text);
 });
 
 test('mounts with one label are told apart by their ids', () => {

@@ -1,39 +1,17 @@
 import type { Comparison } from '../../shared/index.ts';
+import { gainSentences } from '../gain-words.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
-import { decimalsFor, formatNumber } from '../numbers.ts';
-import { capitalised, oneLine } from '../plain-text.ts';
-import { CONFIDENCE_WORDS, mountById, nameOf } from '../words.ts';
-import { blocks } from './section.ts';
+import { CONFIDENCE_WORDS, mountById, nameOf, withShortNames } from '../words.ts';
+import { blocks, section } from './section.ts';
+import { sentences } from './sentences.ts';
 
-const inertSentences = (texts: readonly string[]) =>
-  mdList(texts.map((text) => md(capitalised(oneLine(text)))));
-
-/** Findings that withhold the recommendation, in front of everything else. */
+/** Findings that withhold the recommendation, where the headline does not tell them already. */
 const blocking = (c: Comparison): string =>
   mdList(
     c.weather.findings
-      .filter(({ severity }) => severity === 'block')
+      .filter(({ severity, text }) => severity === 'block' && !c.advice.headline.includes(text))
       .map(({ text, fix }) => `**Blocked:** ${md(`${text} ${fix}`)}`),
   );
-
-const leadTable = (c: Comparison): string => {
-  if (c.advice.choice === null || c.advice.leads.length === 0) return '';
-  const choice = md(nameOf(c, mountById(c, c.advice.choice)));
-  const rows = c.advice.leads.map(({ over, confidence, lead, doubt, unit, why }) => [
-    md(nameOf(c, mountById(c, over))),
-    CONFIDENCE_WORDS[confidence],
-    ...figures([lead, doubt], unit),
-    md(why),
-  ]);
-  return blocks(
-    `The lead of ${choice} over each other mount, and the doubt in it:`,
-    mdTable(['Over', 'Lead is', 'Lead', 'Doubt', 'Why'], ['left', 'left', 'right', 'right', 'left'], rows),
-  );
-};
-
-/** Two figures to the precision of the greater one. */
-const figures = (values: readonly number[], unit: string): string[] =>
-  values.map((value) => `${formatNumber(value, decimalsFor(values))} ${md(unit)}`);
 
 /** The answer, its margin, and what would reverse it: the first thing that a reader meets. */
 export const answer = (c: Comparison): string =>
@@ -41,9 +19,28 @@ export const answer = (c: Comparison): string =>
     `# ${md(c.title) || 'Untitled study'}`,
     `**${md(c.advice.headline)}**`,
     blocking(c),
-    inertSentences(c.advice.reasons),
+    sentences(c, gainSentences(c)),
     c.advice.switch_points.length > 0
-      ? blocks('What would reverse it:', inertSentences(c.advice.switch_points))
+      ? blocks('What would reverse it:', sentences(c, c.advice.switch_points))
       : '',
-    leadTable(c),
   );
+
+/** How sure the choice is, mount by mount; nothing where there is no choice or no other mount. */
+const leads = (c: Comparison): string => {
+  if (c.advice.choice === null || c.advice.leads.length === 0) return '';
+  const choice = md(nameOf(c, mountById(c, c.advice.choice)));
+  const rows = c.advice.leads.map(({ over, confidence, why }) => [
+    md(nameOf(c, mountById(c, over))),
+    CONFIDENCE_WORDS[confidence],
+    md(withShortNames(c, why)),
+  ]);
+  return blocks(
+    `How sure the lead of ${choice} is. The doubt is half the range, over the Perez, Hay-Davies and Reindl skies, of the ` +
+      'difference between the two mounts. A lead is clear above twice the doubt where like is compared with like, and likely above the doubt.',
+    mdTable(['Over', 'The lead is', 'Why'], ['left', 'left', 'left'], rows),
+  );
+};
+
+/** Why, with every number that the answer rests on. */
+export const reasons = (c: Comparison): string =>
+  section('Reasons', sentences(c, c.advice.reasons), leads(c));

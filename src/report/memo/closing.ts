@@ -1,12 +1,10 @@
 import type { Comparison } from '../../shared/index.ts';
 import type { ReportExtras } from '../extras.ts';
-import { md, mdList, mdTable } from '../markdown.ts';
-import { capitalised, oneLine } from '../plain-text.ts';
+import { md, mdTable } from '../markdown.ts';
+import { withShortNames } from '../words.ts';
 import { figure } from './overview.ts';
 import { blocks, section } from './section.ts';
-
-const sentences = (texts: readonly string[]): string =>
-  mdList(texts.map((text) => md(capitalised(oneLine(text)))));
+import { sentences } from './sentences.ts';
 
 /** What the figures leave out, and what might be wrong with them. */
 export const notCountedAndDoubts = (c: Comparison): string =>
@@ -20,15 +18,18 @@ export const notCountedAndDoubts = (c: Comparison): string =>
             mdTable(
               ['Left blank', 'Effect'],
               ['left', 'left'],
-              c.not_counted.map(({ what, effect }) => [md(what), effect ? md(effect) : 'not worked out']),
+              c.not_counted.map(({ what, effect }) => [
+                md(what),
+                effect ? md(withShortNames(c, effect)) : 'not worked out',
+              ]),
             ),
           ),
     ),
-    section('Doubts', sentences(c.advice.doubts)),
+    section('Doubts', sentences(c, c.advice.doubts)),
   );
 
 /** For whoever builds and keeps it. */
-export const cautions = (c: Comparison): string => section('Cautions', sentences(c.advice.cautions));
+export const cautions = (c: Comparison): string => section('Cautions', sentences(c, c.advice.cautions));
 
 /** Everything that a reviewer needs to repeat the work. */
 export const appendix = (

@@ -2,8 +2,8 @@ import type { Comparison, MountResult } from '../../shared/index.ts';
 import { costLack, currencyOf, hasCapital, INCOMPLETE_NOTE, lcoeColumns } from '../cost-columns.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
 import { formatGain, formatNumber, formatPercent, formatSigned } from '../numbers.ts';
-import { capitalised, oneLine } from '../plain-text.ts';
-import { isTracker, mountById, nameOf } from '../words.ts';
+import { capitalised } from '../plain-text.ts';
+import { isTracker, mountById, nameOf, withShortNames } from '../words.ts';
 import { blocks, section } from './section.ts';
 
 const terms = ({ finance: f }: Comparison): string =>
@@ -83,7 +83,7 @@ const sameEnergy = (c: Comparison): string =>
   mdList(
     c.comparisons.same_energy.map(
       ({ tracker_id, text }) =>
-        `In place of ${md(nameOf(c, mountById(c, tracker_id)))}, for the same energy: ${md(oneLine(text))}`,
+        `In place of ${md(nameOf(c, mountById(c, tracker_id)))}, for the same energy: ${md(withShortNames(c, text))}`,
     ),
   );
 
@@ -100,10 +100,10 @@ export const skySpread = (c: Comparison): string => {
   const reference = md(nameOf(c, mountById(c, c.reference_id)));
   return section(
     'How the sky model moves the gain',
-    `Gain in delivered energy over ${reference}. The range over Perez, Hay–Davies and Reindl is part of the doubt. ` +
+    `Gain in delivered energy over ${reference}. The range over Perez, Hay-Davies and Reindl is part of the doubt. ` +
       'The isotropic model sees no brighter sky around the sun, so what it gives for a tracker is a lower bound and no part of the doubt.',
     mdTable(
-      ['Mount', 'Perez', 'Hay–Davies', 'Reindl', 'Isotropic (lower bound)'],
+      ['Mount', 'Perez', 'Hay-Davies', 'Reindl', 'Isotropic (lower bound)'],
       ['left', 'right', 'right', 'right', 'right'],
       c.mounts
         .filter((m) => m.id !== c.reference_id)

@@ -25,7 +25,9 @@ export const nextSteps = (c: Comparison): string => {
         c.not_counted.length > 0
           ? 'Fill in what is listed under "Not counted", the largest effect first.'
           : '',
-        unchecked ? `Give the lengths that the unchecked limits of ${unchecked} need.` : '',
+        unchecked
+          ? `Give the limits and lengths that are missing for ${unchecked}: see wind and height above.`
+          : '',
         close ? `Measure again where a limit is within the reading error: ${close}.` : '',
         showsWind(c)
           ? 'Put structure, attachments, foundation and wind before a licensed engineer and the local code.'

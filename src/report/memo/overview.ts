@@ -4,7 +4,8 @@ import type { ChartFile } from '../extras.ts';
 import { limitsInWords } from '../limit-words.ts';
 import { type Align, md, mdImage, mdTable } from '../markdown.ts';
 import { formatGain, formatNumber } from '../numbers.ts';
-import { arrayWords, mountById, nameOf } from '../words.ts';
+import { capitalised } from '../plain-text.ts';
+import { arrayWords, labelOf, mountById, nameOf } from '../words.ts';
 import { section } from './section.ts';
 
 interface Column {
@@ -18,7 +19,7 @@ const columnsFor = (c: Comparison): Column[] => {
   const money = md(currencyOf(c));
   const right = (head: string, cell: Column['cell']): Column => ({ head, align: 'right', cell });
   return [
-    { head: 'Mount', align: 'left', cell: (m) => md(nameOf(c, m)) },
+    { head: 'Mount', align: 'left', cell: (m) => md(labelOf(c, m)) },
     right('Delivered, kWh/kW·yr', (m) => formatNumber(m.energy_kwh_per_kw)),
     ...(c.mounts.length > 1
       ? [
@@ -45,7 +46,7 @@ const notes = (c: Comparison): string => {
   const lack = costLack(c);
   return [
     `Energy is what leaves the inverter (AC) in the first year, per kW of DC rating: ${md(arrayWords(c))}.`,
-    lack === null ? '' : `Costs: ${md(lack)}.`,
+    lack === null ? '' : `${md(capitalised(lack))}.`,
     c.mounts.some((m) => m.cost_incomplete) && lcoeColumns(c).length > 0 ? `${md(INCOMPLETE_NOTE)}.` : '',
   ]
     .filter((text) => text !== '')

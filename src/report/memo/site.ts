@@ -1,6 +1,7 @@
 import { type Comparison, MONTH_DAYS, MONTH_NAMES, type Severity } from '../../shared/index.ts';
 import { md, mdTable } from '../markdown.ts';
 import { formatNumber, formatPlace, formatSigned } from '../numbers.ts';
+import { capitalised } from '../plain-text.ts';
 import { SKY_WORDS, yearWords } from '../words.ts';
 import { blocks, section } from './section.ts';
 
@@ -12,7 +13,7 @@ const SEVERITY_WORDS: Record<Severity, string> = {
 const SEVERITIES: readonly Severity[] = ['block', 'warning', 'note'];
 
 const objective = (c: Comparison): string =>
-  `The study asks for: ${c.objective}. ` +
+  `${capitalised(c.objective)}. ` +
   (c.ranked_by === c.objective
     ? 'The mounts are ranked by it.'
     : `What it needs is not all given, so the mounts are ranked by: ${c.ranked_by}.`);

@@ -31,7 +31,7 @@ const limits = (c: Comparison): string => {
   const items = c.mounts.flatMap((m) =>
     worstFirst(m.limits).map(
       (limit) =>
-        `${md(nameOf(c, m))}: ${md(limitWords(limit))}${limit.detail ? ` (${md(limit.detail)})` : ''}.`,
+        `${md(nameOf(c, m))}: ${md(limit.detail ? `${limit.name} ${limit.detail}` : limitWords(limit))}.`,
     ),
   );
   return items.length > 0 ? mdList(items) : 'The study gives no limit of height or projection: not checked.';
