@@ -1,7 +1,7 @@
 import stringWidth from 'string-width';
 
 /** How many terminal columns a text takes; Chinese, Japanese and Korean characters take two. */
-export const columnsOf = (text: string): number => stringWidth(text);
+export const columnsOf = (text: string): number => (/^[ -~]*$/.test(text) ? text.length : stringWidth(text));
 
 const graphemes = new Intl.Segmenter('en', { granularity: 'grapheme' });
 

@@ -42,6 +42,10 @@ export const decimalsFor = (values: readonly (number | null)[]): number => {
   return Math.min(6, Math.max(0, 2 - Math.floor(Math.log10(greatest))));
 };
 
+/** kWh per kW and day: two decimals, a third where the sun hardly rises. */
+export const formatDaily = (kwhPerKwDay: number): string =>
+  formatNumber(kwhPerKwDay, kwhPerKwDay > 0 && kwhPerKwDay < 0.1 ? 3 : 2);
+
 /** Latitude and longitude with their letters: `40.10 N 104.92 W`. */
 export const formatPlace = (latitudeDeg: number, longitudeDeg: number): string => {
   const north = latitudeDeg < 0 ? 'S' : 'N';

@@ -2,7 +2,7 @@ import type { Comparison, MountResult } from '../shared/index.ts';
 import { columnsOf, hanging, padLeft, padRight, shorten, wrap } from './columns.ts';
 import { currencyOf, hasCapital, INCOMPLETE_MARK, INCOMPLETE_NOTE, lcoeColumns } from './cost-columns.ts';
 import { limitsInWords } from './limit-words.ts';
-import { formatGain, formatNumber, UNKNOWN } from './numbers.ts';
+import { formatDaily, formatGain, formatNumber, UNKNOWN } from './numbers.ts';
 import { oneLine } from './plain-text.ts';
 import { LIMIT_WORDS, mountById, nameOf } from './words.ts';
 
@@ -37,7 +37,7 @@ const columnsFor = (c: Comparison): Column[] => {
       : []),
     {
       head: ['worst month', 'kWh/kW·day'],
-      cell: ({ worst_month: w }) => `${formatNumber(w.kwh_per_kw_day, 2)} ${w.month}`,
+      cell: ({ worst_month: w }) => `${formatDaily(w.kwh_per_kw_day)} ${w.month}`,
     },
     ...(hasCapital(c)
       ? [

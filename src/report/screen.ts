@@ -2,7 +2,7 @@ import type { Comparison } from '../shared/index.ts';
 import { columnsOf, hanging, shorten, wrap } from './columns.ts';
 import { costLack } from './cost-columns.ts';
 import { gainSentences } from './gain-words.ts';
-import { formatNumber, formatPlace } from './numbers.ts';
+import { formatDaily, formatNumber, formatPlace } from './numbers.ts';
 import { capitalised, oneLine } from './plain-text.ts';
 import { tableLines, tableNotes } from './screen-table.ts';
 import { showsWind, windDeferral } from './wind-words.ts';
@@ -69,7 +69,7 @@ const monthLine = (c: Comparison, width: number): string[] => {
   if (!plane) return [];
   const text =
     `a fixed plane tilted for ${monthInFull(month)} (${formatNumber(plane.tilt_deg)}°) would give ` +
-    `${formatNumber(plane.kwh_per_kw_day, 2)} in that month`;
+    `${formatDaily(plane.kwh_per_kw_day)} in that month`;
   return hanging('', text, 2, width);
 };
 

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import {
   decimalsFor,
+  formatDaily,
   formatGain,
   formatNumber,
   formatPercent,
@@ -56,6 +57,10 @@ test('a column shows three significant digits of its greatest value', () => {
   expect(decimalsFor([15.2, null])).toBe(1);
   expect(decimalsFor([152, 0.1])).toBe(0);
   expect(decimalsFor([null])).toBe(0);
+});
+
+test('a day of polar night keeps a digit to compare', () => {
+  expect([formatDaily(3.456), formatDaily(0.0489), formatDaily(0)]).toEqual(['3.46', '0.049', '0.00']);
 });
 
 test('places carry letters for their hemispheres', () => {

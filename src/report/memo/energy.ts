@@ -1,6 +1,6 @@
 import { type Comparison, MONTH_DAYS, MONTH_NAMES, type MountResult } from '../../shared/index.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
-import { formatGain, formatNumber, formatPercent, UNKNOWN } from '../numbers.ts';
+import { formatDaily, formatGain, formatNumber, formatPercent, UNKNOWN } from '../numbers.ts';
 import { monthInFull, mountById, nameOf } from '../words.ts';
 import { section } from './section.ts';
 
@@ -49,12 +49,12 @@ const monthTable = (c: Comparison): string => {
     const plane = c.tilted_for_month.find((entry) => entry.month === month);
     return [
       month,
-      plane ? `${formatNumber(plane.kwh_per_kw_day, 2)} at ${formatNumber(plane.tilt_deg)}°` : UNKNOWN,
+      plane ? `${formatDaily(plane.kwh_per_kw_day)} at ${formatNumber(plane.tilt_deg)}°` : UNKNOWN,
       ...c.mounts.map((mount) => {
         const daily = mount.energy_monthly_kwh_per_kw[m] / MONTH_DAYS[m];
         const against =
           plane && plane.kwh_per_kw_day > 0 ? ` (${formatGain(daily / plane.kwh_per_kw_day - 1, 0)})` : '';
-        return formatNumber(daily, 2) + against;
+        return formatDaily(daily) + against;
       }),
     ];
   });
@@ -78,8 +78,8 @@ const worstMonths = (c: Comparison): string =>
           ? 'the same as'
           : `${formatPercent(Math.abs(ratio))} ${ratio < 0 ? 'less' : 'more'} than`;
       return [
-        `${md(nameOf(c, mount))} delivers least in ${monthInFull(month)}: ${formatNumber(daily, 2)} kWh/kW·day, ${against} ` +
-          `a fixed plane tilted for ${monthInFull(month)} (${formatNumber(plane.kwh_per_kw_day, 2)} kWh/kW·day).`,
+        `${md(nameOf(c, mount))} delivers least in ${monthInFull(month)}: ${formatDaily(daily)} kWh/kW·day, ${against} ` +
+          `a fixed plane tilted for ${monthInFull(month)} (${formatDaily(plane.kwh_per_kw_day)} kWh/kW·day).`,
       ];
     }),
   );

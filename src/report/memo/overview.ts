@@ -3,7 +3,7 @@ import { costLack, currencyOf, hasCapital, INCOMPLETE_NOTE, lcoeColumns } from '
 import type { ChartFile } from '../extras.ts';
 import { limitsInWords } from '../limit-words.ts';
 import { type Align, md, mdImage, mdTable } from '../markdown.ts';
-import { formatGain, formatNumber } from '../numbers.ts';
+import { formatDaily, formatGain, formatNumber } from '../numbers.ts';
 import { capitalised } from '../plain-text.ts';
 import { arrayWords, labelOf, mountById, nameOf } from '../words.ts';
 import { section } from './section.ts';
@@ -30,7 +30,7 @@ const columnsFor = (c: Comparison): Column[] => {
       : []),
     right(
       'Worst month, kWh/kW·day',
-      ({ worst_month: w }) => `${formatNumber(w.kwh_per_kw_day, 2)} in ${w.month}`,
+      ({ worst_month: w }) => `${formatDaily(w.kwh_per_kw_day)} in ${w.month}`,
     ),
     ...(hasCapital(c) ? [right(`Capital, ${money}/kW`, (m) => formatNumber(m.capital_per_kw))] : []),
     ...lcoeColumns(c).map(({ name, cell }) => right(`Cost, ${money}/kWh, ${name}`, (m) => md(cell(m)))),
