@@ -37,7 +37,7 @@ export interface DialMap {
 export const dialMap = (comparison: Comparison): DialMap => {
   const peak = comparison.best_orientation.irradiation_kwh_m2;
   if (!(peak > 0)) return { contours: [], shades: [] };
-  const grid = sampleGrid(polarField(comparison.orientation_map), REACH_DEG, STEP_DEG);
+  const grid = sampleGrid(nearDial(polarField(comparison.orientation_map)), REACH_DEG, STEP_DEG);
   return {
     contours: CONTOUR_LOSSES.map((loss) => ({
       loss,
@@ -51,6 +51,12 @@ export const dialMap = (comparison: Comparison): DialMap => {
       .filter((shade) => shade.outlines.length > 0),
   };
 };
+
+/** The field up to the reach, nothing beyond: every cell that the rim crosses has its four corners. */
+const nearDial =
+  (field: (x: number, y: number) => number) =>
+  (x: number, y: number): number =>
+    Math.hypot(x, y) > REACH_DEG ? Number.NEGATIVE_INFINITY : field(x, y);
 
 /** Draws what lies past the rim in onto the rim: an outline keeps its shape inside and gains no area outside. */
 const ontoDial = (p: DialPoint): DialPoint => {
@@ -70,7 +76,7 @@ export const mapLayers = (map: DialMap): Layer[] => [
       })),
     },
     projection: DIAL_PROJECTION,
-    mark: { type: 'geoshape', stroke: null },
+    mark: { type: 'geoshape', stroke: null, clip: false },
     encoding: { fill: { field: 'properties.color', type: 'nominal', scale: null } },
   },
   {
@@ -90,7 +96,7 @@ export const mapLayers = (map: DialMap): Layer[] => [
       })),
     },
     projection: DIAL_PROJECTION,
-    mark: { type: 'geoshape', filled: false, stroke: INK, strokeWidth: 1, strokeJoin: 'round' },
+    mark: { type: 'geoshape', clip: false, filled: false, stroke: INK, strokeWidth: 1, strokeJoin: 'round' },
   },
   disc(DIAL_RADIUS, DIAL_RADIUS + 1.5, { color: INK }),
   {

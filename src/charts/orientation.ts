@@ -219,7 +219,6 @@ const haloed = (text: string, p: DialPoint, fontSize: number): Layer[] => [
     stroke: PAPER,
     strokeWidth: 3.5,
     strokeJoin: 'round',
-    opacity: 0.85,
   }),
   textLayer([{ text }], at(p), { fontSize }),
 ];

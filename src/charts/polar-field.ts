@@ -19,42 +19,72 @@ export const dialPoint = (tiltDeg: number, azimuthDeg: number): DialPoint => [
  */
 export const polarField = (map: OrientationMapResult): ((x: number, y: number) => number) => {
   const { tilts_deg: tilts, azimuths_deg: azimuths, irradiation_kwh_m2: rows } = map;
-  const rowAt = (row: readonly number[], azimuthDeg: number): number => {
-    let next = azimuths.findIndex((a) => a > azimuthDeg);
-    if (next < 0) next = azimuths.length;
-    const at: number[] = [];
-    const value: number[] = [];
-    for (let i = next - 2; i < next + 2; i++) {
-      const turns = Math.floor(i / azimuths.length);
-      at.push(azimuths[i - turns * azimuths.length] + 360 * turns);
-      value.push(row[i - turns * azimuths.length]);
+  const [azimuthAt, tiltAt] = [new Float64Array(4), new Float64Array(4)];
+  const [here, across] = [nodes(), nodes()];
+  const alongTilt = nodes();
+
+  const findAzimuth = (azimuthDeg: number, found: Nodes): void => {
+    const next = firstAbove(azimuths, azimuthDeg);
+    for (let k = 0; k < 4; k++) {
+      const turns = Math.floor((next - 2 + k) / azimuths.length);
+      found.index[k] = next - 2 + k - turns * azimuths.length;
+      azimuthAt[k] = azimuths[found.index[k]] + 360 * turns;
     }
-    return cubic(at, value, azimuthDeg);
+    lagrange(azimuthAt, azimuthDeg, found.weight);
   };
+  // A row at tilt -t is the row at tilt t, seen from the opposite azimuth.
   const centred = tilts[0] === 0 ? 1 : 0;
+
   return (x, y) => {
     const tilt = Math.hypot(x, y);
     const azimuth = wrap360(atan2Deg(x, y));
-    const opposite = wrap360(azimuth + 180);
-    let next = tilts.findIndex((t) => t > tilt);
-    if (next < 0 || next > tilts.length - 2) next = tilts.length - 2;
-    const at: number[] = [];
-    const value: number[] = [];
-    for (let i = next - 2; i < next + 2; i++) {
-      const mirrored = -i - 1 + centred;
-      at.push(i < 0 ? -tilts[mirrored] : tilts[i]);
-      value.push(i < 0 ? rowAt(rows[mirrored], opposite) : rowAt(rows[i], azimuth));
+    findAzimuth(azimuth, here);
+    const next = Math.min(firstAbove(tilts, tilt), tilts.length - 2);
+    if (next < 2) findAzimuth(wrap360(azimuth + 180), across);
+    for (let k = 0; k < 4; k++) {
+      const i = next - 2 + k;
+      alongTilt.index[k] = i < 0 ? -i - 1 + centred : i;
+      tiltAt[k] = i < 0 ? -tilts[alongTilt.index[k]] : tilts[i];
     }
-    return cubic(at, value, tilt);
+    lagrange(tiltAt, tilt, alongTilt.weight);
+    let sum = 0;
+    for (let k = 0; k < 4; k++) {
+      const row = rows[alongTilt.index[k]];
+      const { index, weight } = next - 2 + k < 0 ? across : here;
+      const value =
+        weight[0] * row[index[0]] +
+        weight[1] * row[index[1]] +
+        weight[2] * row[index[2]] +
+        weight[3] * row[index[3]];
+      sum += alongTilt.weight[k] * value;
+    }
+    return sum;
   };
 };
 
-const cubic = (at: readonly number[], value: readonly number[], x: number): number => {
-  let sum = 0;
-  for (let i = 0; i < at.length; i++) {
-    let weight = value[i];
-    for (let j = 0; j < at.length; j++) if (j !== i) weight *= (x - at[j]) / (at[i] - at[j]);
-    sum += weight;
+/** Four neighbours on one axis and what each counts for. */
+interface Nodes {
+  readonly index: Int32Array;
+  readonly weight: Float64Array;
+}
+const nodes = (): Nodes => ({ index: new Int32Array(4), weight: new Float64Array(4) });
+
+/** Index of the first entry of a rising list that is above `x`; its length if none is. */
+const firstAbove = (rising: readonly number[], x: number): number => {
+  let [low, high] = [0, rising.length];
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (rising[middle] > x) high = middle;
+    else low = middle + 1;
   }
-  return sum;
+  return low;
+};
+
+/** Weights of the values at four places in the cubic through them, at `x`. */
+const lagrange = (at: Float64Array, x: number, weight: Float64Array): void => {
+  for (let i = 0; i < 4; i++) {
+    let product = 1;
+    for (let j = 0; j < 4; j++) if (j !== i) product *= (x - at[j]) / (at[i] - at[j]);
+    weight[i] = product;
+  }
 };

@@ -7,13 +7,15 @@ const ADVANCES = [
   68, 68, 63, 36, 36, 36, 47, 46, 32, 56, 61, 57, 61, 58, 37, 61, 59, 24, 24, 55, 24, 88, 59, 60, 61, 61, 38, 53,
   33, 59, 56, 82, 55, 56, 55, 43, 33, 43, 66,
 ]; // biome-ignore format: a table of one column
+/** No-break space, degree, minus and ellipsis. */
+const OTHERS: Record<number, number> = { 160: 0.28, 176: 0.46, 8722: 0.66, 8230: 0.87 };
 /** Bold letters are this much wider. */
 const BOLD = 1.06;
 const ELLIPSIS = '\u2026';
 
 const advance = (codePoint: number): number => {
   if (codePoint >= 32 && codePoint <= 126) return ADVANCES[codePoint - 32] / 100;
-  if (codePoint === 0xa0) return 0.28;
+  if (codePoint in OTHERS) return OTHERS[codePoint];
   return codePoint < 0x1100 ? 0.68 : 1;
 };
 
