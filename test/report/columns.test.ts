@@ -1,4 +1,5 @@
 import fc from 'fast-check';
+import stringWidth from 'string-width';
 import { expect, test } from 'vitest';
 import { columnsOf, hanging, padLeft, padRight, shorten, wrap } from '../../src/report/columns.ts';
 
@@ -42,4 +43,15 @@ test('a line never ends inside a number or before its per cent sign', () => {
 
 test('a hanging paragraph names itself once', () => {
   expect(hanging('Doubt', 'one two three', 8, 16)).toEqual(['Doubt   one two', '        three']);
+});
+
+test('the quick count of Latin text agrees with the general one', () => {
+  let compared = 0;
+  for (let code = 0x20; code < 0x2030; code++) {
+    const ch = String.fromCharCode(code);
+    if (!/[\p{L}\p{N}\p{P}\p{S}]/u.test(ch) || (code > 0x24f && code < 0x2010)) continue;
+    expect(columnsOf(ch), code.toString(16)).toBe(stringWidth(ch));
+    compared++;
+  }
+  expect(compared).toBeGreaterThan(500);
 });

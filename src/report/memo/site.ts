@@ -20,6 +20,7 @@ const objective = (c: Comparison): string =>
 
 const clock = (shiftMin: number | null): string => {
   if (shiftMin === null) return 'The clock of the file cannot be checked against the sun.';
+  if (Math.abs(shiftMin) < 0.5) return 'Its clock fits the sun to the minute.';
   return `Its clock fits the sun best with ${formatSigned(shiftMin)} min added to its times.`;
 };
 
