@@ -27,9 +27,10 @@ export class Problems {
   /** Throws one input error that carries every problem so far, or does nothing where there is none. */
   throwIfAny(options?: ErrorOptions): void {
     if (!this.any) return;
-    const error = new TrackworthError('input', this.kept, options);
+    const inOrder = this.kept.toSorted((a, b) => (a.line ?? 0) - (b.line ?? 0));
+    const error = new TrackworthError('input', inOrder, options);
     if (this.count > PRINTED) {
-      const first = this.kept.slice(0, PRINTED).map(describeProblem);
+      const first = inOrder.slice(0, PRINTED).map(describeProblem);
       error.message = [...first, `and ${this.count - PRINTED} more`].join('\n');
     }
     throw error;

@@ -48,7 +48,7 @@ const wholeHours = (begins: Float64Array, leap: Uint8Array, cells: Cells, proble
   // Half hours could count either way: a year that begins at 23:30 is the one that lies half an hour early.
   const offsetMin = phase > 30 || (phase === 30 && first < 0) ? phase - 60 : phase;
   const step = begins[1] - begins[0];
-  if (step > 0 && step !== 60)
+  if (step > 0 && step !== 60 && begins[2] - begins[1] === step)
     problems.fail({
       code: 'not-hourly',
       line: cells.line[1],

@@ -2,7 +2,7 @@
  * Writers for every weather format that trackworth reads, and an invented year to write: for round trips. They follow
  * the formats' published descriptions, not the readers.
  */
-import { HOURS, MONTH_DAYS, MONTH_FIRST_DAY, type Place } from '../../src/shared/index.ts';
+import { HOURS, MONTH_FIRST_DAY, type Place } from '../../src/shared/index.ts';
 import { sunOverHours } from '../../src/sun/index.ts';
 
 export interface WrittenYear {
