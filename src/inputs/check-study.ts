@@ -5,13 +5,13 @@ import type { Fault } from './fault.ts';
 import { isGroup, rawAt } from './fault.ts';
 import type { Home } from './known-keys.ts';
 import { keysAt, unknownKeyFix } from './known-keys.ts';
-import type { MountSchemas, RawMount } from './mount-schema.ts';
-import { mountSchemas } from './mount-schema.ts';
 import { nearest } from './nearest.ts';
+import type { MountSchemas, RawMount } from './schema/mounts.ts';
+import { mountSchemas } from './schema/mounts.ts';
+import type { RawStudy } from './schema/study.ts';
+import { studyFrame } from './schema/study.ts';
 import { found, shown } from './shown.ts';
-import type { RawStudy } from './study-schema.ts';
-import { studyFrame } from './study-schema.ts';
-import type { Path } from './study-text.ts';
+import type { Path } from './text/place.ts';
 
 export interface CheckedStudy {
   readonly faults: readonly Fault[];

@@ -2,7 +2,7 @@ import type { Fault } from './fault.ts';
 import { isGroup, rawAt } from './fault.ts';
 import { nearest } from './nearest.ts';
 import { shown } from './shown.ts';
-import type { Path, Position } from './study-text.ts';
+import type { Path, Position } from './text/place.ts';
 
 const idOf = (mount: unknown): string | null => {
   const id = rawAt(mount, ['id']);

@@ -1,4 +1,4 @@
-import type { Path } from './study-text.ts';
+import type { Path } from './text/place.ts';
 
 /** Something wrong at a path; `key` where the key itself is at fault rather than its value. */
 export interface Fault {

@@ -9,16 +9,17 @@ interface Definition {
   options?: Schema[];
   shape?: Record<string, Schema>;
 }
-const definitionOf = (schema: Schema): Definition => schema._zod.def as unknown as Definition;
+/** The inside of a zod schema. */
+export const partsOf = (schema: Schema): Definition => schema._zod.def as unknown as Definition;
 
 /** The schema below `schema` at `path`: into groups, lists, optional values and the group form of a choice. */
 const schemaAt = (schema: Schema | undefined, path: readonly PropertyKey[]): Schema | undefined => {
   if (!schema) return undefined;
-  const { type, innerType, element, options, shape } = definitionOf(schema);
+  const { type, innerType, element, options, shape } = partsOf(schema);
   if (type === 'optional') return schemaAt(innerType, path);
   if (type === 'union')
     return schemaAt(
-      options?.find((o) => definitionOf(o).type === 'object'),
+      options?.find((o) => partsOf(o).type === 'object'),
       path,
     );
   if (path.length === 0) return schema;
@@ -30,14 +31,14 @@ const schemaAt = (schema: Schema | undefined, path: readonly PropertyKey[]): Sch
 /** The keys of the group at `path`; empty where it is no group. */
 export const keysAt = (schema: Schema, path: readonly PropertyKey[]): string[] => {
   const there = schemaAt(schema, path);
-  return there ? Object.keys(definitionOf(there).shape ?? {}).filter((key) => key !== '$schema') : [];
+  return there ? Object.keys(partsOf(there).shape ?? {}).filter((key) => key !== '$schema') : [];
 };
 
 /** Every group of `schema` by its dotted path, with its keys: `array.module` → power, length ... */
 const groupsOf = (schema: Schema | undefined, path: string): { path: string; keys: string[] }[] => {
   const there = schemaAt(schema, []);
   if (!there) return [];
-  const { element, shape } = definitionOf(there);
+  const { element, shape } = partsOf(there);
   if (element) return groupsOf(element, path);
   if (!shape) return [];
   const below = Object.entries(shape).flatMap(([key, inner]) =>

@@ -5,7 +5,8 @@ import { crossFaults } from './cross-checks.ts';
 import type { Fault } from './fault.ts';
 import { found } from './shown.ts';
 import type { Study } from './study-file.ts';
-import type { Path, StudyText } from './study-text.ts';
+import type { Path } from './text/place.ts';
+import type { StudyText } from './text/study-text.ts';
 import { toStudy } from './to-study.ts';
 
 /** Dotted, mounts by their id: `mounts.tracker.drive.working`; by their number (`mounts.#2`) where that fails. */
@@ -50,7 +51,7 @@ const check = async (raw: unknown) => {
  */
 export const readStudy = async (input: { file: string; text: string }): Promise<Study> => {
   const { file } = input;
-  const { readStudyText } = await import('./study-text.ts');
+  const { readStudyText } = await import('./text/study-text.ts');
   const text = readStudyText(file, input.text);
   if (text.broken) throw new TrackworthError('input', inLineOrder(text.problems));
   const { value } = text;

@@ -4,9 +4,9 @@ import type { MountGeometry, MountLengths, RowSpec } from '../mounts/index.ts';
 import type { MountKind } from '../shared/index.ts';
 import type { TableColumn, TableColumns } from '../weather/index.ts';
 import type { WindSpec } from '../wind/index.ts';
-import type { RawMount } from './mount-schema.ts';
+import type { RawMount } from './schema/mounts.ts';
+import type { RawStudy } from './schema/study.ts';
 import type { Study, StudyMount } from './study-file.ts';
-import type { RawStudy } from './study-schema.ts';
 
 /** In the words of a report; the id comes first since tables are read by it. */
 const KIND_WORDS: Record<MountKind, string> = {

@@ -33,21 +33,18 @@ export interface FieldText {
  */
 export const field = <T>(text: FieldText, read: (raw: unknown) => T) => {
   const { description, example, expected, form } = text;
-  const schema = z.pipe(
-    z.unknown(),
-    z.transform((raw: unknown, context): T => {
-      const refuse = (params: { expected: string; fix: string; code: string }): never => {
-        context.issues.push({ code: 'custom', input: raw, params });
-        return z.NEVER;
-      };
-      if (raw === undefined) return refuse({ code: 'missing-key', expected, fix: example });
-      try {
-        return read(raw);
-      } catch (trouble) {
-        if (!(trouble instanceof Refusal)) throw trouble;
-        return refuse({ code: 'wrong-value', expected: trouble.expected, fix: trouble.fix });
-      }
-    }),
-  );
+  const schema = z.transform((raw: unknown, context): T => {
+    const refuse = (params: { expected: string; fix: string; code: string }): never => {
+      context.issues.push({ code: 'custom', input: raw, params });
+      return z.NEVER;
+    };
+    if (raw === undefined) return refuse({ code: 'missing-key', expected, fix: example });
+    try {
+      return read(raw);
+    } catch (trouble) {
+      if (!(trouble instanceof Refusal)) throw trouble;
+      return refuse({ code: 'wrong-value', expected: trouble.expected, fix: trouble.fix });
+    }
+  });
   return schema.register(hints, { description, examples: [example], ...form });
 };

@@ -1,0 +1,104 @@
+import * as z from 'zod/mini';
+import type { Convert } from '../convert.ts';
+import { hints } from '../fields/field.ts';
+import { quantity } from '../fields/quantity.ts';
+import { share } from '../fields/share.ts';
+import { choice, text } from '../fields/words.ts';
+import { cost } from './money.ts';
+
+/** An id names files and JSON fields, so it stays plain. */
+const ID = /^[a-z0-9][a-z0-9_-]*$/;
+export const idField = (what: string, description: string) =>
+  text({
+    what,
+    description,
+    example: 'ground',
+    pattern: ID,
+    longest: 40,
+    fix: 'Use lower-case letters, digits, - and _ only, at most 40, beginning with a letter or digit.',
+  });
+
+const length = (convert: Convert, what: string, example: string, description: string, least?: 'or zero') =>
+  z.optional(
+    quantity(convert, {
+      what,
+      unit: 'm',
+      range: least ? { min: 0, max: 100 } : { above: 0, max: 100 },
+      example,
+      description: `${description} A bare number is metres. Blank: wind limits that need it are not checked.`,
+    }),
+  );
+
+const gcr = () =>
+  share({
+    what: 'a ground coverage ratio',
+    range: { above: 0, below: 1 },
+    example: '0.4',
+    description:
+      'Ground coverage ratio: slant length of a row over the distance from row to row, above 0 and below 1.',
+  });
+
+const rows = () =>
+  z
+    .strictObject({ gcr: gcr() })
+    .register(hints, { description: 'Rows of this mount. Blank: a single row, shaded by nothing.' });
+
+const trackerRows = () =>
+  z
+    .strictObject({
+      gcr: gcr(),
+      low_sun: z.optional(
+        choice(
+          ['backtrack', 'shade'],
+          "When the sun is low: turn back out of each other's shade (also if blank), or stay on the sun.",
+        ),
+      ),
+    })
+    .register(hints, { description: 'Rows of trackers. Blank: one row, true tracking.' });
+
+const drive = () =>
+  z
+    .strictObject({
+      working: z.optional(
+        share({
+          what: 'a share of the time',
+          range: { min: 0, max: 1 },
+          example: '97 %',
+          description:
+            'Share of the time that the tracker works. Blank: downtime is not counted, which flatters it.',
+        }),
+      ),
+      stuck: z.optional(choice(['flat'], 'How it stands while it does not work. Needed with working.')),
+      own_use: z.optional(
+        share({
+          what: 'a share of the yield',
+          range: { min: 0, below: 1 },
+          example: '0.3 %',
+          description: 'Share of the yield that the drive itself uses. Blank: not counted.',
+        }),
+      ),
+    })
+    .register(hints, { description: 'The drive of a tracker.' });
+
+/** The parts that the kinds of mount share, each made once: making schemas is what reading a study costs most. */
+export const mountParts = (convert: Convert) => ({
+  common: {
+    id: idField('an id', 'Short name, unique in the study: lower-case letters, digits, - and _.'),
+    label: z.optional(
+      text({
+        what: 'a short text',
+        description: 'What reports call it. Blank: made of id and kind.',
+        example: 'the ground rack',
+        longest: 80,
+      }),
+    ),
+    cost: z.optional(cost()),
+  },
+  rows: z.optional(rows()),
+  trackerRows: z.optional(trackerRows()),
+  drive: z.optional(drive()),
+  slant: length(convert, 'a slant length', '3.5 m', 'Length of a rack or tracker, measured along its slope.'),
+  axisHeight: length(convert, 'a height', '1.5 m', 'Height of the axis above ground.'),
+  lowerEdge: length(convert, 'a height', '0.8 m', 'Height of the lower edge above ground.', 'or zero'),
+  airBehind: length(convert, 'a gap', '100 mm', 'Gap between the roof and the modules.', 'or zero'),
+});

@@ -1,0 +1,82 @@
+import * as z from 'zod/mini';
+import type { Convert } from '../convert.ts';
+import { azimuth, azimuthOrBest, swing, tilt, tiltOrBest } from '../fields/angles.ts';
+import { hints } from '../fields/field.ts';
+import { mountParts } from './mount-parts.ts';
+
+type Parts = ReturnType<typeof mountParts>;
+
+const roofPlane = (convert: Convert, { common, airBehind }: Parts) =>
+  z
+    .strictObject({
+      kind: z.literal('roof-plane'),
+      ...common,
+      tilt: tilt(
+        convert,
+        'Of the roof: degrees from horizontal, a slope such as 3:12, a grade such as 25 %.',
+      ),
+      azimuth: azimuth(convert, 'The way the roof faces: degrees clockwise from true north, 180 is south.'),
+      air_behind: airBehind,
+    })
+    .register(hints, { description: 'Modules parallel to a roof.' });
+
+const fixedTilt = (convert: Convert, { common, rows, slant, lowerEdge }: Parts) =>
+  z
+    .strictObject({
+      kind: z.literal('fixed-tilt'),
+      ...common,
+      tilt: z.optional(
+        tiltOrBest(
+          convert,
+          'Degrees from horizontal, a slope (3:12), a grade (25 %), or best (also if blank).',
+        ),
+      ),
+      azimuth: z.optional(
+        azimuthOrBest(convert, 'Degrees clockwise from true north, 180 is south, or best (also if blank).'),
+      ),
+      rows,
+      slant,
+      lower_edge: lowerEdge,
+    })
+    .register(hints, { description: 'A rack on the ground that does not move.' });
+
+const axis = (convert: Convert) =>
+  z
+    .strictObject({
+      azimuth: z.optional(azimuth(convert, 'Direction towards which a tilted axis falls. Blank: 180.')),
+      tilt: z.optional(tilt(convert, 'Of the axis, from horizontal. Blank: 0, level.')),
+    })
+    .register(hints, { description: 'The axis. Blank: level, north-south.' });
+
+const singleAxis = (convert: Convert, { common, trackerRows, slant, axisHeight, drive }: Parts) =>
+  z
+    .strictObject({
+      kind: z.literal('single-axis'),
+      ...common,
+      axis: z.optional(axis(convert)),
+      swing: z.optional(swing(convert, 'Greatest turn either way from flat, degrees. Blank: 60.')),
+      rows: trackerRows,
+      slant,
+      axis_height: axisHeight,
+      drive,
+    })
+    .register(hints, { description: 'A tracker that turns about one axis.' });
+
+const dualAxis = ({ common, rows, slant, axisHeight, drive }: Parts) =>
+  z
+    .strictObject({ kind: z.literal('dual-axis'), ...common, rows, slant, axis_height: axisHeight, drive })
+    .register(hints, { description: 'A tracker that faces the sun. Without rows it is a lone mast.' });
+
+/** One schema for each kind of mount; its keys are the kind's own. */
+export const mountSchemas = (convert: Convert) => {
+  const parts = mountParts(convert);
+  return {
+    'roof-plane': roofPlane(convert, parts),
+    'fixed-tilt': fixedTilt(convert, parts),
+    'single-axis': singleAxis(convert, parts),
+    'dual-axis': dualAxis(parts),
+  };
+};
+
+export type MountSchemas = ReturnType<typeof mountSchemas>;
+export type RawMount = { [K in keyof MountSchemas]: z.infer<MountSchemas[K]> }[keyof MountSchemas];
