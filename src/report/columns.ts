@@ -1,7 +1,7 @@
 import stringWidth from 'string-width';
 
 /** Latin letters, figures, dashes, dots and the ellipsis: one column each. The general count is 100 times slower. */
-const NARROW = /^[ -~\u00a0-\u00ac\u00ae-\u024f\u2010-\u2027]*$/;
+const NARROW = /^[ -~\u00a0-\u00a8\u00aa-\u00ac\u00af-\u024f\u2010-\u2027]*$/;
 
 /** How many terminal columns a text takes; Chinese, Japanese and Korean characters take two. */
 export const columnsOf = (text: string): number => (NARROW.test(text) ? text.length : stringWidth(text));
