@@ -34,8 +34,13 @@ export const outlines = (grid: Grid, level: number): DialPoint[][] => {
     2 * ((r + 1) * wide + c + 1) + (upward ? 1 : 0);
   const next = new Map<number, number>();
   for (let r = -1; r < size; r++) {
+    let se = Number.NEGATIVE_INFINITY;
+    let ne = Number.NEGATIVE_INFINITY;
     for (let c = -1; c < size; c++) {
-      const [sw, se, nw, ne] = [at(c, r), at(c + 1, r), at(c, r + 1), at(c + 1, r + 1)];
+      const sw = se;
+      const nw = ne;
+      se = at(c + 1, r);
+      ne = at(c + 1, r + 1);
       const inside =
         (sw >= level ? 1 : 0) | (se >= level ? 2 : 0) | (ne >= level ? 4 : 0) | (nw >= level ? 8 : 0);
       if (inside === 0 || inside === 15) continue;

@@ -217,7 +217,7 @@ const haloed = (text: string, p: DialPoint, fontSize: number): Layer[] => [
   textLayer([{ text }], at(p), {
     fontSize,
     stroke: PAPER,
-    strokeWidth: 3.5,
+    strokeWidth: 5,
     strokeJoin: 'round',
   }),
   textLayer([{ text }], at(p), { fontSize }),
