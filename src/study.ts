@@ -31,6 +31,8 @@ import { tiltedForMonth } from './study/tilted-for-month.ts';
 import type { RawYear } from './weather/index.ts';
 import { windBasis } from './wind/index.ts';
 
+export { type ReadyYear, readyYear };
+
 export const SCHEMA = 'trackworth-comparison-1';
 
 /** Compares every mount of a study over one year of weather. The weather has been read with the study's place and label. */

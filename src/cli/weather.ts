@@ -1,0 +1,61 @@
+import { resolve } from 'node:path';
+import type { Study } from '../inputs/index.ts';
+import type { HourLabel, Place } from '../shared/index.ts';
+import type { RawYear } from '../weather/index.ts';
+import { isStudyName, readStudyInputs, readWeatherFile } from './inputs.ts';
+import type { Io } from './io.ts';
+
+export interface WeatherOptions {
+  readonly json?: boolean;
+  readonly label?: HourLabel;
+  readonly latitude?: number;
+  readonly longitude?: number;
+  readonly elevation?: number;
+  readonly utcOffset?: number;
+}
+
+interface Read {
+  readonly raw: RawYear;
+  readonly clock: Pick<Study['weather'], 'addMinutes' | 'acceptClock'>;
+  /** As the user can type it. */
+  readonly path: string;
+}
+
+const placeOf = (o: WeatherOptions): { [K in keyof Place]: Place[K] | null } => ({
+  latitudeDeg: o.latitude ?? null,
+  longitudeDeg: o.longitude ?? null,
+  elevationM: o.elevation ?? null,
+  utcOffsetH: o.utcOffset ?? null,
+});
+
+const readFile = async (typed: string, options: WeatherOptions, cwd: string): Promise<Read> => {
+  const bytes = await readWeatherFile(resolve(cwd, typed), typed);
+  const { readWeather } = await import('../weather/index.ts');
+  const label = options.label ?? null;
+  const raw = await readWeather({ source: typed, bytes, label, place: placeOf(options) });
+  return { raw, clock: { addMinutes: 0, acceptClock: false }, path: typed };
+};
+
+/** The weather of a study, with the study's columns, place and clock. */
+const readOfStudy = async (typed: string, cwd: string): Promise<Read> => {
+  const { study, raw, weatherPath } = await readStudyInputs(typed, cwd);
+  return { raw, clock: study.weather, path: weatherPath };
+};
+
+/** What a weather file holds and how far to trust it. */
+export const weather = async (typed: string, options: WeatherOptions, io: Io): Promise<void> => {
+  const { raw, clock, path } = isStudyName(typed)
+    ? await readOfStudy(typed, io.cwd)
+    : await readFile(typed, options, io.cwd);
+  const [{ readyYear }, { weatherFacts }] = await Promise.all([
+    import('../study.ts'),
+    import('./weather-facts.ts'),
+  ]);
+  const facts = weatherFacts(readyYear(raw, clock));
+  if (options.json) {
+    const { factsJson } = await import('./weather-json.ts');
+    return io.out(factsJson(facts));
+  }
+  const { weatherScreen } = await import('./weather-screen.ts');
+  io.out(weatherScreen(facts, path));
+};
