@@ -1,33 +1,51 @@
-/** Columns into which a square collector is cut to add up overlapping shadows; 24 keeps the shade within 2 %. */
-const COLUMNS = 24;
-const REACH = 2;
+/** A lower sun than this sine is taken at it: light from so low is weak, and no field is deeper than 100 collectors. */
+const LOWEST_UP = 0.01;
 
 /**
  * Share of a square collector on a mast that is shaded by its neighbours, 0..1, when all face the sun and stand on a
- * level square grid aligned with north. Seen from the sun, the nearer collector stands lower by its distance times
- * the sine of the sun's height, so every shadow rises from the lower edge; where shadows overlap the higher counts.
- * Plain geometry; neighbours up to two masts away.
+ * level square grid aligned with north. Plain geometry, exact for collectors that have room to turn (GCR up to 0.5).
+ *
+ * Seen from the sun, a collector nearer it hangs lower by its distance times the sine of the sun's height and aside by
+ * its distance across; of the unit square it covers the lower part, from one side edge inwards. So taking neighbours
+ * from the nearest on, what is still lit at the bottom is one gap, `left..right`, until it closes.
  * @param up direction cosines of the sun, above 0
  * @param gcr area of a collector over the ground of one mast
  */
 export const mastFieldShade = (east: number, north: number, up: number, gcr: number): number => {
   const pitch = 1 / Math.sqrt(gcr);
   const level = Math.hypot(east, north);
-  if (level === 0) return 0;
-  const [e, n] = [east / level, north / level];
-  const covered = new Float64Array(COLUMNS);
-  for (let i = -REACH; i <= REACH; i++) {
-    for (let j = -REACH; j <= REACH; j++) {
-      const towards = pitch * (i * e + j * n);
-      if (towards <= 0) continue;
-      const height = 1 - towards * up;
-      const aside = pitch * (i * n - j * e);
-      if (height <= 0 || Math.abs(aside) >= 1) continue;
-      for (let column = 0; column < COLUMNS; column++) {
-        const x = (column + 0.5) / COLUMNS;
-        if (x > aside && x < 1 + aside && height > covered[column]) covered[column] = height;
+  const sine = Math.max(up, LOWEST_UP);
+  // Neighbours stand `pitch` off or further and shade only while less than 1 aside.
+  if (level === 0 || sine * sine * (pitch * pitch - 1) >= 1) return 0;
+  // The grid looks alike from eight sides: turn the sun to where `ahead` is the greater component.
+  const ahead = (pitch * Math.max(Math.abs(east), Math.abs(north))) / level;
+  const beside = (pitch * Math.min(Math.abs(east), Math.abs(north))) / level;
+  const slope = beside / ahead;
+  let [left, right, shaded] = [0, 1, 0];
+  // In each line of masts across, only the two on either side of the sun's direction can shade.
+  let [leftLine, rightLine] = [1, 1];
+  while (left < right) {
+    const leftMast = Math.ceil(leftLine * slope);
+    const rightMast = Math.ceil(rightLine * slope) - 1;
+    const leftDistance = leftLine * ahead + leftMast * beside;
+    const rightDistance = rightLine * ahead + rightMast * beside;
+    const height = 1 - Math.min(leftDistance, rightDistance) * sine;
+    if (height <= 0) break;
+    if (leftDistance <= rightDistance) {
+      const edge = Math.min(right, 1 + leftLine * beside - leftMast * ahead);
+      if (edge > left) {
+        shaded += (edge - left) * height;
+        left = edge;
       }
+      leftLine++;
+    } else {
+      const edge = Math.max(left, rightLine * beside - rightMast * ahead);
+      if (edge < right) {
+        shaded += (right - edge) * height;
+        right = edge;
+      }
+      rightLine++;
     }
   }
-  return covered.reduce((sum, height) => sum + height, 0) / COLUMNS;
+  return shaded;
 };
