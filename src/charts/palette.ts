@@ -13,9 +13,6 @@ export const LIGHT = { beam: '#E2A336', sky: '#3E6F9E', ground: '#5A4632' } as c
 export const ON_LIGHT = { beam: INK, sky: PAPER, ground: PAPER } as const;
 
 export const BAR = '#3E6F9E';
-/** A loss that is a gain: open bars, so that colour is not the only sign. */
-export const BAR_GAIN = '#FFFFFF';
-
 export interface SeriesStyle {
   readonly color: string;
   readonly dash: readonly number[];
