@@ -49,15 +49,15 @@ export const start = async (folder: string, io: Io): Promise<void> => {
     refuseToOverwrite(path, folder, [...files.keys()]);
     writeNew(path, files);
   });
-  const at = (name: string) => join(folder, name);
+  const study = join(folder, STUDY);
+  const weather = join(folder, SAMPLE_WEATHER);
+  const column = Math.max(study.length, weather.length) + 2;
   io.out(
     [
-      `Wrote ${at(STUDY)}            a study with every key explained, ready to edit`,
-      `Wrote ${at(SAMPLE_WEATHER)}   an hourly year of an invented place, until you put your own in`,
-      '',
-      `Next  trackworth compare ${shellWord(at(STUDY))}`,
-      `Then  put your site's weather file under weather.file, your mounts and your quotes; what is left blank is`,
-      '      named in the report as not counted.',
+      `Wrote  ${study.padEnd(column)}a study with every key explained, ready to edit`,
+      `       ${weather.padEnd(column)}an hourly year of an invented place, until you put your own in`,
+      `Next   trackworth compare ${shellWord(study)}`,
+      'Then   name your own weather file, mounts and quotes in the study; what you leave blank is listed as not counted',
       '',
     ].join('\n'),
   );

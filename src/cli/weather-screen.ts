@@ -15,9 +15,6 @@ const SEVERITY_WORDS: Record<Severity, string> = { block: 'BLOCKS', warning: 'Wa
 const named = (name: string, text: string): string => name.padEnd(INDENT) + wrapped(text, COLUMNS, INDENT);
 
 const whole = (x: number): string => x.toFixed(0).replace(/\B(?=(\d{3})+$)/g, ' ');
-const signed = (x: number, digits: number): string =>
-  `${x.toFixed(digits).startsWith('-') ? '' : '+'}${x.toFixed(digits)}`.replace(/^[+-](?=[0.]+$)/, '');
-
 const place = ({ site: s }: WeatherFacts): string => {
   const side = (deg: number, plus: string, minus: string) =>
     `${Math.abs(deg).toFixed(2)} ${deg < 0 ? minus : plus}`;
@@ -55,20 +52,6 @@ const components = ({ components: c }: WeatherFacts): string => {
     : `${derived.map((key) => key.toUpperCase()).join(' and ')} worked out from the other components`;
 };
 
-const clock = (f: WeatherFacts): string => {
-  if (f.time_shift_min === null) return 'cannot be told from this year';
-  const minutes = signed(f.time_shift_min, 0);
-  return (
-    `the year fits the sun best with ${minutes === '0' ? 'nothing' : `${minutes} min`} added to its times ` +
-    `(${f.time_shift_sure ? 'sharp' : 'not sharp'})`
-  );
-};
-
-const closure = ({ closure: c }: WeatherFacts): string =>
-  c
-    ? `GHI less DNI·cos z and DHI: mean ${signed(c.bias_w_m2, 1)}, rms ${c.rms_w_m2.toFixed(1)} W/m² over ${whole(c.hours)} hours of daylight`
-    : 'not checked: it needs all three components in the file';
-
 const air = ({ temperature_c: t, wind_10m_ms: w }: WeatherFacts): string => {
   const temperature = t
     ? `${t.least.toFixed(1)} to ${t.most.toFixed(1)} °C, mean ${t.mean.toFixed(1)}`
@@ -78,11 +61,6 @@ const air = ({ temperature_c: t, wind_10m_ms: w }: WeatherFacts): string => {
     : 'no wind';
   return `${temperature}; ${wind}`;
 };
-
-const night = (f: WeatherFacts): string =>
-  f.dropped_night_kwh_m2 > 0
-    ? `${f.dropped_night_kwh_m2.toFixed(2)} kWh/m² of global light in hours without sun, dropped`
-    : 'no light in hours without sun';
 
 /** What a weather file holds, how far to trust it and why: at most 100 columns. */
 export const weatherScreen = (f: WeatherFacts, path: string): string => {
@@ -95,9 +73,6 @@ export const weatherScreen = (f: WeatherFacts, path: string): string => {
     ...sums(f),
     '',
     named('Components', components(f)),
-    named('Closure', closure(f)),
-    named('Clock', clock(f)),
-    named('Night', night(f)),
     named('Air', air(f)),
     ...(f.findings.length > 0 ? [''] : []),
     ...f.findings.map(({ severity, text, fix }) =>

@@ -1,0 +1,140 @@
+/**
+ * The public functions of trackworth, in the order of its flow. All of them are pure: no disk, clock or console.
+ * The short way, from a study's text and a weather file's bytes to every figure of a report:
+ *
+ *     const study = await readStudy({ file: 'site.yaml', text });
+ *     const year = await readWeather({ source: study.weather.file, bytes, place: study.site });
+ *     const comparison = compareMounts(study, year);
+ *
+ * The single stages serve whoever wants one of them alone.
+ */
+
+// Advice: which mount, how sure, and why
+export { type AdviceInput, type AdviceMount, advise } from './advice/index.ts';
+// Charts: results → Vega-Lite specifications → SVG
+export { type Chart, chartSpecs, prepareFont, renderSvg, type VegaLiteSpec } from './charts/index.ts';
+// Cost: cost per kWh, what a tracker may cost, and the fixed array in its place
+export {
+  type BreakEven,
+  breakEven,
+  type CostOfEnergy,
+  type CostSpec,
+  capitalRecoveryFactor,
+  costOfEnergy,
+  type FinanceSpec,
+  lcoePerKwh,
+  presentCost,
+  presentEnergy,
+  type Renewal,
+  sameEnergy,
+} from './cost/index.ts';
+// Energy: from light on the plane to delivered kWh, stage after stage
+export {
+  type ArraySpec,
+  type ChainSpec,
+  type Delivered,
+  type DriveSpec,
+  deliver,
+  type LossSpec,
+  lightThrough,
+  type ModuleSpec,
+  moduleTemperatureC,
+  planeViews,
+  type Stage,
+} from './energy/index.ts';
+// Inputs: the study file
+export { readStudy, type Study, type StudyMount, studyJsonSchema, studyTemplate } from './inputs/index.ts';
+
+// Mounts: where a plane points in every hour, and the shade of its rows
+export {
+  backtrackTurn,
+  type DualAxis,
+  type FixedTilt,
+  type MountGeometry,
+  type Pointing,
+  pointMount,
+  type ResolvedGeometry,
+  type RoofPlane,
+  type RowSpec,
+  resolveBest,
+  rowShade,
+  type SingleAxis,
+} from './mounts/index.ts';
+// Report: results → text
+export {
+  memoMarkdown,
+  monthlyCsv,
+  mountsCsv,
+  type ReportExtras,
+  reportFiles,
+  resultsJson,
+  type ScreenOptions,
+  screenTable,
+} from './report/index.ts';
+// Study: the whole calculation, and its result
+export type {
+  AdviceResult,
+  Comparison,
+  Confidence,
+  LimitStatus,
+  MountKind,
+  MountResult,
+  Objective,
+  SkyModel,
+} from './shared/index.ts';
+// What all stages share
+export {
+  describeProblem,
+  type Finding,
+  type HourLabel,
+  type HourlyYear,
+  type Origin,
+  type Place,
+  type Problem,
+  type Severity,
+  TrackworthError,
+  type WeatherFormat,
+} from './shared/index.ts';
+// Sky: light on tilted planes, and the fixed plane that collects most
+export {
+  type OrientationMap,
+  orientationMap,
+  planeIrradiation,
+  type SkyHours,
+  skyOverHours,
+  splitGlobal,
+} from './sky/index.ts';
+export { compareMounts, type ReadyYear, readyYear } from './study.ts';
+// Sun: where it stands, when it rises, and every hour of a year
+export {
+  type RiseSet,
+  relativeAirMass,
+  type SunHours,
+  type SunPosition,
+  sunOverHours,
+  sunPosition,
+  sunriseSunset,
+} from './sun/index.ts';
+// Weather: a file's bytes → a year of hours, and how far to trust it
+export {
+  fillByClosure,
+  type RawYear,
+  readWeather,
+  type TableColumn,
+  type TableColumns,
+  type WeatherFindings,
+  type WeatherInput,
+  weatherFindings,
+} from './weather/index.ts';
+// Wind: screening only; structure belongs to the local code and a licensed engineer
+export {
+  type EdgeGeometry,
+  type Exposure,
+  exposureCoefficient,
+  type HighestEdge,
+  highestEdge,
+  type VelocityPressure,
+  velocityPressure,
+  type WindSpec,
+  windAtHeight,
+} from './wind/index.ts';
