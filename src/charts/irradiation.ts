@@ -150,7 +150,7 @@ const outsideGroundValues = (
         row: s.row,
         end: forSpec(mounts[s.row].irradiation_kwh_m2),
         text: `ground ${whole(s.kwh_m2)}`,
-        shift: Math.ceil(textWidth(total, 12, true)) + 13,
+        shift: Math.ceil(textWidth(total, 12, true)) + 17,
       };
     });
   return values.length === 0

@@ -1,6 +1,9 @@
-import { describe, expect, test } from 'vitest';
+import { describe, expect, test, vi } from 'vitest';
 import { chartSpecs, type FontMetrics, renderSvg } from '../../src/charts/index.ts';
 import { HOSTILE, interFont, VARIANTS } from './support.ts';
+
+// Drawing may be slow on a busy machine; no test here asserts a time.
+vi.setConfig({ testTimeout: 120_000 });
 
 const NAMES = ['irradiation', 'months', 'cost', 'orientation', 'losses'];
 let font: FontMetrics | undefined;
