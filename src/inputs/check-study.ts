@@ -86,7 +86,7 @@ const anyKind = (kinds: MountSchemas) => {
   for (const kind of ['roof-plane', 'dual-axis', 'fixed-tilt', 'single-axis'] as const)
     for (const [key, schema] of Object.entries(kinds[kind].shape))
       merged[key] = z.optional(schema as z.ZodMiniType);
-  return z.strictObject({ ...merged, kind: z.unknown(), id: kinds['roof-plane'].shape.id });
+  return z.strictObject({ ...merged, kind: z.optional(z.unknown()), id: kinds['roof-plane'].shape.id });
 };
 
 const kindFault = (raw: unknown, path: Path, known: readonly MountKind[]): Fault => {

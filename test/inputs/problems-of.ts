@@ -24,10 +24,24 @@ export const problemsOf = async (text: string): Promise<readonly Problem[]> => {
   return trouble.problems;
 };
 
-/** The one problem of a study as `line:column field code`, with its words. */
-export const onlyProblem = async (text: string) => {
-  const problems = await problemsOf(text);
-  expect(problems.map((p) => `${p.line}:${p.column} ${p.field} ${p.code}`)).toHaveLength(1);
-  const [p] = problems;
-  return { ...p, place: `${p.line}:${p.column}` };
+/** Takes the marks (¦) out of a text and says which `line:column` stood behind each. */
+export const marked = (text: string): { text: string; places: string[] } => {
+  const parts = text.split('¦');
+  const places = parts.slice(0, -1).map((_, i) => {
+    const lines = parts
+      .slice(0, i + 1)
+      .join('')
+      .split('\n');
+    return `${lines.length}:${lines.at(-1)!.length + 1}`;
+  });
+  return { text: parts.join(''), places };
+};
+
+/** The one problem of a study; where the text holds a mark (¦), the problem must be there. */
+export const onlyProblem = async (withMark: string): Promise<Problem & { place: string }> => {
+  const { text, places } = marked(withMark);
+  const found = (await problemsOf(text)).map((p) => ({ ...p, place: `${p.line}:${p.column}` }));
+  expect(found.map((p) => `${p.place} ${p.field} ${p.code}`)).toHaveLength(1);
+  if (places.length > 0) expect(found[0].place).toBe(places[0]);
+  return found[0];
 };

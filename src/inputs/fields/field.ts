@@ -48,3 +48,14 @@ export const field = <T>(text: FieldText, read: (raw: unknown) => T) => {
   });
   return schema.register(hints, { description, examples: [example], ...form });
 };
+
+/** One word in place of the value; where neither fits, the refusal names both. */
+export const orWord = <T, W extends string>(raw: unknown, word: W, read: (raw: unknown) => T): T | W => {
+  if (typeof raw === 'string' && raw.trim() === word) return word;
+  try {
+    return read(raw);
+  } catch (trouble) {
+    if (trouble instanceof Refusal) throw new Refusal(`${trouble.expected}, or ${word}`, trouble.fix);
+    throw trouble;
+  }
+};

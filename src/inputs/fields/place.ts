@@ -12,14 +12,13 @@ export const coordinate = (convert: Convert, what: 'latitude' | 'longitude', des
   const example = what === 'latitude' ? '40.0167' : '-105.25';
   const range = { min: -limit, max: limit };
   const rule: QuantityRule = { what: `a ${what}`, unit: 'deg', range, example, description };
-  const outside =
-    what === 'latitude' ? 'North is positive, south negative.' : 'East is positive, west negative.';
+  const fix = what === 'latitude' ? 'North is positive, south negative.' : 'East is positive, west negative.';
   return field({ description, example, expected: quantityWords(rule), form: numberOrText(range) }, (raw) => {
     const letter = typeof raw === 'string' ? HEMISPHERE.exec(plainText(raw)) : null;
-    if (!letter) return readQuantity(raw, { ...rule, outside }, convert);
+    if (!letter) return readQuantity(raw, { ...rule, fix }, convert);
     const side = letter[2].toUpperCase();
-    if (side !== plus && side !== minus) throw new Refusal(quantityWords(rule), outside);
-    const value = readQuantity(letter[1], { ...rule, outside }, convert);
+    if (side !== plus && side !== minus) throw new Refusal(quantityWords(rule), fix);
+    const value = readQuantity(letter[1], { ...rule, fix }, convert);
     return side === plus ? value : -value;
   });
 };

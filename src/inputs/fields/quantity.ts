@@ -12,8 +12,8 @@ export interface QuantityRule {
   readonly range: Range;
   readonly example: string;
   readonly description: string;
-  /** What to try where a number falls outside the range, beyond the example. */
-  readonly outside?: string;
+  /** What to do about a wrong value; else the example is named. */
+  readonly fix?: string;
 }
 
 const UNIT_EXAMPLES: Record<(typeof KIND_OF_UNIT)[Unit], string> = {
@@ -26,31 +26,37 @@ const UNIT_EXAMPLES: Record<(typeof KIND_OF_UNIT)[Unit], string> = {
 const UNIT_WORDS: Partial<Record<Unit, string>> = { deg: 'degrees', min: 'minutes' };
 
 /** The words of a quantity field for messages. */
-export const quantityWords = ({ what, unit, range }: QuantityRule): string =>
+export const quantityWords = ({ what, unit, range }: Omit<QuantityRule, 'description'>): string =>
   `${what} in ${UNIT_WORDS[unit] ?? unit}${rangeWords(range)}`;
 
 /** A number in the documented unit, or text with any unit of its kind, to the documented unit. */
-export const readQuantity = (raw: unknown, rule: QuantityRule, convert: Convert): number => {
-  const { unit, example, range, outside } = rule;
+export const readQuantity = (
+  raw: unknown,
+  rule: Omit<QuantityRule, 'description'>,
+  convert: Convert,
+): number => {
+  const { unit, example, range } = rule;
+  const fix = rule.fix ?? `Write for example ${example}.`;
   const expected = quantityWords(rule);
   const feet = unit === 'm' && typeof raw === 'string' ? FEET_AND_INCHES.exec(plainText(raw)) : null;
   const [amount, written] = feet
     ? [Number(feet[1]) * 12 + Number(feet[2]), 'in']
-    : numberAndRest(raw, expected, example);
+    : numberAndRest(raw, expected, fix);
   const value = written === '' ? amount : convert(amount, written, unit);
   if (value === null) {
     const units = UNIT_EXAMPLES[KIND_OF_UNIT[unit]];
     throw new Refusal(expected, `"${written}" is no unit for it here; use ${units}, for example ${example}.`);
   }
-  if (!inRange(value, range)) throw new Refusal(expected, outside ?? `Write for example ${example}.`);
+  if (!inRange(value, range)) throw new Refusal(expected, fix);
   return value;
 };
 
-/** Either a number or text that holds a number: what an editor can check of a quantity. */
-export const numberOrText = (range: Range): Record<string, unknown> => ({
+/** A number, text that holds one, or the one word given: what an editor can check of a quantity. */
+export const numberOrText = (range: Range, word?: string): Record<string, unknown> => ({
   anyOf: [
     { type: 'number', ...rangeForm(range) },
     { type: 'string', pattern: '[0-9]' },
+    ...(word === undefined ? [] : [{ const: word }]),
   ],
 });
 

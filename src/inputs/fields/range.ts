@@ -48,18 +48,14 @@ export const FEET_AND_INCHES = new RegExp(
 export const plainText = (text: string): string => text.replace(/[−–]/g, '-').replace(/\s+/g, ' ').trim();
 
 /** A raw value as a number and the text behind it (`''` for a bare number); refuses all else in the field's words. */
-export const numberAndRest = (raw: unknown, expected: string, example: string): [number, string] => {
+export const numberAndRest = (raw: unknown, expected: string, fix: string): [number, string] => {
   if (typeof raw === 'number' && Number.isFinite(raw)) return [raw, ''];
-  if (typeof raw !== 'string') throw new Refusal(expected, `Write for example ${example}.`);
+  if (typeof raw !== 'string') throw new Refusal(expected, fix);
   const text = plainText(raw);
   if (/^[+-]?\d+,\d/.test(text))
-    throw new Refusal(
-      expected,
-      `Write numbers with a decimal point and no other marks, for example ${example}.`,
-    );
+    throw new Refusal(expected, `Write numbers with a decimal point and no other marks. ${fix}`);
   const parts = NUMBER_AND_REST.exec(text);
-  if (!parts || !Number.isFinite(Number(parts[1])))
-    throw new Refusal(expected, `Write for example ${example}.`);
+  if (!parts || !Number.isFinite(Number(parts[1]))) throw new Refusal(expected, fix);
   return [Number(parts[1]), parts[2].trim()];
 };
 

@@ -1,4 +1,4 @@
-import { field, Refusal } from './field.ts';
+import { field, orWord, Refusal } from './field.ts';
 import { numberOrText } from './quantity.ts';
 import type { Range } from './range.ts';
 import { fromPercent, inRange, numberAndRest, rangeWords } from './range.ts';
@@ -18,7 +18,7 @@ const asPercent = (x: number): string => `${Number((x * 100).toPrecision(12))} %
 /** `6 %`, `0.06` or `0.5 %/yr` to a fraction. A bare number above 1 can only be meant as per cent, so it is refused. */
 export const readShare = (raw: unknown, { what, range, example }: ShareRule): number => {
   const expected = `${what},${rangeWords(range, asPercent)}`;
-  const [amount, written] = numberAndRest(raw, expected, example);
+  const [amount, written] = numberAndRest(raw, expected, `Write for example ${example}.`);
   if (written === '' && amount > 1)
     throw new Refusal(expected, `Write ${amount} % if per cent is meant; a bare number is a fraction of 1.`);
   if (written !== '' && !PER_CENT.test(written))
@@ -46,15 +46,13 @@ export const share = (rule: ShareRule) =>
   );
 
 /** A share, or the one word given. */
-export const shareOr = <const W extends string>(rule: ShareRule, word: W) => {
-  const expected = `${rule.what},${rangeWords(rule.range, asPercent)}, or ${word}`;
-  const { anyOf } = numberOrText(rule.range) as { anyOf: object[] };
-  const form = { anyOf: [...anyOf, { const: word }] };
-  return field(
-    { description: rule.description, example: rule.example, expected, form },
-    (raw): number | W => {
-      if (typeof raw === 'string' && raw.trim() === word) return word;
-      return readShare(raw, rule);
+export const shareOr = <const W extends string>(rule: ShareRule, word: W) =>
+  field(
+    {
+      description: rule.description,
+      example: rule.example,
+      expected: `${rule.what},${rangeWords(rule.range, asPercent)}, or ${word}`,
+      form: numberOrText(rule.range, word),
     },
+    (raw): number | W => orWord(raw, word, () => readShare(raw, rule)),
   );
-};

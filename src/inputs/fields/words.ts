@@ -63,7 +63,7 @@ export const money = (what: string, description: string, example: string) => {
     ],
   };
   return field({ description, example, expected, form }, (raw) => {
-    const [amount, rest] = numberAndRest(raw, expected, example);
+    const [amount, rest] = numberAndRest(raw, expected, `Write for example ${example}.`);
     if (rest !== '')
       throw new Refusal(expected, `Write the number alone; the currency goes under finance.currency.`);
     if (!(amount >= 0))
@@ -76,7 +76,7 @@ const YEARS = /^(?:y|yr|yrs|year|years|a)$/i;
 
 export const readWhole = (raw: unknown, what: string, range: Range, example: string): number => {
   const expected = `${what}, a whole number${rangeWords(range)}`;
-  const [amount, rest] = numberAndRest(raw, expected, example);
+  const [amount, rest] = numberAndRest(raw, expected, `Write for example ${example}.`);
   if (!(rest === '' || YEARS.test(rest)) || !Number.isInteger(amount) || !inRange(amount, range))
     throw new Refusal(expected, `Write for example ${example}.`);
   return amount;

@@ -13,7 +13,7 @@ export const array = (convert: Convert) => {
       range: { above, max },
       example,
       description: `${description} A bare number is metres.`,
-      outside: `A bare number is metres; write for example ${example}.`,
+      fix: `A bare number is metres; write for example ${example}.`,
     });
   return z
     .strictObject({
@@ -43,7 +43,7 @@ export const array = (convert: Convert) => {
               range: { min: 1, max: 5000 },
               example: '430 W',
               description: 'Rated power of one module; a bare number is W.',
-              outside: 'A bare number is W; write for example 430 W.',
+              fix: 'A bare number is W; write for example 430 W.',
             }),
             length: z.optional(side('a length', '1.76 m', 0, 10, 'Longer side of one module.')),
             width: z.optional(side('a width', '1.13 m', 0, 10, 'Shorter side of one module.')),

@@ -25,7 +25,7 @@ export const wind = (convert: Convert) => {
           example: '115 mph',
           description:
             "The code's 3-second gust at 10 m, not the wind of a weather file; a bare number is m/s.",
-          outside: 'A bare number is metres per second; write for example 115 mph.',
+          fix: 'A bare number is metres per second; write for example 115 mph.',
         }),
       ),
       exposure: z.optional(
