@@ -5,7 +5,7 @@ const STEP_MIN = 20;
 /** Trials reach so many steps to either side of where the search begins: 140 minutes. */
 const STEPS = 7;
 /** Light above the clear-sky limit beyond this share of the year's light is no longer chance; trackworth's choice. */
-const EXCESS_SHARE = 0.003;
+export const EXCESS_SHARE = 0.003;
 /** With the clock right the edges leave 17 to 41 minutes of play (16 public years, test/weather/clock.test.ts); more means hills, haze or fog. */
 const USUAL_PLAY_MIN = 50;
 const HALF_PLAY_MIN = 12;

@@ -1,5 +1,6 @@
 import type { Finding, HourlyYear } from '../shared/index.ts';
-import { BLOCKING_SHIFT_MIN, type Clock } from './clock.ts';
+import { BLOCKING_SHIFT_MIN, type Clock, FAR_MIN } from './clock.ts';
+import { EXCESS_SHARE } from './clock-estimates.ts';
 
 /** Clocks are off by whole or half hours as a rule: within so many minutes of one, that one is meant. */
 const ROUND_TO_MIN = 30;
@@ -22,14 +23,14 @@ const percent = (share: number): string => `${(share * 100).toFixed(1)} %`;
 
 /** What the clock's evidence comes to: a blocking shift, a fit, or that it cannot be told. */
 export const clockFindings = (clock: Clock, year: HourlyYear, addedMin: number): Finding[] => {
-  const { play, seasonsApartMin, lightAheadMin, timeShiftMin } = clock;
+  const { asFiled, seasonsApartMin, lightAheadMin, timeShiftMin } = clock;
   const main = seasonsApartMin === null ? mainFinding(clock, addedMin) : seasonFinding(seasonsApartMin);
   const findings = [main];
-  if (play && play.least > play.most)
+  if (timeShiftMin === null && Math.min(asFiled.morning, asFiled.evening) > EXCESS_SHARE)
     findings.push({
       code: 'day-too-long',
       severity: 'warning',
-      text: `Light comes before sunrise and stays after sunset (${percent(clock.asFiled.morning + clock.asFiled.evening)} of the year's light is more than a clear sky gives at that hour): the year does not belong to this place.`,
+      text: `Light comes before sunrise and stays after sunset (${percent(asFiled.morning + asFiled.evening)} of the year's light is more than a clear sky gives at that hour), and no other clock mends both: the year does not belong to this place.`,
       fix: 'Check latitude, hemisphere and the order of the months.',
     });
   const lean = lightAheadMin - (timeShiftMin ?? 0);
@@ -51,7 +52,7 @@ export const clockFindings = (clock: Clock, year: HourlyYear, addedMin: number):
 };
 
 const mainFinding = (clock: Clock, addedMin: number): Finding => {
-  const { timeShiftMin, sure } = clock;
+  const { timeShiftMin } = clock;
   if (timeShiftMin === null)
     return {
       code: 'clock-unknown',
@@ -59,21 +60,20 @@ const mainFinding = (clock: Clock, addedMin: number): Finding => {
       text: 'Whether the clock of the file fits the sun cannot be told from its light.',
       fix: 'Check the time zone and what the time labels stand for (weather.label).',
     };
-  if (!sure || Math.abs(timeShiftMin) < BLOCKING_SHIFT_MIN)
+  if (Math.abs(timeShiftMin) < BLOCKING_SHIFT_MIN)
     return {
-      code: sure ? 'clock-fits' : 'clock-unsure',
-      severity: sure || Math.abs(timeShiftMin) < BLOCKING_SHIFT_MIN ? 'note' : 'warning',
-      text: sure
-        ? `The clock fits the sun ${timeShiftMin === 0 ? 'to the minute' : `within ${minutes(timeShiftMin)}`}.`
-        : `The year fits the sun best with ${minutes(timeShiftMin)} ${timeShiftMin < 0 ? 'taken from' : 'added to'} its times, on weak evidence.`,
+      code: 'clock-fits',
+      severity: 'note',
+      text: `The clock fits the sun ${timeShiftMin === 0 ? 'to the minute' : `within ${minutes(timeShiftMin)}`}.`,
       fix: '',
     };
   const total = addedMin + likelyShiftMin(timeShiftMin);
+  const placeFirst = Math.abs(timeShiftMin) > FAR_MIN ? 'Check longitude and offset from UTC first. ' : '';
   return {
     code: 'clock-shift',
     severity: 'block',
     text: `The file's clock is about ${minutes(timeShiftMin)} ${lateOrEarly(timeShiftMin)} the sun, which flatters trackers: ${evidence(clock, timeShiftMin).join('; ')}.`,
-    fix: `Write weather: { add_minutes: ${total} } in the study, or weather: { accept_clock: true } to stand by the file's times.`,
+    fix: `${placeFirst}Write weather: { add_minutes: ${total} } in the study, or weather: { accept_clock: true } to stand by the file's times.`,
   };
 };
 

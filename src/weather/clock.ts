@@ -1,25 +1,23 @@
 import { type HourlyYear, MONTH_FIRST_DAY } from '../shared/index.ts';
-import { closureEstimate, type EdgePlay, type Estimate, edgeEstimate, edgePlay } from './clock-estimates.ts';
+import { closureEstimate, type Estimate, edgeEstimate, edgePlay } from './clock-estimates.ts';
 import { lightAheadOfSunMin, type Misfit, misfit, type Season } from './clock-statistics.ts';
 import type { SunHours } from './sun-hours.ts';
 
 /** A shift of so many minutes or more withholds the recommendation. */
 export const BLOCKING_SHIFT_MIN = 20;
 /** Centres of light and sun this far apart are more than weather: search there, not about zero. */
-const FAR_MIN = 100;
+export const FAR_MIN = 100;
 /** Summer and winter this far apart are on different clocks. */
 const SEASONS_APART_MIN = { low: 40, high: 80 };
 
 /** What the year's light says about its clock. */
 export interface Clock {
-  /** Minutes to add to the file's times so that the year fits the sun best; null where it cannot be told. */
+  /** Minutes to add to the file's times so that the year fits the sun best; null where no evidence is sharp. */
   readonly timeShiftMin: number | null;
-  readonly sure: boolean;
   /** Evidence of GHI = DNI cos z + DHI; null where a component is derived or missing, or beam is scarce. */
   readonly closure: Estimate | null;
   /** Evidence of light before sunrise and after sunset. */
   readonly edges: Estimate | null;
-  readonly play: EdgePlay | null;
   /** May to August less November to February where that looks like daylight saving time, else null. */
   readonly seasonsApartMin: number | null;
   /** How much earlier the year's light is centred than the sun's path. Weather does that too. */
@@ -61,18 +59,15 @@ export const estimateClock = (year: HourlyYear, sunAt: (offsetMin: number) => Su
   const estimates = (season: Season) => {
     const trial = trials(season);
     const closure = measured ? closureEstimate(trial, from) : null;
-    const play = edgePlay(trial, from);
-    return { trial, closure, play, edges: edgeEstimate(play) };
+    return { trial, closure, edges: edgeEstimate(edgePlay(trial, from)) };
   };
-  const { trial, closure, play, edges } = estimates(wholeYear);
+  const { trial, closure, edges } = estimates(wholeYear);
   const chosen = choose(closure, edges);
-  const timeShiftMin = chosen ? Math.round(chosen.shiftMin) + 0 : null;
+  const timeShiftMin = chosen?.sure ? Math.round(chosen.shiftMin) + 0 : null;
   return {
     timeShiftMin,
-    sure: chosen?.sure ?? false,
     closure,
     edges,
-    play,
     seasonsApartMin: seasonsApart(choose, [estimates(midyear), estimates(turnOfYear)]),
     lightAheadMin,
     asFiled: trial(0),

@@ -10,7 +10,7 @@ import type { SunHours } from './sun-hours.ts';
 export interface WeatherFindings {
   /** Minutes to add to the file's times so that the year fits the sun; null where it cannot be told. */
   readonly timeShiftMin: number | null;
-  /** Whether the evidence for `timeShiftMin` is sharp. */
+  /** Whether the clock could be judged; `timeShiftMin` is null where not. */
   readonly sure: boolean;
   /** Global light recorded in hours without sun, kWh/m2; the study drops it. */
   readonly droppedNightKwhM2: number;
@@ -61,7 +61,7 @@ export const weatherFindings = (
   ];
   return {
     timeShiftMin: clock.timeShiftMin,
-    sure: clock.sure,
+    sure: clock.timeShiftMin !== null,
     droppedNightKwhM2: night.kwhM2,
     annual,
     ghiMonthlyKwhM2: monthlySums(year.ghi).map((wh) => wh / 1000),

@@ -5,7 +5,7 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe } from 'vitest';
-import type { HourlyYear } from '../../src/shared/index.ts';
+import type { HourlyYear, Place } from '../../src/shared/index.ts';
 import { sunOverHours } from '../../src/sun/index.ts';
 import { fillByClosure, type RawYear, readWeather, type SunHours } from '../../src/weather/index.ts';
 
@@ -30,16 +30,34 @@ export const realYearBytes = (name: string): Uint8Array => {
 export const realRawYear = (name: string): Promise<RawYear> =>
   readWeather({ source: name, bytes: realYearBytes(name) });
 
-/** The sun over the hours of a year, moved by `offsetMin`: what `weatherFindings` asks for. */
-export const sunOf =
-  (year: Pick<HourlyYear, 'place' | 'calendarYear'>) =>
-  (offsetMin: number): SunHours =>
-    sunOverHours(year.place, year.calendarYear, offsetMin);
+const suns = new WeakMap<Place, Map<number, SunHours>>();
 
-/** One weather file, complete. */
-export const realYear = async (name: string): Promise<HourlyYear> => {
+/** The sun over the hours of a year, moved by `offsetMin`: what `weatherFindings` asks for. Remembered by place. */
+export const sunOf = (
+  year: Pick<HourlyYear, 'place' | 'calendarYear'>,
+): ((offsetMin: number) => SunHours) => {
+  const known = suns.get(year.place) ?? new Map<number, SunHours>();
+  suns.set(year.place, known);
+  return (offsetMin) => {
+    const { cosZenith, sunlit, extraterrestrialWm2 } =
+      known.get(offsetMin) ?? sunOverHours(year.place, year.calendarYear, offsetMin);
+    known.set(offsetMin, { cosZenith, sunlit, extraterrestrialWm2 });
+    return { cosZenith, sunlit, extraterrestrialWm2 };
+  };
+};
+
+const years = new Map<string, Promise<HourlyYear>>();
+
+const complete = async (name: string): Promise<HourlyYear> => {
   const raw = await realRawYear(name);
   return fillByClosure(raw, sunOf(raw)(raw.offsetMin));
+};
+
+/** One weather file, complete. Remembered: do not change its columns. */
+export const realYear = (name: string): Promise<HourlyYear> => {
+  const year = years.get(name) ?? complete(name);
+  years.set(name, year);
+  return year;
 };
 
 /** `describe` where the folder is given, else a skipped block whose title says why. */
