@@ -13,7 +13,8 @@ export const erbsDiffuseFraction = (clearness: number): number => {
 const COS_87 = Math.cos((87 * Math.PI) / 180);
 
 /**
- * Splits a year of global horizontal irradiance into direct normal and diffuse, hour by hour (means over the hour).
+ * Splits a year of global horizontal irradiance into direct normal and diffuse, hour by hour (means over the hour, its
+ * dark part included), so that global is direct times the cosine of the zenith over the sunlit part, plus diffuse.
  * Direct is capped at the extraterrestrial irradiance of the hour; what it may not hold goes to the diffuse.
  */
 export const splitGlobal = (
@@ -22,12 +23,12 @@ export const splitGlobal = (
 ): { dni: Float64Array; dhi: Float64Array } => {
   const [dni, dhi] = [new Float64Array(ghi.length), new Float64Array(ghi.length)];
   for (let h = 0; h < ghi.length; h++) {
-    // Mean of cos z over the whole hour, dark part included, as the irradiance is.
-    const cosZenith = sun.cosZenith[h] * sun.sunlit[h];
+    const cosZenith = sun.cosZenith[h];
     if (cosZenith <= 0 || ghi[h] <= 0) continue;
-    const diffuse = ghi[h] * erbsDiffuseFraction(ghi[h] / (sun.extraterrestrialWm2[h] * cosZenith));
-    const beam = sun.cosZenith[h] < COS_87 ? 0 : (ghi[h] - diffuse) / cosZenith;
-    dni[h] = Math.min(beam, sun.extraterrestrialWm2[h]);
+    const extraterrestrial = sun.extraterrestrialWm2[h] * sun.sunlit[h];
+    const diffuse = ghi[h] * erbsDiffuseFraction(ghi[h] / (extraterrestrial * cosZenith));
+    const beam = cosZenith < COS_87 ? 0 : (ghi[h] - diffuse) / cosZenith;
+    dni[h] = Math.min(beam, extraterrestrial);
     dhi[h] = ghi[h] - dni[h] * cosZenith;
   }
   return { dni, dhi };

@@ -136,7 +136,7 @@ describe('the inverter’s ceiling', () => {
     const open = deliver(sky, tracker, spec);
     for (const ceiling of [0.3, 0.6, 0.8]) {
       let expected = 0;
-      for (const p of open.uncappedKwPerKw) expected += p > ceiling ? ceiling : p;
+      for (const p of open.uncappedKwPerKw) expected += Math.min(p, ceiling);
       const d = deliver(sky, tracker, { ...spec, ceilingKwPerKw: ceiling });
       expect(d.energyKwhPerKw / expected).toBeCloseTo(1, 12);
       expect(d.energyKwhPerKw).toBeLessThan(open.energyKwhPerKw);

@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
-import { erbsDiffuseFraction, splitGlobal } from '../../src/sky/index.ts';
+import { yearlySum } from '../../src/shared/index.ts';
+import { erbsDiffuseFraction, planeIrradiation, skyOverHours, splitGlobal } from '../../src/sky/index.ts';
 import { sunOverHours } from '../../src/sun/index.ts';
 import { everyDay, placeAt } from '../shared/invented-sky.ts';
 import { Worst } from '../shared/seeded.ts';
@@ -45,17 +46,26 @@ test('splitting conserves the light, invents no negative and no beam above that 
         );
         const { dni, dhi } = splitGlobal(ghi, sun);
         for (let h = from; h < Math.min(8760, from + 24); h++) {
-          const again = dni[h] * sun.cosZenith[h] * sun.sunlit[h] + dhi[h];
+          const again = dni[h] * sun.cosZenith[h] + dhi[h];
           expect(Math.abs(again - ghi[h])).toBeLessThan(1e-9);
           expect(dni[h]).toBeGreaterThanOrEqual(0);
           expect(dhi[h]).toBeGreaterThanOrEqual(0);
-          expect(dni[h]).toBeLessThanOrEqual(sun.extraterrestrialWm2[h]);
+          expect(dni[h]).toBeLessThanOrEqual(sun.extraterrestrialWm2[h] * sun.sunlit[h]);
           if (sun.cosZenith[h] < Math.cos((87 * Math.PI) / 180)) expect(dni[h]).toBe(0);
         }
       },
     ),
     { numRuns: 60 },
   );
+});
+
+test('split light put back on a level plane is the global light again, sunrise and sunset hours included', () => {
+  const sun = sunOverHours(placeAt(50), everyDay(2020));
+  for (const share of [0.15, 0.5, 0.72]) {
+    const ghi = sun.cosZenith.map((c, h) => share * c * sun.sunlit[h] * sun.extraterrestrialWm2[h]);
+    const sky = skyOverHours(sun, { ghi, ...splitGlobal(ghi, sun) }, 0.2, 'isotropic');
+    expect(planeIrradiation(sun, sky, 0, 180) / (yearlySum(ghi) / 1000)).toBeCloseTo(1, 12);
+  }
 });
 
 test('light in an hour without sun is not split', () => {
