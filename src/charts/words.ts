@@ -8,15 +8,12 @@ const NAME_WIDTH = 210;
 /** A mount's label as one drawable line; its id where the label is blank. */
 export const labelOf = (mount: MountResult): string => oneLine(mount.label) || oneLine(mount.id) || 'mount';
 
-/** A mount within a sentence: `the tracker` for a plain word, a longer label as its user wrote it. */
-export const named = (mount: MountResult): string => {
-  const label = shorten(labelOf(mount), NAME_WIDTH, 12);
-  return /^[a-z][a-z-]*$/.test(label) ? `the ${label}` : label;
-};
+/** A mount within a sentence, as its user calls it. */
+export const named = (mount: MountResult): string => shorten(labelOf(mount), NAME_WIDTH, 12);
 
 /** First letter of a sentence, unless it belongs to a name. */
 export const sentence = (text: string): string =>
-  text.startsWith('the ') || /^[a-z][a-z ]/.test(text) ? text[0].toUpperCase() + text.slice(1) : text;
+  /^[a-z][a-z -]/.test(text) ? text[0].toUpperCase() + text.slice(1) : text;
 
 /** `a`, `a and b`, `a, b and c`. */
 export const listed = (items: readonly string[]): string =>

@@ -6,7 +6,7 @@ import { formatDaily, formatNumber, formatPlace } from './numbers.ts';
 import { capitalised, oneLine } from './plain-text.ts';
 import { tableLines, tableNotes } from './screen-table.ts';
 import { showsWind, windDeferral } from './wind-words.ts';
-import { monthInFull, mountById, nameOf, ratingWords, withShortNames, yearWords } from './words.ts';
+import { monthInFull, mountById, nameOf, ratingWords, yearWords } from './words.ts';
 
 export interface ScreenOptions {
   /** Where the memo lies, as the user would type it; null or absent: no report was written. */
@@ -60,7 +60,7 @@ const answerLines = (c: Comparison, width: number): string[] =>
     c.advice.headline,
     ...gainSentences(c).slice(0, MOST_GAINS),
     ...c.advice.switch_points.slice(0, MOST_SWITCH_POINTS),
-  ].flatMap((text) => wrap(capitalised(withShortNames(c, text)), width));
+  ].flatMap((text) => wrap(capitalised(oneLine(text)), width));
 
 /** What the month that is worst for the chosen mount (else the reference) could give at its best fixed tilt. */
 const monthLine = (c: Comparison, width: number): string[] => {
@@ -81,7 +81,7 @@ const insteadLines = (c: Comparison, width: number): string[] => {
     return [
       ...(i === 0 ? [''] : []),
       shorten(`Instead of ${tracker}`, width),
-      ...hanging('  same energy', withShortNames(c, answer.text), INDENT, width),
+      ...hanging('  same energy', oneLine(answer.text), INDENT, width),
     ];
   });
 };
@@ -96,17 +96,11 @@ const findingLines = (c: Comparison, width: number): string[] =>
     );
 
 /** Paragraphs under one name, the first few, and how many the memo adds. */
-const namedLines = (
-  c: Comparison,
-  name: string,
-  texts: readonly string[],
-  most: number,
-  width: number,
-): string[] => {
+const namedLines = (name: string, texts: readonly string[], most: number, width: number): string[] => {
   const shown = texts.slice(0, most);
   const left = texts.length - shown.length;
   const all = left > 0 ? [...shown, `and ${left} more, in the memo and in --json`] : shown;
-  return all.flatMap((text, i) => hanging(i === 0 ? name : '', withShortNames(c, text), INDENT, width));
+  return all.flatMap((text, i) => hanging(i === 0 ? name : '', oneLine(text), INDENT, width));
 };
 
 /** A file name as it may be pasted into a shell. */
@@ -144,13 +138,12 @@ export const screenTable = (
     '',
     ...(lack === null ? [] : hanging('Costs', lack, INDENT, width)),
     ...namedLines(
-      c,
       'Not counted',
       c.not_counted.map(({ what, effect }) => (effect ? `${what}: ${effect}` : what)),
       MOST_NOT_COUNTED,
       width,
     ),
-    ...namedLines(c, 'Doubt', c.advice.doubts, MOST_DOUBTS, width),
+    ...namedLines('Doubt', c.advice.doubts, MOST_DOUBTS, width),
     ...(showsWind(c) ? hanging('Wind', oneLine(windDeferral(c)), INDENT, width) : []),
     ...closingLines(c, reportPath, width),
   ];

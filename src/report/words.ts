@@ -67,24 +67,11 @@ export const mountById = (c: Comparison, id: string): MountResult => {
 };
 
 /** A mount's label on one line; with its id where another mount carries the same label. */
-export const labelOf = (c: Comparison, mount: MountResult): string => {
+export const nameOf = (c: Comparison, mount: MountResult): string => {
   const label = oneLine(mount.label);
   const shared = c.mounts.filter((other) => oneLine(other.label) === label).length > 1;
-  return shared || label === '' ? `${label} (${mount.id})`.trim() : label;
+  return label !== mount.id && (shared || label === '') ? `${label} (${mount.id})`.trim() : label;
 };
-
-/** The short name: the label that the study gives, or the id where the label is only `id (kind)`. */
-export const nameOf = (c: Comparison, mount: MountResult): string => {
-  const label = labelOf(c, mount);
-  return label.startsWith(`${mount.id} (`) ? mount.id : label;
-};
-
-/** A sentence of the advice with short names in place of labels, on one line. */
-export const withShortNames = (c: Comparison, text: string): string =>
-  c.mounts.reduce((sentence, mount) => {
-    const [label, name] = [labelOf(c, mount), nameOf(c, mount)];
-    return name === mount.id && label !== name ? sentence.replaceAll(label, name) : sentence;
-  }, oneLine(text));
 
 /** `34° tilt, facing 186° (south)`; null for trackers. */
 export const facingWords = (mount: MountResult): string | null =>

@@ -151,20 +151,6 @@ test('the report path is shown only where a report was written, and the next com
   expect(screenTable(spaced)).toContain(`trackworth weather 'a b'\\''s.epw'`);
 });
 
-test('a label that only repeats the id and the kind gives way to the id, in sentences too', () => {
-  const c = invented();
-  const long = 'tracker (single-axis tracker)';
-  const mounts = c.mounts.map((m) => (m.id === 'tracker' ? { ...m, label: long } : m));
-  const advice = {
-    ...c.advice,
-    switch_points: [`On cost per kWh ${long} wins over Ground rack below 67 USD/kW.`],
-  };
-  const text = screenTable({ ...c, mounts, advice });
-  expect(text).not.toContain(long);
-  expect(text).toMatch(/^ {2}tracker +1 558/m);
-  expect(text).toContain('On cost per kWh tracker wins over Ground rack');
-});
-
 test('each gain is told with its reference, its range over the skies and what it costs', () => {
   const text = screen(invented);
   expect(text).toMatch(

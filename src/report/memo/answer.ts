@@ -1,7 +1,8 @@
 import type { Comparison } from '../../shared/index.ts';
 import { gainSentences } from '../gain-words.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
-import { CONFIDENCE_WORDS, mountById, nameOf, withShortNames } from '../words.ts';
+import { oneLine } from '../plain-text.ts';
+import { CONFIDENCE_WORDS, mountById, nameOf } from '../words.ts';
 import { blocks, section } from './section.ts';
 import { sentences } from './sentences.ts';
 
@@ -19,9 +20,9 @@ export const answer = (c: Comparison): string =>
     `# ${md(c.title) || 'Untitled study'}`,
     `**${md(c.advice.headline)}**`,
     blocking(c),
-    sentences(c, gainSentences(c)),
+    sentences(gainSentences(c)),
     c.advice.switch_points.length > 0
-      ? blocks('What would reverse it:', sentences(c, c.advice.switch_points))
+      ? blocks('What would reverse it:', sentences(c.advice.switch_points))
       : '',
   );
 
@@ -32,15 +33,15 @@ const leads = (c: Comparison): string => {
   const rows = c.advice.leads.map(({ over, confidence, why }) => [
     md(nameOf(c, mountById(c, over))),
     CONFIDENCE_WORDS[confidence],
-    md(withShortNames(c, why)),
+    md(oneLine(why)),
   ]);
   return blocks(
     `How sure the lead of ${choice} is. The doubt is half the range, over the Perez, Hay-Davies and Reindl skies, of the ` +
-      'difference between the two mounts. A lead is clear above twice the doubt where like is compared with like, and likely above the doubt.',
+      'difference between the two mounts. A lead is clear above twice the doubt where like is compared with like, and likely above the doubt. The doubt holds nothing else: ' +
+      'prices, upkeep, life and downtime are taken as given, and what they may move stands under "What would reverse it".',
     mdTable(['Over', 'The lead is', 'Why'], ['left', 'left', 'left'], rows),
   );
 };
 
 /** Why, with every number that the answer rests on. */
-export const reasons = (c: Comparison): string =>
-  section('Reasons', sentences(c, c.advice.reasons), leads(c));
+export const reasons = (c: Comparison): string => section('Reasons', sentences(c.advice.reasons), leads(c));

@@ -1,7 +1,7 @@
 import type { Comparison } from '../../shared/index.ts';
 import type { ReportExtras } from '../extras.ts';
 import { md, mdTable } from '../markdown.ts';
-import { withShortNames } from '../words.ts';
+import { oneLine } from '../plain-text.ts';
 import { figure } from './overview.ts';
 import { blocks, section } from './section.ts';
 import { sentences } from './sentences.ts';
@@ -20,16 +20,16 @@ export const notCountedAndDoubts = (c: Comparison): string =>
               ['left', 'left'],
               c.not_counted.map(({ what, effect }) => [
                 md(what),
-                effect ? md(withShortNames(c, effect)) : 'not worked out',
+                effect ? md(oneLine(effect)) : 'not worked out',
               ]),
             ),
           ),
     ),
-    section('Doubts', sentences(c, c.advice.doubts)),
+    section('Doubts', sentences(c.advice.doubts)),
   );
 
 /** For whoever builds and keeps it. */
-export const cautions = (c: Comparison): string => section('Cautions', sentences(c, c.advice.cautions));
+export const cautions = (c: Comparison): string => section('Cautions', sentences(c.advice.cautions));
 
 /** Everything that a reviewer needs to repeat the work. */
 export const appendix = (

@@ -2,8 +2,8 @@ import type { Comparison, MountResult } from '../../shared/index.ts';
 import { costLack, currencyOf, hasCapital, INCOMPLETE_NOTE, lcoeColumns } from '../cost-columns.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
 import { formatGain, formatNumber, formatPercent, formatSigned } from '../numbers.ts';
-import { capitalised } from '../plain-text.ts';
-import { isTracker, mountById, nameOf, withShortNames } from '../words.ts';
+import { capitalised, oneLine } from '../plain-text.ts';
+import { isTracker, mountById, nameOf } from '../words.ts';
 import { blocks, section } from './section.ts';
 
 const terms = ({ finance: f }: Comparison): string =>
@@ -83,7 +83,7 @@ const sameEnergy = (c: Comparison): string =>
   mdList(
     c.comparisons.same_energy.map(
       ({ tracker_id, text }) =>
-        `In place of ${md(nameOf(c, mountById(c, tracker_id)))}, for the same energy: ${md(withShortNames(c, text))}`,
+        `In place of ${md(nameOf(c, mountById(c, tracker_id)))}, for the same energy: ${md(oneLine(text))}`,
     ),
   );
 

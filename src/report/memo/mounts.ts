@@ -1,7 +1,7 @@
 import type { Comparison, MountResult } from '../../shared/index.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
 import { formatNumber, formatPercent, UNKNOWN } from '../numbers.ts';
-import { facingWords, isTracker, KIND_WORDS, labelOf, mountById, nameOf } from '../words.ts';
+import { facingWords, isTracker, KIND_WORDS, mountById, nameOf } from '../words.ts';
 import { blocks, section } from './section.ts';
 
 const pointing = (mount: MountResult): string => {
@@ -29,7 +29,7 @@ export const mountsCompared = (c: Comparison): string =>
       ['Mount', 'Kind', 'Where it points', 'Rows', 'Land'],
       ['left', 'left', 'left', 'left', 'right'],
       c.mounts.map((m) => [
-        md(labelOf(c, m)),
+        md(nameOf(c, m)),
         KIND_WORDS[m.kind],
         pointing(m),
         md(m.rows),

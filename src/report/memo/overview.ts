@@ -5,7 +5,7 @@ import { limitsInWords } from '../limit-words.ts';
 import { type Align, md, mdImage, mdTable } from '../markdown.ts';
 import { formatDaily, formatGain, formatNumber } from '../numbers.ts';
 import { capitalised } from '../plain-text.ts';
-import { arrayWords, labelOf, mountById, nameOf } from '../words.ts';
+import { arrayWords, KIND_WORDS, mountById, nameOf } from '../words.ts';
 import { section } from './section.ts';
 
 interface Column {
@@ -19,7 +19,7 @@ const columnsFor = (c: Comparison): Column[] => {
   const money = md(currencyOf(c));
   const right = (head: string, cell: Column['cell']): Column => ({ head, align: 'right', cell });
   return [
-    { head: 'Mount', align: 'left', cell: (m) => md(labelOf(c, m)) },
+    { head: 'Mount', align: 'left', cell: (m) => `${md(nameOf(c, m))}, ${KIND_WORDS[m.kind]}` },
     right('Delivered, kWh/kW·yr', (m) => formatNumber(m.energy_kwh_per_kw)),
     ...(c.mounts.length > 1
       ? [

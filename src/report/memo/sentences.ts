@@ -1,8 +1,6 @@
-import type { Comparison } from '../../shared/index.ts';
 import { md, mdList } from '../markdown.ts';
-import { capitalised } from '../plain-text.ts';
-import { withShortNames } from '../words.ts';
+import { capitalised, oneLine } from '../plain-text.ts';
 
-/** Sentences of the advice as an inert list, with short names. */
-export const sentences = (c: Comparison, texts: readonly string[]): string =>
-  mdList(texts.map((text) => md(capitalised(withShortNames(c, text)))));
+/** Sentences of the advice as an inert list. */
+export const sentences = (texts: readonly string[]): string =>
+  mdList(texts.map((text) => md(capitalised(oneLine(text)))));
