@@ -8,6 +8,7 @@ import { keysAt, unknownKeyFix } from './known-keys.ts';
 import { nearest } from './nearest.ts';
 import type { MountSchemas, RawMount } from './schema/mounts.ts';
 import { mountSchemas } from './schema/mounts.ts';
+import { everything, once } from './schema/present.ts';
 import type { RawStudy } from './schema/study.ts';
 import { studyFrame } from './schema/study.ts';
 import { found, shown } from './shown.ts';
@@ -42,7 +43,7 @@ const faultsOf = (
   issues: readonly z.core.$ZodIssue[],
   raw: unknown,
   schema: z.core.$ZodType,
-  homes: readonly Home[],
+  homes: () => readonly Home[],
   root: Path,
 ): Fault[] =>
   issues.flatMap((issue): Fault[] => {
@@ -56,7 +57,7 @@ const faultsOf = (
         key,
         expected: 'a known key',
         found: shown(key),
-        fix: unknownKeyFix(key, rawAt(here, [key]), known, homes),
+        fix: unknownKeyFix(key, rawAt(here, [key]), known, homes()),
       }));
     }
     if (issue.code === 'custom') {
@@ -84,9 +85,9 @@ const faultsOf = (
 const anyKind = (kinds: MountSchemas) => {
   const merged: Record<string, z.ZodMiniType> = {};
   for (const kind of ['roof-plane', 'dual-axis', 'fixed-tilt', 'single-axis'] as const)
-    for (const [key, schema] of Object.entries(kinds[kind].shape))
+    for (const [key, schema] of Object.entries(kinds[kind]().shape))
       merged[key] = z.optional(schema as z.ZodMiniType);
-  return z.strictObject({ ...merged, kind: z.optional(z.unknown()), id: kinds['roof-plane'].shape.id });
+  return z.strictObject({ ...merged, kind: z.optional(z.unknown()), id: kinds['roof-plane']().shape.id });
 };
 
 const kindFault = (raw: unknown, path: Path, known: readonly MountKind[]): Fault => {
@@ -102,13 +103,13 @@ const kindFault = (raw: unknown, path: Path, known: readonly MountKind[]): Fault
 
 /** Checks raw values against the schemas: the frame of the study, then each mount by its own kind. */
 export const checkStudy = (raw: unknown, convert: Convert): CheckedStudy => {
-  const frameSchema = studyFrame(convert);
+  const frameSchema = studyFrame(convert, (...path) => rawAt(raw, path) !== undefined);
   const kinds = mountSchemas(convert);
   const known = Object.keys(kinds) as MountKind[];
-  const homes: Home[] = [
-    ...known.map((kind) => ({ schema: kinds[kind], name: `${kind} mounts` })),
-    { schema: frameSchema, name: '' },
-  ];
+  const homes = once((): Home[] => [
+    ...known.map((kind) => ({ schema: kinds[kind](), name: `${kind} mounts` })),
+    { schema: studyFrame(convert, everything), name: '' },
+  ]);
   const frame = z.safeParse(frameSchema, raw);
   const faults = frame.success ? [] : faultsOf(frame.error.issues, raw, frameSchema, homes, []);
   const mounts: RawMount[] = [];
@@ -121,7 +122,7 @@ export const checkStudy = (raw: unknown, convert: Convert): CheckedStudy => {
     }
     const kind = known.find((k) => k === mount.kind);
     if (!kind) faults.push(kindFault(mount.kind, [...path, 'kind'], known));
-    const schema = kind ? kinds[kind] : anyKind(kinds);
+    const schema = kind ? kinds[kind]() : anyKind(kinds);
     const result = z.safeParse(schema as z.ZodMiniType, mount);
     if (!result.success) faults.push(...faultsOf(result.error.issues, mount, schema, homes, path));
     else if (kind) mounts.push(result.data as RawMount);

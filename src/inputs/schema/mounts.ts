@@ -3,6 +3,7 @@ import type { Convert } from '../convert.ts';
 import { azimuth, azimuthOrBest, swing, tilt, tiltOrBest } from '../fields/angles.ts';
 import { hints } from '../fields/field.ts';
 import { mountParts } from './mount-parts.ts';
+import { once } from './present.ts';
 
 type Parts = ReturnType<typeof mountParts>;
 
@@ -67,16 +68,18 @@ const dualAxis = ({ common, rows, slant, axisHeight, drive }: Parts) =>
     .strictObject({ kind: z.literal('dual-axis'), ...common, rows, slant, axis_height: axisHeight, drive })
     .register(hints, { description: 'A tracker that faces the sun. Without rows it is a lone mast.' });
 
-/** One schema for each kind of mount; its keys are the kind's own. */
+/** One schema for each kind of mount, made at its first use; its keys are the kind's own. */
 export const mountSchemas = (convert: Convert) => {
-  const parts = mountParts(convert);
+  const parts = once(() => mountParts(convert));
   return {
-    'roof-plane': roofPlane(convert, parts),
-    'fixed-tilt': fixedTilt(convert, parts),
-    'single-axis': singleAxis(convert, parts),
-    'dual-axis': dualAxis(parts),
+    'roof-plane': once(() => roofPlane(convert, parts())),
+    'fixed-tilt': once(() => fixedTilt(convert, parts())),
+    'single-axis': once(() => singleAxis(convert, parts())),
+    'dual-axis': once(() => dualAxis(parts())),
   };
 };
 
 export type MountSchemas = ReturnType<typeof mountSchemas>;
-export type RawMount = { [K in keyof MountSchemas]: z.infer<MountSchemas[K]> }[keyof MountSchemas];
+export type RawMount = {
+  [K in keyof MountSchemas]: z.infer<ReturnType<MountSchemas[K]>>;
+}[keyof MountSchemas];

@@ -6,6 +6,8 @@ import { array, losses } from './array.ts';
 import { finance } from './money.ts';
 import { idField } from './mount-parts.ts';
 import { mountSchemas } from './mounts.ts';
+import type { Present } from './present.ts';
+import { everything, wherePresent } from './present.ts';
 import { site, sky } from './site.ts';
 import { weather } from './weather.ts';
 import { wind } from './wind.ts';
@@ -13,8 +15,20 @@ import { wind } from './wind.ts';
 // A study is read once: compiling validators, which zod does for speed in long runs, would cost more than it saves.
 z.config({ jitless: true });
 
+const advice = () =>
+  z
+    .strictObject({
+      objective: z.optional(
+        choice(
+          ['lowest cost per kWh', 'most kWh per kW', 'best worst month'],
+          'What the choice is to serve. Blank: cost per kWh where costs are given, else kWh per kW.',
+        ),
+      ),
+    })
+    .register(hints, { description: 'What the recommendation is to serve.' });
+
 /** The keys of a study in the order of the template; `mounts` holds whatever `oneMount` says. */
-const studyWith = <M extends z.ZodMiniType>(convert: Convert, oneMount: M) =>
+const studyWith = <M extends z.ZodMiniType>(convert: Convert, oneMount: M, has: Present) =>
   z
     .strictObject({
       $schema: z.optional(
@@ -31,29 +45,18 @@ const studyWith = <M extends z.ZodMiniType>(convert: Convert, oneMount: M) =>
           example: 'Orlin Bench',
         }),
       ),
-      weather: weather(convert),
-      site: z.optional(site(convert)),
-      sky: z.optional(sky()),
-      array: z.optional(array(convert)),
+      weather: weather(convert, has),
+      site: wherePresent(has('site'), () => z.optional(site(convert))),
+      sky: wherePresent(has('sky'), () => z.optional(sky())),
+      array: wherePresent(has('array'), () => z.optional(array(convert))),
       mounts: z
         .array(oneMount)
         .check(z.minLength(1))
         .register(hints, { description: 'The mounts to compare.' }),
-      losses: z.optional(losses()),
-      finance: z.optional(finance()),
-      wind: z.optional(wind(convert)),
-      advice: z.optional(
-        z
-          .strictObject({
-            objective: z.optional(
-              choice(
-                ['lowest cost per kWh', 'most kWh per kW', 'best worst month'],
-                'What the choice is to serve. Blank: cost per kWh where costs are given, else kWh per kW.',
-              ),
-            ),
-          })
-          .register(hints, { description: 'What the recommendation is to serve.' }),
-      ),
+      losses: wherePresent(has('losses'), () => z.optional(losses())),
+      finance: wherePresent(has('finance'), () => z.optional(finance())),
+      wind: wherePresent(has('wind'), () => z.optional(wind(convert))),
+      advice: wherePresent(has('advice'), () => z.optional(advice())),
       compare_with: z.optional(
         idField(
           'the id of a fixed mount',
@@ -63,14 +66,19 @@ const studyWith = <M extends z.ZodMiniType>(convert: Convert, oneMount: M) =>
     })
     .register(hints, { title: 'trackworth study', description: 'What to compare, where, at what cost.' });
 
-/** Everything but the inside of the mounts, which are read one by one by their own kind. */
-export const studyFrame = (convert: Convert) => studyWith(convert, z.unknown());
+/** Everything that the study has but the inside of its mounts, which are read one by one by their own kind. */
+export const studyFrame = (convert: Convert, has: Present) => studyWith(convert, z.unknown(), has);
 
 /** The whole study in one schema, for editors. */
 export const wholeStudy = (convert: Convert) => {
   const kinds = mountSchemas(convert);
-  const { 'roof-plane': roof, 'fixed-tilt': rack, 'single-axis': single, 'dual-axis': dual } = kinds;
-  return studyWith(convert, z.discriminatedUnion('kind', [roof, rack, single, dual]));
+  const mount = z.discriminatedUnion('kind', [
+    kinds['roof-plane'](),
+    kinds['fixed-tilt'](),
+    kinds['single-axis'](),
+    kinds['dual-axis'](),
+  ]);
+  return studyWith(convert, mount, everything);
 };
 
 export type RawStudy = z.infer<ReturnType<typeof studyFrame>>;

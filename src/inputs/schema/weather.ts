@@ -3,6 +3,8 @@ import type { Convert } from '../convert.ts';
 import { hints } from '../fields/field.ts';
 import { quantity } from '../fields/quantity.ts';
 import { choice, flag, text } from '../fields/words.ts';
+import type { Present } from './present.ts';
+import { wherePresent } from './present.ts';
 
 const column = (description: string) => {
   const name = () => text({ what: 'the name of a column', description, example: 'GHI' });
@@ -16,7 +18,21 @@ const column = (description: string) => {
     .register(hints, { description });
 };
 
-export const weather = (convert: Convert) =>
+const table = () =>
+  z
+    .strictObject({
+      time: column('Column with local standard time, ISO 8601 (2021-01-01 00:00).'),
+      ghi: z.optional(column('Column of global horizontal irradiance, W/m2.')),
+      dni: z.optional(column('Column of direct normal irradiance, W/m2.')),
+      dhi: z.optional(column('Column of diffuse horizontal irradiance, W/m2.')),
+      temperature: z.optional(column('Column of air temperature, degrees C.')),
+      wind: z.optional(column('Column of wind speed at 10 m, m/s.')),
+    })
+    .register(hints, {
+      description: 'For a plain table: which column holds what. Needs ghi, or dni and dhi.',
+    });
+
+export const weather = (convert: Convert, has: Present) =>
   z
     .strictObject({
       file: text({
@@ -24,20 +40,7 @@ export const weather = (convert: Convert) =>
         description: 'EPW, TMY2, TMY3 or a plain table, gzipped or not: relative to this study, or absolute.',
         example: 'orlin.epw',
       }),
-      table: z.optional(
-        z
-          .strictObject({
-            time: column('Column with local standard time, ISO 8601 (2021-01-01 00:00).'),
-            ghi: z.optional(column('Column of global horizontal irradiance, W/m2.')),
-            dni: z.optional(column('Column of direct normal irradiance, W/m2.')),
-            dhi: z.optional(column('Column of diffuse horizontal irradiance, W/m2.')),
-            temperature: z.optional(column('Column of air temperature, degrees C.')),
-            wind: z.optional(column('Column of wind speed at 10 m, m/s.')),
-          })
-          .register(hints, {
-            description: 'For a plain table: which column holds what. Needs ghi, or dni and dhi.',
-          }),
-      ),
+      table: wherePresent(has('weather', 'table'), () => z.optional(table())),
       label: z.optional(
         choice(
           ['end', 'start', 'middle'],
