@@ -28,7 +28,7 @@ const oneAxis = (sun: TextbookSun, axisAzimuthDeg: number, axisTiltDeg: number, 
   pointSingleAxis(sun, { kind: 'single-axis', axisAzimuthDeg, axisTiltDeg, swingDeg, rows: null });
 const dualAxis = (sun: TextbookSun): Pointing => pointDualAxis(sun, { kind: 'dual-axis', rows: null });
 
-test('without air the six mounts of five latitudes receive what geometry says', () => {
+test('without air the six mounts of five latitudes receive what geometry says', { timeout: 60_000 }, () => {
   // By the minute in another program (Python), kWh/m2: level, tilt = latitude, level axis north-south, level axis
   // east-west, axis tilted at latitude, dual axis.
   const table = [
@@ -95,7 +95,9 @@ test('an axis parallel to the earth’s keeps the sun at the declination from it
   }
 });
 
-test('by the minute, the clear textbook year at latitude 35 gives the tabled truth', () => {
+test('by the minute, the clear textbook year at latitude 35 gives the tabled truth', {
+  timeout: 60_000,
+}, () => {
   // Hour means from 1-minute data in another program (Python), kWh/m2. Cosines are clamped at 0.
   const sun = textbookSun(35, MINUTES);
   const sky = textbookSky(sun, 'clear');

@@ -80,7 +80,7 @@ describe.each(PLACES)('the clear textbook year at latitude %d', (latitude, north
     expect(Math.abs(value / tabled - 1), what).toBeLessThan(TOLERANCE);
   };
 
-  test('gives the tabled light on every fixed plane', () => {
+  test('gives the tabled light on every fixed plane', { timeout: 60_000 }, () => {
     const planes = byTilt(sun, sky, equatorward, HALF_DEGREES);
     near(planes[0].year, expected.level, 'level');
     const top = best(planes, 'year');
@@ -131,7 +131,7 @@ describe.each(PLACES)('the clear textbook year at latitude %d', (latitude, north
 });
 
 describe.each(PLACES)('the hazy textbook year at latitude %d', (latitude, north) => {
-  test('gives the tabled light, and trackers gain less than under the clear one', () => {
+  test('gives the tabled light, and trackers gain less than under the clear one', { timeout: 60_000 }, () => {
     const sun = textbookSun(latitude);
     const sky = textbookSky(sun, 'hazy');
     const expected = HAZY[north];

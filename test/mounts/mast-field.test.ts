@@ -36,7 +36,7 @@ const byRays = (sun: Vector, gcr: number, random: () => number, side = 70): numb
   return shaded / side ** 2;
 };
 
-test('the shade in a field of masts agrees with rays cast in space', () => {
+test('the shade in a field of masts agrees with rays cast in space', { timeout: 60_000 }, () => {
   const random = seeded(11);
   const worst = new Worst();
   let shadedCases = 0;
