@@ -1,12 +1,14 @@
 import type { Problems } from './problems.ts';
 
-/** The cells of the wanted columns of a delimited body: `cells[k][row]` belongs to `wanted[k]`. */
+/** The wanted cells of a delimited body, row by row. */
 export interface Cells {
   readonly count: number;
+  /** 1-based line of each row. */
   readonly line: Int32Array;
-  readonly cells: readonly string[][];
-  /** 1 where the row's number of cells was wrong (and reported): its cells are blank. */
+  /** 1 where the row's number of cells was wrong (and reported). */
   readonly faulty: Uint8Array;
+  /** Text of a row in the column `wanted[slot]`; blank in a faulty row. */
+  readonly cell: (slot: number, row: number) => string;
 }
 
 export interface CellRequest {
@@ -31,61 +33,65 @@ export const cutCells = async (request: CellRequest, problems: Problems): Promis
   return cutPlain(request, problems);
 };
 
-const collector = (request: CellRequest, problems: Problems) => {
-  const line: number[] = [];
-  const faulty: number[] = [];
-  const cells = request.wanted.map((): string[] => []);
-  return {
-    add(lineNumber: number, width: number, cellAt: (k: number) => string): void {
-      line.push(lineNumber);
-      const wrong = width !== request.width;
-      faulty.push(wrong ? 1 : 0);
-      for (let k = 0; k < cells.length; k++) cells[k].push(wrong ? '' : cellAt(k));
-      if (wrong)
-        problems.add({
-          code: 'column-count',
-          line: lineNumber,
-          expected: `${request.width} columns`,
-          found: String(width),
-          fix: 'Check the row for lost or surplus separators.',
-        });
-    },
-    done: (): Cells => ({
-      count: line.length,
-      line: Int32Array.from(line),
-      cells,
-      faulty: Uint8Array.from(faulty),
-    }),
-  };
-};
+const wrongWidth = (line: number, expected: number, found: number, problems: Problems): void =>
+  problems.add({
+    code: 'column-count',
+    line,
+    expected: `${expected} columns`,
+    found: String(found),
+    fix: 'Check the row for lost or surplus separators.',
+  });
 
-/** For bodies without quotation marks. */
+/** For bodies without quotation marks. Keeps where the cells lie and cuts them when asked: no string outlives its use. */
 export const cutPlain = (request: CellRequest, problems: Problems): Cells => {
   const { lines, from, delimiter, wanted, width } = request;
-  const rows = collector(request, problems);
-  const starts = new Int32Array(width + 1);
+  const room = Math.max(0, lines.length - from);
+  const [line, faulty] = [new Int32Array(room), new Uint8Array(room)];
+  const bounds = new Int32Array(room * wanted.length * 2);
+  const starts = new Int32Array(width + 2);
+  let row = 0;
   for (let i = from; i < lines.length; i++) {
     const text = lines[i];
     if (text.trim() === '') continue;
-    let count = 0;
-    let at = 0;
-    starts[0] = 0;
-    while (at >= 0) {
-      at = text.indexOf(delimiter, at);
-      count++;
-      if (at >= 0 && count <= width) starts[count] = ++at;
-      else if (at >= 0) at++;
+    const found = findCells(text, delimiter, starts);
+    line[row] = i + 1;
+    if (found === width)
+      for (let slot = 0; slot < wanted.length; slot++) {
+        const at = (row * wanted.length + slot) * 2;
+        bounds[at] = starts[wanted[slot]];
+        bounds[at + 1] = starts[wanted[slot] + 1] - 1;
+      }
+    else {
+      faulty[row] = 1;
+      wrongWidth(i + 1, width, found, problems);
     }
-    starts[count] = text.length + 1;
-    rows.add(i + 1, count, (k) => text.slice(starts[wanted[k]], starts[wanted[k] + 1] - 1));
+    row++;
   }
-  return rows.done();
+  return {
+    count: row,
+    line: line.subarray(0, row),
+    faulty: faulty.subarray(0, row),
+    cell: (slot, r) => {
+      const at = (r * wanted.length + slot) * 2;
+      return lines[line[r] - 1].slice(bounds[at], bounds[at + 1]);
+    },
+  };
+};
+
+/** Writes where each cell of a line starts, and one past the last; returns how many there are. */
+const findCells = (text: string, delimiter: string, starts: Int32Array): number => {
+  const code = delimiter.charCodeAt(0);
+  let count = 1;
+  starts[0] = 0;
+  for (let at = 0; at < text.length; at++) if (text.charCodeAt(at) === code) starts[count++] = at + 1; // beyond the array this is dropped, and the row is faulty
+  starts[count] = text.length + 1;
+  return count;
 };
 
 /** For bodies with quotation marks: csv-parse knows all their rules (RFC 4180). */
 export const cutQuoted = async (request: CellRequest, problems: Problems): Promise<Cells> => {
   const { parse, CsvError } = await import('csv-parse/sync');
-  const rows = collector(request, problems);
+  const rows: { line: number; record: string[] }[] = [];
   try {
     parse(request.lines.slice(request.from).join('\n'), {
       delimiter: request.delimiter,
@@ -94,7 +100,7 @@ export const cutQuoted = async (request: CellRequest, problems: Problems): Promi
       relax_column_count: true,
       max_record_size: 100_000,
       on_record: (record: string[], { lines }) => {
-        rows.add(request.from + lines, record.length, (k) => record[request.wanted[k]]);
+        rows.push({ line: request.from + lines, record });
         return null;
       },
     });
@@ -110,5 +116,13 @@ export const cutQuoted = async (request: CellRequest, problems: Problems): Promi
     });
     problems.throwIfAny({ cause });
   }
-  return rows.done();
+  const faulty = Uint8Array.from(rows, ({ record }) => (record.length === request.width ? 0 : 1));
+  for (const { line, record } of rows)
+    if (record.length !== request.width) wrongWidth(line, request.width, record.length, problems);
+  return {
+    count: rows.length,
+    line: Int32Array.from(rows, ({ line }) => line),
+    faulty,
+    cell: (slot, row) => (faulty[row] ? '' : rows[row].record[request.wanted[slot]]),
+  };
 };

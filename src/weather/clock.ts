@@ -7,6 +7,8 @@ import type { SunHours } from './sun-hours.ts';
 export const BLOCKING_SHIFT_MIN = 20;
 /** Centres of light and sun this far apart are more than weather: search there, not about zero. */
 export const FAR_MIN = 100;
+/** A year that fits so well has one clock. */
+const FITTING_SHIFT_MIN = 10;
 /** Summer and winter this far apart are on different clocks. */
 const SEASONS_APART_MIN = { low: 40, high: 80 };
 
@@ -64,11 +66,13 @@ export const estimateClock = (year: HourlyYear, sunAt: (offsetMin: number) => Su
   const { trial, closure, edges } = estimates(wholeYear);
   const chosen = choose(closure, edges);
   const timeShiftMin = chosen?.sure ? Math.round(chosen.shiftMin) + 0 : null;
+  // A clock that changes with the seasons does not fit the whole year: most years need no second look.
+  const fits = timeShiftMin !== null && Math.abs(timeShiftMin) < FITTING_SHIFT_MIN;
   return {
     timeShiftMin,
     closure,
     edges,
-    seasonsApartMin: seasonsApart(choose, [estimates(midyear), estimates(turnOfYear)]),
+    seasonsApartMin: fits ? null : seasonsApart([estimates(midyear), estimates(turnOfYear)]),
     lightAheadMin,
     asFiled: trial(0),
     shifted: timeShiftMin === null ? null : trial(timeShiftMin),
@@ -83,11 +87,10 @@ const choose = (closure: Estimate | null, edges: Estimate | null): Estimate | nu
   return blocks(edges) && !blocks(closure) ? edges : closure;
 };
 
-const seasonsApart = (
-  pick: typeof choose,
-  [summer, winter]: readonly { closure: Estimate | null; edges: Estimate | null }[],
-): number | null => {
-  const [a, b] = [pick(summer.closure, summer.edges), pick(winter.closure, winter.edges)];
+const seasonsApart = ([summer, winter]: readonly { closure: Estimate | null; edges: Estimate | null }[]):
+  | number
+  | null => {
+  const [a, b] = [choose(summer.closure, summer.edges), choose(winter.closure, winter.edges)];
   if (!a?.sure || !b?.sure) return null;
   const apart = a.shiftMin - b.shiftMin;
   const { low, high } = SEASONS_APART_MIN;

@@ -25,7 +25,7 @@ export const readNumbers = (
   const { missing, convert } = column;
   for (let row = 0; row < cells.count; row++) {
     if (cells.faulty[row]) continue;
-    const cell = cells.cells[slot][row];
+    const cell = cells.cell(slot, row);
     const plain = column.decimalComma ? cell.replace(',', '.') : cell;
     const value =
       parseCell(plain) ?? notANumber(cell, { line: cells.line[row], field: column.name }, problems);

@@ -104,31 +104,21 @@ const bodyBegins = (lines: readonly string[], problems: Problems): number => {
 const dates = (cells: Cells, problems: Problems): { hour: Int32Array; year: Int16Array } => {
   const hour = new Int32Array(cells.count).fill(UNKNOWN_HOUR);
   const year = new Int16Array(cells.count);
+  const number = (slot: number, row: number): number => parseCell(cells.cell(slot, row)) ?? Number.NaN;
   for (let row = 0; row < cells.count; row++) {
     if (cells.faulty[row]) continue;
-    const [y, m, d, h] = cells.cells.slice(0, 4).map((column) => parseCell(column[row]));
-    const day = dayOfYear(m ?? 0, d ?? 0);
-    if (isLeapDay(m ?? 0, d ?? 0)) hour[row] = LEAP_HOUR;
-    else if (
-      day >= 0 &&
-      y !== null &&
-      Number.isInteger(y) &&
-      h !== null &&
-      Number.isInteger(h) &&
-      h >= 1 &&
-      h <= 24
-    ) {
-      hour[row] = day * 24 + h - 1;
+    const [y, month, day, h] = [number(0, row), number(1, row), number(2, row), number(3, row)];
+    const dayIndex = dayOfYear(month, day);
+    if (isLeapDay(month, day)) hour[row] = LEAP_HOUR;
+    else if (dayIndex >= 0 && Number.isInteger(y) && Number.isInteger(h) && h >= 1 && h <= 24) {
+      hour[row] = dayIndex * 24 + h - 1;
       year[row] = y;
     } else
       problems.add({
         code: 'bad-date',
         line: cells.line[row],
         expected: 'year, month, day and hour 1 to 24',
-        found: cells.cells
-          .slice(0, 4)
-          .map((column) => column[row])
-          .join(','),
+        found: [0, 1, 2, 3].map((slot) => cells.cell(slot, row)).join(','),
         fix: 'Correct the date of the row.',
       });
   }
@@ -136,17 +126,19 @@ const dates = (cells: Cells, problems: Problems): { hour: Int32Array; year: Int1
 };
 
 const minuteNote = (cells: Cells): Finding[] => {
-  const odd = cells.cells[4].findIndex((m, row) => !cells.faulty[row] && Number(m) !== 0 && Number(m) !== 60);
-  return odd < 0
-    ? []
-    : [
-        {
-          code: 'minute-field',
-          severity: 'note',
-          text: `Line ${cells.line[odd]} has ${cells.cells[4][odd].trim()} in the minute field; EPW gives it no meaning and it was ignored.`,
-          fix: 'If the times are not the ends of the hours, say so under weather.label or weather.add_minutes.',
-        },
-      ];
+  for (let row = 0; row < cells.count; row++) {
+    const minute = cells.cell(4, row).trim();
+    if (cells.faulty[row] || Number(minute) === 0 || Number(minute) === 60) continue;
+    return [
+      {
+        code: 'minute-field',
+        severity: 'note',
+        text: `Line ${cells.line[row]} has ${minute} in the minute field; EPW gives it no meaning and it was ignored.`,
+        fix: 'If the times are not the ends of the hours, say so under weather.label or weather.add_minutes.',
+      },
+    ];
+  }
+  return [];
 };
 
 export const epw: WeatherReader = {

@@ -60,6 +60,7 @@ const settleMissing = (
   sun: SunHours,
   count: Count,
 ): boolean => {
+  if (!Number.isNaN(columns.ghi[h] + columns.dni[h] + columns.dhi[h])) return true; // as nearly always
   const missing = given.filter((name) => Number.isNaN(columns[name][h]));
   if (missing.length === 0) return true;
   const dark = sun.sunlit[h] === 0;

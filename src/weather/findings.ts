@@ -3,6 +3,7 @@ import { estimateClock } from './clock.ts';
 import { clockFindings } from './clock-findings.ts';
 import { type Closure, closureOf } from './closure.ts';
 import { breaches } from './limits.ts';
+import { thousands } from './numbers.ts';
 import { placeFindings } from './place-findings.ts';
 import type { SunHours } from './sun-hours.ts';
 
@@ -146,6 +147,6 @@ const sumFindings = (annual: WeatherFindings['annual'], sun: SunHours): Finding[
 const readFinding = (year: HourlyYear): Finding => ({
   code: 'year-read',
   severity: 'note',
-  text: `${HOURS.toLocaleString('en-US')} hours in ${year.format} format${year.station ? `, ${year.station}` : ''}; printed times stand for the ${year.label} of the hour${year.offsetMin === 0 ? '' : `, hours begin ${year.offsetMin} minutes past the full hour`}.`,
+  text: `${thousands(HOURS)} hours in ${year.format} format${year.station ? `, ${year.station}` : ''}; printed times stand for the ${year.label} of the hour${year.offsetMin === 0 ? '' : `, hours begin ${year.offsetMin} minutes past the full hour`}.`,
   fix: '',
 });

@@ -1,8 +1,7 @@
 import { HOURS, hourName } from '../shared/index.ts';
+import { thousands } from './numbers.ts';
 import type { Problems } from './problems.ts';
 import { LEAP_HOUR, type Reading, type Rows, UNKNOWN_HOUR } from './raw-year.ts';
-
-const thousands = (n: number): string => n.toLocaleString('en-US');
 
 /**
  * Checks that the rows are the 8,760 hours of one year, each once and in order. Reports leap days, surplus rows,

@@ -25,7 +25,7 @@ export const tableTimes = (cells: Cells, name: string, label: HourLabel, problem
   const begins = new Float64Array(cells.count).fill(UNKNOWN);
   for (let row = 0; row < cells.count; row++) {
     if (cells.faulty[row]) continue;
-    const time = ISO.exec(cells.cells[0][row]);
+    const time = ISO.exec(cells.cell(0, row));
     const [y, month, day, h, minute, second] = (time ?? []).slice(1).map((part) => Number(part ?? 0));
     const dayIndex = time ? dayOfYear(month, day) : -1;
     leap[row] = time && isLeapDay(month, day) ? 1 : 0;
@@ -65,7 +65,7 @@ const wholeHours = (begins: Float64Array, leap: Uint8Array, cells: Cells, proble
         code: 'uneven-time',
         line: cells.line[row],
         expected: 'the same minute past the hour as in the first row',
-        found: JSON.stringify(cells.cells[0][row].trim()),
+        found: JSON.stringify(cells.cell(0, row).trim()),
         fix: 'Give one row an hour, an hour apart.',
       });
   }
@@ -78,6 +78,6 @@ const badTime = (cells: Cells, row: number, name: string, problems: Problems): v
     line: cells.line[row],
     field: name,
     expected: 'local standard time without a zone, as 2021-01-31 13:00',
-    found: JSON.stringify(cells.cells[0][row].trim().slice(0, 40)),
+    found: JSON.stringify(cells.cell(0, row).trim().slice(0, 40)),
     fix: 'Rewrite the time column; the offset from UTC goes to site.utc_offset.',
   });

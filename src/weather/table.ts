@@ -26,7 +26,7 @@ const readTable = async ({ lines, table, label: wantedLabel, problems }: ReaderI
   const label = wantedLabel ?? 'end';
   const { offsetMin, ...times } = tableTimes(cells, columns.time.name, label, problems);
   const names = namedColumns(columns);
-  const decimalComma = hasDecimalComma(cells);
+  const decimalComma = hasDecimalComma(cells, names.length);
   const codes = { count: 0 };
   const missing = (value: number): boolean => MISSING_CODES.has(value) && ++codes.count > 0;
   const read = (quantity: (typeof QUANTITIES)[number]): Float64Array | null => {
@@ -82,10 +82,17 @@ const tabbed = (lines: readonly string[], from: number, timeColumn: number): str
     return cells.join('\t');
   });
 
-/** A decimal comma shows in the first cell with a fraction; a file that mixes both fails at the first of the other sort. */
-const hasDecimalComma = (cells: Cells): boolean =>
-  cells.cells.slice(1).some((column) => column.some((cell) => /^\s*[-+]?\d*,\d+\s*$/.test(cell))) &&
-  !cells.cells.slice(1).some((column) => column.some((cell) => /\d\.\d/.test(cell)));
+/** A decimal comma shows in cells such as 1,5. A file that has 1.5 as well fails at the first cell with a comma. */
+const hasDecimalComma = (cells: Cells, columns: number): boolean => {
+  let commas = false;
+  for (let slot = 1; slot < columns; slot++)
+    for (let row = 0; row < cells.count; row++) {
+      const cell = cells.cell(slot, row);
+      if (cell.includes('.')) return false;
+      if (cell.includes(',')) commas = true;
+    }
+  return commas;
+};
 
 const notesOn = (missingCodes: number, decimalComma: boolean): Finding[] => {
   const notes: Finding[] = [];

@@ -27,9 +27,10 @@ export const linesOf = async (bytes: Uint8Array, problems: Problems, notes: Find
   return text.split(/\r\n|\n|\r/);
 };
 
-/** Control characters, tab, line ends and form feed aside, are in none of the text formats. */
+/** Control characters, tab, line ends and form feed aside, are in none of the text formats; a binary file soon has one. */
 const isBinary = (text: string): boolean => {
-  for (let i = 0; i < text.length; i++) {
+  const end = Math.min(text.length, 65_536);
+  for (let i = 0; i < end; i++) {
     const code = text.charCodeAt(i);
     if (code < 9 || (code > 13 && code < 32)) return true;
   }

@@ -123,7 +123,7 @@ const readDates = (cells: Cells, problems: Problems) => {
   let midnights = 0;
   for (let row = 0; row < cells.count; row++) {
     if (cells.faulty[row]) continue;
-    const [date, time] = [DATE.exec(cells.cells[0][row]), TIME.exec(cells.cells[1][row])];
+    const [date, time] = [DATE.exec(cells.cell(0, row)), TIME.exec(cells.cell(1, row))];
     const [month, day, printed] = [Number(date?.[1]), Number(date?.[2]), Number(time?.[1] ?? 99)];
     const dayIndex = dayOfYear(month, day);
     if (date && isLeapDay(month, day)) hour[row] = LEAP_HOUR;
@@ -139,7 +139,7 @@ const readDates = (cells: Cells, problems: Problems) => {
         code: 'bad-date',
         line: cells.line[row],
         expected: 'a date MM/DD/YYYY and a time from 1:00 to 24:00',
-        found: `${cells.cells[0][row]} ${cells.cells[1][row]}`,
+        found: `${cells.cell(0, row)} ${cells.cell(1, row)}`,
         fix: 'Correct the date of the row.',
       });
   }
