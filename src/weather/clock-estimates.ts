@@ -53,7 +53,8 @@ export interface EdgePlay {
 }
 
 /**
- * The shifts under which neither the morning's nor the evening's light exceeds what a clear sky can give. The excess
+ * The shifts under which neither the morning's nor the evening's light exceeds what a clear sky can give. Darkness while
+ * the sun is up proves nothing, since hills, fog and broken loggers make it too, so only light counts. The excess
  * grows with the square of the shift, so its root is interpolated linearly. Null where an edge shows nothing: polar years.
  * `least` is above `most` where the light overlaps both ends of the day: no clock mends that.
  */

@@ -7,6 +7,8 @@ import type { SunHours } from './sun-hours.ts';
 const LEAST_COSINE = Math.cos(87 * DEG);
 /** Radiation that is missing within so many hours of the night is taken for night: a clock that is off moves the edge. */
 const EDGE_HOURS = 2;
+/** ... unless a component that is there is brighter than this, W/m2. */
+const TWILIGHT_WM2 = 5;
 
 type Component = 'ghi' | 'dni' | 'dhi';
 type Columns = Record<Component, Float64Array>;
@@ -64,8 +66,8 @@ const settleMissing = (
   const missing = given.filter((name) => Number.isNaN(columns[name][h]));
   if (missing.length === 0) return true;
   const dark = sun.sunlit[h] === 0;
-  if (!dark && !(missing.length === given.length && nearNight(sun, h)))
-    return given.length === 3 && missing.length === 1;
+  const likeNight = nearNight(sun, h) && given.every((name) => !(columns[name][h] > TWILIGHT_WM2));
+  if (!dark && !likeNight) return given.length === 3 && missing.length === 1;
   count[dark ? 'night' : 'edge']++;
   for (const name of missing) columns[name][h] = 0;
   return true;

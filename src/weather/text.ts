@@ -1,6 +1,8 @@
 import type { Finding } from '../shared/index.ts';
 import type { Problems } from './problems.ts';
 
+/** A year in any of these formats is 1 to 4 MB; a small gzip file may hold a thousand times its size. */
+const LARGEST_BYTES = 64e6;
 const GZIP_MAGIC = [0x1f, 0x8b];
 
 /**
@@ -52,6 +54,14 @@ const decode = (bytes: Uint8Array, notes: Finding[]): string => {
   }
 };
 
+const tooLarge = (problems: Problems): never =>
+  problems.fail({
+    code: 'too-large',
+    expected: `one year, which is under ${LARGEST_BYTES / 1e6} MB when unpacked`,
+    found: 'more',
+    fix: 'Check that it is a weather file.',
+  });
+
 const gunzip = async (bytes: Uint8Array, problems: Problems): Promise<Uint8Array> => {
   const stream = new DecompressionStream('gzip');
   const writer = stream.writable.getWriter();
@@ -64,7 +74,9 @@ const gunzip = async (bytes: Uint8Array, problems: Problems): Promise<Uint8Array
     for await (const chunk of stream.readable as AsyncIterable<Uint8Array>) {
       chunks.push(chunk);
       length += chunk.length;
+      if (length > LARGEST_BYTES) break;
     }
+    if (length > LARGEST_BYTES) return tooLarge(problems);
     const whole = new Uint8Array(length);
     let at = 0;
     for (const chunk of chunks) {
@@ -73,6 +85,7 @@ const gunzip = async (bytes: Uint8Array, problems: Problems): Promise<Uint8Array
     }
     return whole;
   } catch (cause) {
+    if (problems.any) throw cause;
     return problems.fail(
       {
         code: 'corrupt-gzip',

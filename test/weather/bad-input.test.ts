@@ -61,6 +61,11 @@ test('a gzip file that is cut short or damaged is called corrupt', async () => {
     expect(codes(await errorOf(bytes))).toEqual(['corrupt-gzip']);
 });
 
+test('a small gzip file that unpacks to something huge is refused before it fills the memory', async () => {
+  const error = await errorOf(new Uint8Array(gzipSync(new Uint8Array(70e6).fill(32))));
+  expect(codes(error)).toEqual(['too-large']);
+});
+
 test('a file of no known format says how it begins and how to have a table read', async () => {
   const error = await errorIn(TABLE);
   expect(codes(error)).toEqual(['unknown-format']);

@@ -133,6 +133,13 @@ test('nights marked missing by a clock an hour off are filled with a warning, so
   expect(year.notes.map((n) => [n.code, n.severity])).toContainEqual(['missing-at-the-edge', 'warning']);
 });
 
+test('a zero beside missing beam and diffuse at the edge of the day counts as night; light beside them does not', () => {
+  const h = SUN.sunlit.findIndex((s) => s > 0); // the first hour of sun in the year
+  const blank = withValues(withValues(RAW, 'dni', { [h]: Number.NaN }), 'dhi', { [h]: Number.NaN });
+  expect(codes(fillByClosure(withValues(blank, 'ghi', { [h]: 0 }), SUN))).toEqual(['missing-at-the-edge']);
+  expect(() => fillByClosure(withValues(blank, 'ghi', { [h]: 40 }), SUN)).toThrow(/daylight/);
+});
+
 describe('gaps of temperature and wind', () => {
   const column = (holes: (h: number) => boolean) =>
     Float64Array.from({ length: 8760 }, (_, h) => (holes(h) ? Number.NaN : h));
