@@ -3,15 +3,15 @@ import type { MountKind } from '../shared/index.ts';
 import type { Convert } from './convert.ts';
 import type { Fault } from './fault.ts';
 import { isGroup, rawAt } from './fault.ts';
+import { faultsOf, groupFault } from './faults-of.ts';
 import type { Home } from './known-keys.ts';
-import { keysAt, unknownKeyFix } from './known-keys.ts';
 import { nearest } from './nearest.ts';
 import type { MountSchemas, RawMount } from './schema/mounts.ts';
 import { mountSchemas } from './schema/mounts.ts';
 import { everything, once } from './schema/present.ts';
 import type { RawStudy } from './schema/study.ts';
 import { studyFrame } from './schema/study.ts';
-import { found, shown } from './shown.ts';
+import { found } from './shown.ts';
 import type { Path } from './text/place.ts';
 
 export interface CheckedStudy {
@@ -19,67 +19,6 @@ export interface CheckedStudy {
   /** Null where there are faults. */
   readonly study: { readonly frame: RawStudy; readonly mounts: readonly RawMount[] } | null;
 }
-
-const EXAMPLES: Record<string, string> = {
-  weather: 'weather: { file: year.epw }',
-  mounts: 'mounts: [ { id: ground, kind: fixed-tilt } ]',
-};
-
-const groupFault = (path: Path, raw: unknown, keys: readonly string[]): Fault => {
-  const last = path.at(-1);
-  const glued = typeof raw === 'string' ? /^(\w+):(\S.*)$/.exec(raw) : null;
-  const fix = glued
-    ? `Put a space after the colon: ${glued[1]}: ${glued[2]}.`
-    : `Write for example ${typeof last === 'number' && path.length === 2 ? '{ id: ground, kind: fixed-tilt }' : (EXAMPLES[String(last)] ?? `{ ${keys[0]}: ... }`)}.`;
-  const expected =
-    keys.length === 0
-      ? 'a group of keys'
-      : `a group with the key${keys.length === 1 ? '' : 's'} ${keys.join(', ')}`;
-  return { code: raw === undefined ? 'missing-key' : 'wrong-type', path, expected, found: found(raw), fix };
-};
-
-/** The issues of one zod run as faults, paths counted from `root`. */
-const faultsOf = (
-  issues: readonly z.core.$ZodIssue[],
-  raw: unknown,
-  schema: z.core.$ZodType,
-  homes: () => readonly Home[],
-  root: Path,
-): Fault[] =>
-  issues.flatMap((issue): Fault[] => {
-    const here = rawAt(raw, issue.path);
-    const path = [...root, ...issue.path];
-    if (issue.code === 'unrecognized_keys') {
-      const known = keysAt(schema, issue.path);
-      return issue.keys.map((key) => ({
-        code: 'unknown-key',
-        path,
-        key,
-        expected: 'a known key',
-        found: shown(key),
-        fix: unknownKeyFix(key, rawAt(here, [key]), known, homes()),
-      }));
-    }
-    if (issue.code === 'custom') {
-      const { code, expected, fix } = issue.params as { code: string; expected: string; fix: string };
-      const advice = code === 'missing-key' ? `Add for example ${String(issue.path.at(-1))}: ${fix}.` : fix;
-      return [{ code, path, expected, found: found(here), fix: advice }];
-    }
-    if (issue.code === 'invalid_union') {
-      // A column is a name or a group: judge it by the form that was tried.
-      const branch = issue.errors[isGroup(here) ? 1 : 0].map((inner) => ({
-        ...inner,
-        path: [...issue.path, ...inner.path],
-      }));
-      return faultsOf(branch, raw, schema, homes, root);
-    }
-    if (issue.code === 'invalid_type' && issue.expected === 'object')
-      return [groupFault(path, here, keysAt(schema, issue.path))];
-    const name = String(issue.path.at(-1));
-    const fix = `Write for example ${EXAMPLES[name] ?? `${name}: [ { ... } ]`}.`;
-    const code = here === undefined ? 'missing-key' : 'wrong-type';
-    return [{ code, path, expected: 'a list with at least one entry', found: found(here), fix }];
-  });
 
 /** For a mount of no known kind: every key of every kind, so that its other faults still show. */
 const anyKind = (kinds: MountSchemas) => {
@@ -111,7 +50,9 @@ export const checkStudy = (raw: unknown, convert: Convert): CheckedStudy => {
     { schema: studyFrame(convert, everything), name: '' },
   ]);
   const frame = z.safeParse(frameSchema, raw);
-  const faults = frame.success ? [] : faultsOf(frame.error.issues, raw, frameSchema, homes, []);
+  const faults = frame.success
+    ? []
+    : faultsOf(frame.error.issues, { raw, schema: frameSchema, root: [], homes });
   const mounts: RawMount[] = [];
   const list = rawAt(raw, ['mounts']);
   for (const [i, mount] of (Array.isArray(list) ? list : []).entries()) {
@@ -124,7 +65,8 @@ export const checkStudy = (raw: unknown, convert: Convert): CheckedStudy => {
     if (!kind) faults.push(kindFault(mount.kind, [...path, 'kind'], known));
     const schema = kind ? kinds[kind]() : anyKind(kinds);
     const result = z.safeParse(schema as z.ZodMiniType, mount);
-    if (!result.success) faults.push(...faultsOf(result.error.issues, mount, schema, homes, path));
+    if (!result.success)
+      faults.push(...faultsOf(result.error.issues, { raw: mount, schema, root: path, homes }));
     else if (kind) mounts.push(result.data as RawMount);
   }
   return { faults, study: faults.length === 0 && frame.success ? { frame: frame.data, mounts } : null };

@@ -3,7 +3,7 @@ import { TrackworthError } from '../shared/index.ts';
 import { documentedUnits, everyUnit } from './convert.ts';
 import { crossFaults } from './cross-checks.ts';
 import type { Fault } from './fault.ts';
-import { found } from './shown.ts';
+import { found, tame } from './shown.ts';
 import type { Study } from './study-file.ts';
 import type { Path } from './text/place.ts';
 import type { StudyText } from './text/study-text.ts';
@@ -26,8 +26,20 @@ const problemOf = ({ path, key, ...fault }: Fault, file: string, text: StudyText
   return { ...fault, file, ...place, field: dotted(key === undefined ? path : [...path, key], text.value) };
 };
 
-const inLineOrder = (problems: readonly Problem[]): Problem[] =>
-  problems.toSorted((a, b) => a.line! - b.line! || a.column! - b.column!);
+/** Longest text of a message; only a value of the user's own making gets that far. */
+const LONGEST_TEXT = 300;
+const tamed = (problem: Problem): Problem => ({
+  ...problem,
+  ...(problem.field === undefined ? {} : { field: tame(problem.field, LONGEST_TEXT) }),
+  expected: tame(problem.expected, LONGEST_TEXT),
+  found: tame(problem.found, LONGEST_TEXT),
+  fix: tame(problem.fix, LONGEST_TEXT),
+});
+
+const refuse = (problems: readonly Problem[]): never => {
+  const inLineOrder = problems.toSorted((a, b) => a.line! - b.line! || a.column! - b.column!);
+  throw new TrackworthError('input', inLineOrder.map(tamed));
+};
 
 /** Checks with the documented units; fetches the units library only for a study that writes others. */
 const check = async (raw: unknown) => {
@@ -53,7 +65,7 @@ export const readStudy = async (input: { file: string; text: string }): Promise<
   const { file } = input;
   const { readStudyText } = await import('./text/study-text.ts');
   const text = readStudyText(file, input.text);
-  if (text.broken) throw new TrackworthError('input', inLineOrder(text.problems));
+  if (text.broken) return refuse(text.problems);
   const { value } = text;
   if (typeof value !== 'object' || value === null || Array.isArray(value)) {
     const problem: Problem = {
@@ -64,11 +76,11 @@ export const readStudy = async (input: { file: string; text: string }): Promise<
       found: found(value),
       fix: 'Begin with weather: { file: year.epw }; trackworth start DIR writes a study to begin from.',
     };
-    throw new TrackworthError('input', inLineOrder([...text.problems, problem]));
+    return refuse([...text.problems, problem]);
   }
   const checked = await check(value);
   const faults = [...checked.faults, ...crossFaults(value, text.at)];
   const problems = [...text.problems, ...faults.map((fault) => problemOf(fault, file, text))];
-  if (problems.length > 0 || !checked.study) throw new TrackworthError('input', inLineOrder(problems));
+  if (problems.length > 0 || !checked.study) return refuse(problems);
   return toStudy(checked.study.frame, checked.study.mounts, file);
 };

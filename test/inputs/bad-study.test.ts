@@ -40,6 +40,11 @@ describe('text that is no YAML', () => {
     expect(problem.expected).toContain(expected);
   });
 
+  test('a slip that ends the study early is told once, not on every line that follows', async () => {
+    const problem = await onlyProblem(`- \n¦title: a\n${LEAST}site: { latitude: 3 }\n`);
+    expect(problem.code).toBe('yaml-syntax');
+  });
+
   test('tabs are named as such, one problem a line', async () => {
     const problems = await problemsOf('title: a\nmounts:\n\t- id: a\n\t  kind: fixed-tilt\n');
     expect(problems.map((p) => [p.line, p.column, p.code, p.found])).toEqual([
@@ -392,7 +397,21 @@ compare_with: ¦d
 });
 
 test('what is shown of a file cannot drive a terminal or break a line', async () => {
-  const problem = await onlyProblem(`${LEAST}sky: { model: "\\e[31m\\u202e${'x'.repeat(500)}\\n" }`);
+  const long = 'x'.repeat(500);
+  const problem = await onlyProblem(`${LEAST}sky: { model: "\\e[31m\\u202e${long}\\n" }`);
   expect(problem.found).toMatch(/^"\\u001b\[31m\\u202ex+\.\.\."$/);
   expect(problem.found.length).toBeLessThan(90);
+
+  const problems = await problemsOf(`weather: { file: a, "file:\\e[2J\\r\\n": }
+array: { dc: "12 \\e]0;${long}" }
+"\\e[31mkey\\u2028": { a: 1 }
+mounts: [ { id: "\\e[0m", kind: fixed-tilt }, { id: "\\e[0m", kind: "\\u009b2J" } ]
+compare_with: "\\u0085"
+`);
+  expect(problems.length).toBeGreaterThan(6);
+  for (const p of problems)
+    for (const text of [p.field ?? '', p.expected, p.found, p.fix]) {
+      expect(text).not.toMatch(/[^\P{C}\u00ad]|[\u2028\u2029]/u);
+      expect(text.length).toBeLessThan(400);
+    }
 });

@@ -17,6 +17,18 @@ export interface Places {
 
 export const START: Position = { line: 1, column: 1 };
 
+/**
+ * Line and column of an offset, as editors count. Own counting: the library's line counter loses lines once the
+ * text has derailed, for example where a document is at its end before the text is.
+ */
+export const positionsIn = (text: string): ((offset: number) => Position) => {
+  const starts = [0, ...Array.from(text.matchAll(/\n/g), ({ index }) => index + 1)];
+  return (offset) => {
+    const line = starts.findLastIndex((start) => start <= offset);
+    return { line: line + 1, column: offset - starts[line] + 1 };
+  };
+};
+
 /** Where the same key stands twice, the last one counts, as it does for the values. */
 const pairOf = (map: YAMLMap, name: PropertyKey): Pair | undefined =>
   map.items.findLast(({ key }) => isScalar(key) && String(key.value) === String(name));

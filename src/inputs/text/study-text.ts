@@ -1,8 +1,8 @@
 import type { Document } from 'yaml';
-import { LineCounter, parseDocument, visit } from 'yaml';
+import { parseDocument, visit } from 'yaml';
 import type { Problem } from '../../shared/index.ts';
 import type { Places, Position } from './place.ts';
-import { placesIn, START } from './place.ts';
+import { placesIn, positionsIn, START } from './place.ts';
 import { syntaxProblems } from './syntax.ts';
 
 /** A study's text as plain values, with the way back to line and column. Blank values are undefined. */
@@ -21,11 +21,9 @@ const NOT_TEXT = /[\u0000-\u0008\u000b\u000e-\u001f\ufffd]/;
 const notText = (text: string): Problem | null => {
   const odd = NOT_TEXT.exec(text);
   if (!odd) return null;
-  const before = text.slice(0, odd.index).split('\n');
   return {
     code: 'not-text',
-    line: before.length,
-    column: before.at(-1)!.length + 1,
+    ...positionsIn(text)(odd.index),
     expected: 'a text file',
     found: 'bytes that are no text',
     fix: 'Give a study file, saved as plain UTF-8 text.',
@@ -72,13 +70,8 @@ export const readStudyText = (file: string, source: string): StudyText => {
   const odd = notText(text);
   if (odd) return broken([odd]);
 
-  const lines = new LineCounter();
-  const positionOf = (offset: number): Position => {
-    const { line, col } = lines.linePos(offset);
-    return { line: Math.max(line, 1), column: Math.max(col, 1) };
-  };
+  const positionOf = positionsIn(text);
   const document = parseDocument(text, {
-    lineCounter: lines,
     prettyErrors: false,
     uniqueKeys: true,
     stringKeys: true,

@@ -33,7 +33,7 @@ const SYNTAX: Record<string, readonly [string, string]> = {
   ],
   UNEXPECTED_TOKEN: [
     'the end of the value',
-    'Remove what is too much here, perhaps a second closing bracket.',
+    'Remove what is too much here, or before it, such as a second closing bracket, or line the line up with others.',
   ],
   NON_STRING_KEY: ['a plain word as key', 'Write key: value.'],
   TAG_RESOLVE_FAILED: ['plain numbers and text', 'Remove the tag that begins with an exclamation mark.'],
@@ -80,10 +80,15 @@ export const syntaxProblems = (
     return { code: tab ? 'tab-indent' : 'yaml-syntax', ...place, expected, found, fix };
   };
   const seen = new Set<number>();
-  return [...document.errors, ...document.warnings].map(problemOf).filter(({ line, code }) => {
-    if (code === 'duplicate-key') return true;
-    if (seen.has(line!)) return false;
-    seen.add(line!);
-    return true;
-  });
+  // Once the text has gone on after its end, every word that follows is reported: one of these is enough.
+  const derailed = document.errors.find(({ code }) => code === 'UNEXPECTED_TOKEN');
+  return [...document.errors, ...document.warnings]
+    .filter((error) => error.code !== 'UNEXPECTED_TOKEN' || error === derailed)
+    .map(problemOf)
+    .filter(({ line, code }) => {
+      if (code === 'duplicate-key') return true;
+      if (seen.has(line!)) return false;
+      seen.add(line!);
+      return true;
+    });
 };
