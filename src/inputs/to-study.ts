@@ -8,14 +8,6 @@ import type { RawMount } from './schema/mounts.ts';
 import type { RawStudy } from './schema/study.ts';
 import type { Study, StudyMount } from './study-file.ts';
 
-/** In the words of a report; the id comes first since tables are read by it. */
-const KIND_WORDS: Record<MountKind, string> = {
-  'roof-plane': 'roof plane',
-  'fixed-tilt': 'fixed rack',
-  'single-axis': 'single-axis tracker',
-  'dual-axis': 'dual-axis tracker',
-};
-
 /** Common practice, no source: grass and bare soil lie between 0.15 and 0.25. */
 const DEFAULT_ALBEDO = 0.2;
 /** Common practice, no source: the usual limit of a horizontal tracker. */
@@ -81,7 +73,7 @@ const costOf = ({ cost }: RawMount): CostSpec | null => {
 
 const mountOf = (mount: RawMount): StudyMount => ({
   id: mount.id,
-  label: mount.label ?? `${mount.id} (${KIND_WORDS[mount.kind]})`,
+  label: mount.label ?? mount.id,
   geometry: geometryOf(mount),
   lengths: lengthsOf(mount),
   drive: driveOf(mount),

@@ -35,7 +35,7 @@ mounts:
     mounts: [
       {
         id: 'ground',
-        label: 'ground (fixed rack)',
+        label: 'ground',
         geometry: {
           kind: 'fixed-tilt',
           tiltDeg: 'best',
@@ -48,7 +48,7 @@ mounts:
       },
       {
         id: 'tracker',
-        label: 'tracker (single-axis tracker)',
+        label: 'tracker',
         geometry: {
           kind: 'single-axis',
           axisAzimuthDeg: 180,
@@ -108,7 +108,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
     mounts: [
       {
         id: 'roof',
-        label: 'roof (roof plane)',
+        label: 'roof',
         geometry: { kind: 'roof-plane', tiltDeg: expect.closeTo(roofTiltDeg, 12) as number, azimuthDeg: 166 },
         lengths: { ...NO_LENGTHS, airBehindM: 0.1 },
         drive: null,
@@ -116,7 +116,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
       },
       {
         id: 'ground',
-        label: 'ground (fixed rack)',
+        label: 'ground',
         geometry: {
           kind: 'fixed-tilt',
           tiltDeg: 'best',
@@ -129,7 +129,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
       },
       {
         id: 'tracker',
-        label: 'tracker (single-axis tracker)',
+        label: 'tracker',
         geometry: {
           kind: 'single-axis',
           axisAzimuthDeg: 180,
@@ -143,7 +143,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
       },
       {
         id: 'mast',
-        label: 'mast (dual-axis tracker)',
+        label: 'mast',
         geometry: { kind: 'dual-axis', rows: null },
         lengths: NO_LENGTHS,
         drive: BLANK_DRIVE,

@@ -87,7 +87,7 @@ export const mountParts = (convert: Convert) => ({
     label: z.optional(
       text({
         what: 'a short text',
-        description: 'What reports call it. Blank: made of id and kind.',
+        description: 'What reports call it. Blank: its id.',
         example: 'the ground rack',
         longest: 80,
       }),
