@@ -1,7 +1,6 @@
 import type { CostSpec } from '../cost/index.ts';
 import type { ArraySpec, DriveSpec } from '../energy/index.ts';
 import type { MountGeometry, MountLengths, RowSpec } from '../mounts/index.ts';
-import type { MountKind } from '../shared/index.ts';
 import type { TableColumn, TableColumns } from '../weather/index.ts';
 import type { WindSpec } from '../wind/index.ts';
 import type { RawMount } from './schema/mounts.ts';

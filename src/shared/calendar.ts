@@ -18,7 +18,9 @@ export const MONTH_NAMES = [
 export const MONTH_DAYS = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31] as const;
 
 /** Day of the year (0-based) on which each month begins; the thirteenth entry is 365. */
-export const MONTH_FIRST_DAY: readonly number[] = [0, 31, 59, 90, 120, 151, 181, 212, 243, 273, 304, 334, 365];
+export const MONTH_FIRST_DAY: readonly number[] = [
+  0, 31, 59, 90, 120, 151, 181, 212, 243, 273, 304, 334, 365,
+];
 
 /** Sums an hourly column by month: 12 numbers, in the column's unit times hours. */
 export const monthlySums = (column: Float64Array): number[] =>

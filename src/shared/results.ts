@@ -109,6 +109,8 @@ export interface MountResult {
   capital: number | null;
   capital_per_kw: number | null;
   upkeep_per_year: number | null;
+  /** At the end of their year, whole array. */
+  renewals: { what: string; year: number; cost: number }[];
   lcoe_per_kwh: number | null;
   /** Cost per kWh at 4, 7 and 10 % where the study gives no rate; else empty. */
   lcoe_at_rates: Record<string, number>;

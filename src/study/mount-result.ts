@@ -115,6 +115,7 @@ export const mountResult = (
     capital: cost.capital,
     capital_per_kw: cost.capitalPerKw,
     upkeep_per_year: cost.upkeepPerYear,
+    renewals: [...(mount.cost?.renewals ?? [])],
     lcoe_per_kwh: cost.lcoePerKwh,
     lcoe_at_rates: cost.lcoeAtRates,
     cost_incomplete: cost.incomplete,

@@ -1,4 +1,4 @@
-import { presentEnergy } from '../cost/index.ts';
+import { mountCost, presentEnergy } from '../cost/index.ts';
 import { type ChainSpec, type Delivered, deliver, energyUnderInverter } from '../energy/index.ts';
 import type { Study } from '../inputs/index.ts';
 import { isTracker } from '../mounts/index.ts';
@@ -34,8 +34,9 @@ const STOW_GUST_MS = 15;
 const GUST_FACTOR = 1.5;
 const LOW_SUN = Math.sin((10 * Math.PI) / 180);
 const SNOW_EXAMPLE = 0.2;
+const RENEWAL_EXAMPLE = { share: 0.05, year: 12 };
 
-const percent = (share: number): string => `${(share * 100).toFixed(1)} %`;
+const percent = (share: number): string => `${Number((share * 100).toFixed(1))} %`;
 const kwh = (x: number): string => `${Math.round(x)} kWh/kW·yr`;
 
 const deliveredBy = (c: Counted, run: MountRun): Delivered => run.delivered[c.study.sky.model];
@@ -172,6 +173,7 @@ const moneyLines = (c: Counted): NotCounted[] => {
       lines.push({ what: `mounts.${id}.cost`, effect: `no cost per kWh for ${id}` });
     else if (cost.upkeepPerKw === null && cost.upkeep === null)
       lines.push({ what: `mounts.${id}.cost.upkeep_per_kw`, effect: upkeepEffect(c, run) });
+    lines.push(...renewalLine(c, run));
   }
   if (priced.length === 0) return lines;
   if (finance.years === null)
@@ -189,7 +191,27 @@ const moneyLines = (c: Counted): NotCounted[] => {
   return lines;
 };
 
-const upkeepEffect = ({ study, array }: Counted, run: MountRun): string => {
+/** A tracker's drive wears out; a quote without renewals leaves that out. */
+const renewalLine = (c: Counted, run: MountRun): NotCounted[] => {
+  const { cost, id } = run.mount;
+  const { realRate, years, ageing } = c.study.finance;
+  if (!cost || cost.renewals.length > 0 || !isTracker(run.geometry)) return [];
+  const what = `mounts.${id}.cost.renewals`;
+  const { capitalPerKw } = mountCost(cost, c.array.dc_kw);
+  if (years === null || capitalPerKw === null || years < RENEWAL_EXAMPLE.year)
+    return [{ what, effect: `no renewal of the drive of ${id} is counted` }];
+  const rate = realRate ?? 0.07;
+  const present = (capitalPerKw * RENEWAL_EXAMPLE.share) / (1 + rate) ** RENEWAL_EXAMPLE.year;
+  const energy = presentEnergy(deliveredBy(c, run).energyKwhPerKw, ageing ?? 0, rate, years);
+  return [
+    {
+      what,
+      effect: `renewing ${percent(RENEWAL_EXAMPLE.share)} of its capital in year ${RENEWAL_EXAMPLE.year} would add ${(present / energy).toFixed(4)} to the cost per kWh of ${id}`,
+    },
+  ];
+};
+
+const upkeepEffect = ({ study }: Counted, run: MountRun): string => {
   const { years, realRate, currency } = study.finance;
   if (years === null) return 'cost per kWh is from capital and renewals alone';
   const rate = realRate ?? 0.07;
@@ -200,10 +222,7 @@ const upkeepEffect = ({ study, array }: Counted, run: MountRun): string => {
     rate,
     years,
   );
-  return `each 10 ${currency ?? ''} per kW and year would add ${((10 * perYear) / energy).toFixed(4)} to the cost per kWh of ${run.mount.id} (array of ${array.dc_kw} kW)`.replace(
-    '10  per',
-    '10 per',
-  );
+  return `each 10${currency === null ? '' : ` ${currency}`} per kW and year would add ${((10 * perYear) / energy).toFixed(4)} to the cost per kWh of ${run.mount.id}`;
 };
 
 const heatLine = ({ year }: Counted): NotCounted[] =>

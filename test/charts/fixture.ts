@@ -95,6 +95,7 @@ export const inventedMount = (m: InventedMount): MountResult => {
     capital: null,
     capital_per_kw: null,
     upkeep_per_year: null,
+    renewals: [],
     lcoe_per_kwh: m.lcoe ?? null,
     lcoe_at_rates: {},
     cost_incomplete: false,

@@ -90,6 +90,7 @@ export const inventedMount = (m: Invented): MountResult => {
     capital: capital === null ? null : capital * 12.04,
     capital_per_kw: capital,
     upkeep_per_year: capital === null ? null : 216.72,
+    renewals: [],
     lcoe_per_kwh: m.lcoe ?? null,
     lcoe_at_rates: {},
     cost_incomplete: false,

@@ -160,7 +160,7 @@ test('blanks are words, never 0', () => {
   expect(bare).not.toMatch(/\| 0(?:\.0+)? \|/);
   expect(memo(inventedWithoutRate)).toMatch(/Real discount rate not given/);
   expect(memo(inventedWithoutRate)).toMatch(
-    /\| Tracker \| 27\u00a0692 \| 2\u00a0300 \| not counted \| 0\.091\\\*/,
+    /\| Tracker \| 27\u00a0692 \| 2\u00a0300 \| not counted \| none given \| 0\.091\\\*/,
   );
 });
 

@@ -6,6 +6,12 @@ import { capitalised, oneLine } from '../plain-text.ts';
 import { isTracker, mountById, nameOf } from '../words.ts';
 import { blocks, section } from './section.ts';
 
+/** `drive, year 12: 800`, one after the other. */
+const renewalWords = ({ renewals }: MountResult): string =>
+  renewals.length === 0
+    ? 'none given'
+    : md(renewals.map(({ what, year, cost }) => `${what}, year ${year}: ${formatNumber(cost)}`).join('; '));
+
 const terms = ({ finance: f }: Comparison): string =>
   `Real discount rate ${f.real_rate === null ? 'not given' : formatPercent(f.real_rate)}; life ` +
   `${f.years === null ? 'not given' : `${formatNumber(f.years)} years`}; ageing ` +
@@ -22,14 +28,16 @@ const lines = (c: Comparison): string => {
       `Capital, ${money}`,
       `Capital, ${money}/kW`,
       `Upkeep, ${money}/yr`,
+      `Renewals, ${money}`,
       ...costs.map(({ name }) => `${money}/kWh ${name}`),
     ],
-    ['left', 'right', 'right', 'right', ...costs.map(() => 'right' as const)],
+    ['left', 'right', 'right', 'right', 'left', ...costs.map(() => 'right' as const)],
     c.mounts.map((m) => [
       md(nameOf(c, m)),
       m.capital === null ? 'not given' : formatNumber(m.capital),
       m.capital_per_kw === null ? 'not given' : formatNumber(m.capital_per_kw),
       m.upkeep_per_year === null ? 'not counted' : formatNumber(m.upkeep_per_year),
+      renewalWords(m),
       ...costs.map(({ cell }) => md(cell(m))),
     ]),
   );
