@@ -95,8 +95,12 @@ const constantShares = (losses: LossSpec): [StageName, number][] =>
     ] as [StageName, number | null][]
   ).filter((stage): stage is [StageName, number] => stage[1] !== null);
 
-const capped = (power: Float64Array, ceiling: number | null): Float64Array =>
-  ceiling === null ? power : power.map((p) => (p < ceiling ? p : ceiling));
+const capped = (power: Float64Array, ceiling: number | null): Float64Array => {
+  if (ceiling === null) return power;
+  const under = new Float64Array(power.length);
+  for (let h = 0; h < power.length; h++) under[h] = Math.min(power[h], ceiling);
+  return under;
+};
 
 /**
  * From the views of a plane and a sky to delivered AC energy, stage by stage: rows, incidence, heat, dirt, module

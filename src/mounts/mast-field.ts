@@ -13,7 +13,7 @@ const LOWEST_UP = 0.01;
  */
 export const mastFieldShade = (east: number, north: number, up: number, gcr: number): number => {
   const pitch = 1 / Math.sqrt(gcr);
-  const level = Math.hypot(east, north);
+  const level = Math.sqrt(east * east + north * north); // Math.hypot takes ten times as long
   const sine = Math.max(up, LOWEST_UP);
   // Neighbours stand `pitch` off or further and shade only while less than 1 aside.
   if (level === 0 || sine * sine * (pitch * pitch - 1) >= 1) return 0;

@@ -1,4 +1,4 @@
-import { acosDeg, atan2Deg, cosDeg, DEG, sinDeg, tanDeg } from '../shared/index.ts';
+import { acosDeg, cosDeg, sinDeg, tanDeg } from '../shared/index.ts';
 import type { SunHours } from '../sun/index.ts';
 import { emptyPointing, type Pointing } from './pointing.ts';
 import { rowShade } from './row-shade.ts';
@@ -45,17 +45,24 @@ export const pointSingleAxis = (sun: SunHours, mount: SingleAxis): Pointing => {
   const [sinAz, cosAz] = [sinDeg(mount.axisAzimuthDeg), cosDeg(mount.axisAzimuthDeg)];
   const [sinAxis, cosAxis] = [sinDeg(mount.axisTiltDeg), cosDeg(mount.axisTiltDeg)];
   const backtracks = mount.rows?.lowSun === 'backtrack';
-  const cosSwing = cosDeg(mount.swingDeg);
+  const [sinSwing, cosSwing] = [sinDeg(mount.swingDeg), cosDeg(mount.swingDeg)];
   for (let s = 0; s < cosIncidence.length; s++) {
     const across = sun.east[s] * cosAz - sun.north[s] * sinAz;
     const out = (sun.east[s] * sinAz + sun.north[s] * cosAz) * sinAxis + sun.up[s] * cosAxis;
     const reach = Math.sqrt(across * across + out * out);
-    let [sinTurn, cosTurn] = reach > 0 ? [across / reach, out / reach] : [0, 1];
-    if (cosTurn < cosSwing || (backtracks && gcr !== null && Math.abs(cosTurn) < gcr)) {
-      let turnDeg = atan2Deg(across, out);
-      if (backtracks && gcr !== null) turnDeg = backtrackTurn(turnDeg, gcr);
-      const turn = Math.max(-mount.swingDeg, Math.min(mount.swingDeg, turnDeg)) * DEG;
-      [sinTurn, cosTurn] = [Math.sin(turn), Math.cos(turn)];
+    let sinTurn = reach > 0 ? across / reach : 0;
+    let cosTurn = reach > 0 ? out / reach : 1;
+    if (backtracks && gcr !== null && Math.abs(cosTurn) < gcr) {
+      // backtrackTurn by its sine and cosine: the turn less the angle whose cosine is `room`, towards lying flat.
+      const room = Math.abs(cosTurn) / gcr;
+      const back = Math.sqrt((1 - room) * (1 + room)) * (sinTurn < 0 ? -1 : 1);
+      const sinBefore = sinTurn;
+      sinTurn = sinTurn * room - cosTurn * back;
+      cosTurn = cosTurn * room + sinBefore * back;
+    }
+    if (cosTurn < cosSwing) {
+      sinTurn = sinTurn < 0 ? -sinSwing : sinSwing;
+      cosTurn = cosSwing;
     }
     const incidence = across * sinTurn + out * cosTurn;
     cosIncidence[s] = incidence;

@@ -28,17 +28,19 @@ interface SunVectors {
 const sunVectors = (sun: SunHours, sky: SkyHours): SunVectors => {
   const n = sun.up.length;
   const [east, north, up] = [new Float64Array(n), new Float64Array(n), new Float64Array(n)];
+  let count = 0;
   for (let h = 0; h < sky.direct.length; h++) {
-    const [from, to] = [sun.first[h], sun.first[h + 1]];
-    if (to === from) continue;
+    const from = sun.first[h];
+    const to = sun.first[h + 1];
     const share = (sky.direct[h] + sky.circumsolar[h]) / (1000 * (to - from));
+    if (!(share > 0)) continue; // dark, or wholly overcast
     for (let s = from; s < to; s++) {
-      east[s] = share * sun.east[s];
-      north[s] = share * sun.north[s];
-      up[s] = share * sun.up[s];
+      east[count] = share * sun.east[s];
+      north[count] = share * sun.north[s];
+      up[count++] = share * sun.up[s];
     }
   }
-  return { east, north, up };
+  return { east: east.subarray(0, count), north: north.subarray(0, count), up: up.subarray(0, count) };
 };
 
 const diffuseYear = (sky: SkyHours): DiffuseYear => {
@@ -62,31 +64,50 @@ const diffuseOn = (year: DiffuseYear, tiltDeg: number): number => {
 };
 
 /**
- * Beam and circumsolar light on planes of every whole-numbered tilt 0..90 facing one way, kWh/m2. Seen from the
- * side, each sun vector is (forward, up); it lights the plane of tilt b while forward sin b + up cos b > 0. For a
- * sun behind (forward < 0) that ends at a tilt of atan(up / -forward), so summing vectors by the tilt at which they
- * go out, and then down the tilts, gives all 91 planes in one pass.
+ * Beam and circumsolar light on planes of every whole-numbered tilt 0..90 that face one way, and the opposite way,
+ * kWh/m2. Seen from the side, each sun vector is (forward, up); it lights the plane of tilt b while
+ * forward sin b + up cos b > 0. On the plane that faces it that is so for every tilt; on the other it ends at a tilt of
+ * atan(up / |forward|), so summing vectors by the tilt at which they go out, and then down the tilts, gives all planes
+ * of both ways in one pass.
  */
-const beamByTilt = (v: SunVectors, azimuthDeg: number): Float64Array => {
+const beamByTilt = (v: SunVectors, azimuthDeg: number): [Float64Array, Float64Array] => {
   const [sinAz, cosAz] = [sinDeg(azimuthDeg), cosDeg(azimuthDeg)];
-  const [forwardUntil, upUntil] = [new Float64Array(92), new Float64Array(92)];
+  const [facing, opposite] = [new LitUntil(), new LitUntil()];
   for (let s = 0; s < v.up.length; s++) {
     const forward = v.east[s] * sinAz + v.north[s] * cosAz;
     const up = v.up[s];
-    let last = 91;
-    if (forward < 0) last = Math.ceil(Math.atan(up / -forward) * (180 / Math.PI));
-    forwardUntil[last] += forward;
-    upUntil[last] += up;
+    const last = Math.ceil(Math.atan(up / Math.abs(forward)) * (180 / Math.PI));
+    facing.add(forward >= 0 ? ALWAYS : last, forward, up);
+    opposite.add(forward <= 0 ? ALWAYS : last, -forward, up);
   }
-  const onPlane = new Float64Array(91);
-  let [forward, up] = [forwardUntil[91], upUntil[91]];
-  for (let tilt = 90; tilt >= 0; tilt--) {
-    onPlane[tilt] = forward * sinDeg(tilt) + up * cosDeg(tilt);
-    forward += forwardUntil[tilt];
-    up += upUntil[tilt];
-  }
-  return onPlane;
+  return [facing.onPlanes(), opposite.onPlanes()];
 };
+
+/** Beyond every tilt of the map. */
+const ALWAYS = 91;
+
+/** Sun vectors seen from the side, summed by the first whole tilt that they do not light. */
+class LitUntil {
+  private readonly forward = new Float64Array(ALWAYS + 1);
+  private readonly up = new Float64Array(ALWAYS + 1);
+
+  add(tilt: number, forward: number, up: number): void {
+    this.forward[tilt] += forward;
+    this.up[tilt] += up;
+  }
+
+  /** Light on the planes of tilt 0..90. */
+  onPlanes(): Float64Array {
+    const light = new Float64Array(ALWAYS);
+    let [forward, up] = [this.forward[ALWAYS], this.up[ALWAYS]];
+    for (let tilt = 90; tilt >= 0; tilt--) {
+      light[tilt] = forward * sinDeg(tilt) + up * cosDeg(tilt);
+      forward += this.forward[tilt];
+      up += this.up[tilt];
+    }
+    return light;
+  }
+}
 
 const beamOn = (v: SunVectors, tiltDeg: number, azimuthDeg: number): number => {
   const [e, n, u] = [
@@ -124,7 +145,7 @@ const refine = (
 /**
  * The orientation map of a site from its own hours, and its optimum in tilt and azimuth (0.05 degrees). On a site
  * where lying flat is best the azimuth has no meaning and is given towards the equator.
- * @param azimuthStepDeg 5 gives 72 columns; tilts are 0, 1 .. 90
+ * @param azimuthStepDeg a divisor of 180; 5 gives 72 columns; tilts are 0, 1 .. 90
  */
 export const orientationMap = (
   sun: SunHours,
@@ -136,7 +157,9 @@ export const orientationMap = (
   const diffuse = diffuseYear(sky);
   const tiltsDeg = Array.from({ length: 91 }, (_, tilt) => tilt);
   const azimuthsDeg = Array.from({ length: Math.round(360 / azimuthStepDeg) }, (_, i) => i * azimuthStepDeg);
-  const columns = azimuthsDeg.map((azimuth) => beamByTilt(vectors, azimuth));
+  // Azimuths come in opposite pairs: `azimuthStepDeg` divides 180.
+  const pairs = azimuthsDeg.slice(0, azimuthsDeg.length / 2).map((azimuth) => beamByTilt(vectors, azimuth));
+  const columns = [...pairs.map(([facing]) => facing), ...pairs.map(([, opposite]) => opposite)];
   const irradiationKwhM2 = tiltsDeg.map((tilt) => {
     const fromSky = diffuseOn(diffuse, tilt);
     return columns.map((column) => column[tilt] + fromSky);
