@@ -104,6 +104,19 @@ describeWithWeather('the clock of real years', () => {
     expect(seen).toBeGreaterThanOrEqual(32);
   }, 60_000);
 
+  test('components that were split from GHI by a wrong clock close perfectly, and the edges tell all the same', async () => {
+    for (const name of ['AZ-Phoenix.tmy2.gz', 'WA-Seattle.tmy2.gz', '725650.tmy3.gz']) {
+      const late = relabelled(await realYear(name), 1);
+      const { cosZenith } = sunOf(late)(0);
+      const dhi = late.ghi.map((v, h) => (cosZenith[h] > 0.1 ? 0.3 * v : v));
+      const dni = late.ghi.map((v, h) => (cosZenith[h] > 0.1 ? (0.7 * v) / cosZenith[h] : 0));
+      const found = find({ ...late, dni, dhi });
+      expect(found.closure?.rmsWm2).toBeLessThan(0.001);
+      expect(blocked(found).map((f) => f.code)).toEqual(['clock-shift']);
+      expect(Math.abs((found.timeShiftMin as number) + 60)).toBeLessThan(20);
+    }
+  });
+
   test('times left in UTC, many hours off, are found too', async () => {
     const phoenix = await realYear('AZ-Phoenix.tmy2.gz');
     const found = find(relabelled(phoenix, 7));

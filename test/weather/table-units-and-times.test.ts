@@ -126,6 +126,17 @@ describe('times of a table', () => {
     expect(got.calendarYear[364]).toBe(2021);
   });
 
+  test('a half hour is carried by the offset without turning the year round', async () => {
+    for (const [printedAfterMin, offsetMin] of [
+      [0, -30],
+      [60, 30],
+    ]) {
+      const got = await readTable(writeTable(YEAR, { printedAfterMin }), { label: 'middle' });
+      expect(got.offsetMin).toBe(offsetMin);
+      expect([...got.ghi]).toEqual(YEAR.ghi);
+    }
+  });
+
   test('24:00, slashes, the letter T and seconds are understood', async () => {
     const lines = writeTable(YEAR).map((line, i) => {
       if (i === 0) return line;
