@@ -27,8 +27,10 @@ export const readyYear = (
   weather: Pick<Study['weather'], 'addMinutes' | 'acceptClock'>,
 ): ReadyYear => {
   const offsetMin = raw.offsetMin + weather.addMinutes;
-  const sunAt = (offset: number) => sunOverHours(raw.place, raw.calendarYear, offset);
-  const sun = sunAt(offsetMin);
+  const sun = sunOverHours(raw.place, raw.calendarYear, offsetMin);
+  // Trial shifts of the clock need no more than two positions an hour.
+  const sunAt = (trialMin: number) =>
+    trialMin === offsetMin ? sun : sunOverHours(raw.place, raw.calendarYear, trialMin, 2);
   const filled: HourlyYear = { ...fillByClosure(raw, sun), offsetMin };
   const globalOnly = filled.origin.dni === 'missing' && filled.origin.dhi === 'missing';
   const year: HourlyYear = globalOnly
@@ -38,7 +40,7 @@ export const readyYear = (
         origin: { ...filled.origin, dni: 'derived', dhi: 'derived' },
       }
     : filled;
-  const found = weatherFindings(year, sunAt);
+  const found = weatherFindings(year, sunAt, weather.addMinutes);
   const findings = weather.acceptClock ? withClockAccepted(found.findings) : found.findings;
   return { year, sun, found: { ...found, findings }, globalOnly };
 };

@@ -1,3 +1,4 @@
+import { editDistance } from '../shared/index.ts';
 import type { Problems } from './problems.ts';
 import type { TableColumns } from './spec.ts';
 
@@ -64,15 +65,3 @@ const nearestFirst = (name: string, header: readonly string[]): string[] =>
     .map((cell, i) => ({ cell, i, distance: editDistance(name.toLowerCase(), cell.toLowerCase()) }))
     .sort((a, b) => a.distance - b.distance || a.i - b.i)
     .map(({ cell }) => JSON.stringify(cell));
-
-/** Levenshtein 1966: the least number of letters to insert, delete or change. */
-const editDistance = (a: string, b: string): number => {
-  let row = Array.from({ length: b.length + 1 }, (_, j) => j);
-  for (let i = 1; i <= a.length; i++) {
-    const next = [i];
-    for (let j = 1; j <= b.length; j++)
-      next.push(Math.min(row[j] + 1, next[j - 1] + 1, row[j - 1] + (a[i - 1] === b[j - 1] ? 0 : 1)));
-    row = next;
-  }
-  return row[b.length];
-};
