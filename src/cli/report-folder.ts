@@ -7,12 +7,12 @@ import {
   readFileSync,
   realpathSync,
   renameSync,
-  rmdirSync,
   rmSync,
   writeFileSync,
 } from 'node:fs';
 import { basename, dirname, join, relative, sep } from 'node:path';
 import { isReportMarker, REPORT_MARKER } from '../report/index.ts';
+import { makeFolders, unmakeFolders } from './folders.ts';
 import { orOutputTrouble, outputTrouble } from './output-trouble.ts';
 import { errorCode } from './system-words.ts';
 
@@ -103,12 +103,6 @@ const swap = (fresh: string, target: string): void => {
   rmSync(old, { recursive: true, force: true });
 };
 
-/** Removes the folders from `path` up to `first`, which were made for a report that then could not be written. */
-const unmake = (path: string, first: string | undefined): void => {
-  if (first === undefined) return;
-  for (let folder = path; within(first, folder); folder = dirname(folder)) rmdirSync(folder);
-};
-
 /**
  * Writes a report whole or not at all: into a hidden folder beside the target, which then takes its name. An
  * earlier report is replaced in that moment, and is left as it was where anything fails before.
@@ -118,15 +112,16 @@ const unmake = (path: string, first: string | undefined): void => {
 export const writeReportFolder = (target: ReportFolder, files: ReadonlyMap<string, string>): void =>
   orOutputTrouble(target.shown, () => {
     const parent = dirname(target.path);
-    const madeFirst = mkdirSync(parent, { recursive: true });
+    const made: string[] = [];
     const fresh = join(parent, `.${basename(target.path).slice(0, 40)}-${randomUUID().slice(0, 8)}`);
     try {
+      makeFolders(parent, made);
       mkdirSync(fresh);
       writeAll(fresh, files);
       swap(fresh, target.path);
     } catch (error) {
       rmSync(fresh, { recursive: true, force: true });
-      unmake(parent, madeFirst);
+      unmakeFolders(made);
       throw error;
     }
   });

@@ -1,5 +1,6 @@
-import { existsSync, mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { join, resolve } from 'node:path';
+import { makeFolders, unmakeFolders } from './folders.ts';
 import type { Io } from './io.ts';
 import { orOutputTrouble, outputTrouble } from './output-trouble.ts';
 import { SAMPLE_WEATHER, samplePath } from './package-files.ts';
@@ -22,9 +23,10 @@ const refuseToOverwrite = (folder: string, shown: string, names: readonly string
 
 /** Writes all files or, where one fails, none; never over one that exists. */
 const writeNew = (folder: string, files: ReadonlyMap<string, string | Uint8Array>): void => {
-  const madeFirst = mkdirSync(folder, { recursive: true });
+  const made: string[] = [];
   const written: string[] = [];
   try {
+    makeFolders(folder, made);
     for (const [name, content] of files) {
       const path = join(folder, name);
       writeFileSync(path, content, { flag: 'wx' });
@@ -32,7 +34,7 @@ const writeNew = (folder: string, files: ReadonlyMap<string, string | Uint8Array
     }
   } catch (error) {
     for (const path of written) rmSync(path);
-    if (madeFirst !== undefined) rmSync(madeFirst, { recursive: true });
+    unmakeFolders(made);
     throw error;
   }
 };
