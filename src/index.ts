@@ -1,5 +1,5 @@
 /**
- * The public functions of trackworth, in the order of its flow. All of them are pure: no disk, clock or console.
+ * The public functions of trackworth, in the order of its flow. All of them are pure: they touch no disk, console or clock.
  * The short way, from a study's text and a weather file's bytes to every figure of a report:
  *
  *     const study = await readStudy({ file: 'site.yaml', text });

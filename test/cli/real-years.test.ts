@@ -19,11 +19,11 @@ const expectSane = (c: Comparison): void => {
   const [ground, tracker] = c.mounts;
   for (const m of [ground, tracker]) {
     expect(m.energy_kwh_per_kw).toBeGreaterThan(300);
-    expect(m.energy_kwh_per_kw).toBeLessThan(m.irradiation_kwh_m2);
-    expect(m.irradiation_kwh_m2).toBeGreaterThan(m.energy_kwh_per_kw);
+    // Cold modules give more than their rating: at Barrow a twelfth more.
+    expect(m.energy_kwh_per_kw).toBeLessThan(1.1 * m.irradiation_kwh_m2);
   }
-  // The best fixed plane cannot get less than a level one, of which the optimum's map is full.
-  expect(ground.irradiation_kwh_m2).toBeGreaterThan(0.98 * c.weather.ghi_kwh_m2);
+  // The best fixed plane collects at least what a level one does.
+  expect(ground.irradiation_kwh_m2).toBeGreaterThan(0.999 * c.weather.ghi_kwh_m2);
   expect(ground.gain_over_reference).toBe(0);
 };
 

@@ -13,8 +13,11 @@ import {
 } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { dirname, join, relative, resolve } from 'node:path';
-import { onTestFinished } from 'vitest';
+import { onTestFinished, vi } from 'vitest';
 import { run } from '../../src/cli/program.ts';
+
+// Commands draw charts and start processes, which a busy machine does slowly.
+vi.setConfig({ testTimeout: 60_000, hookTimeout: 60_000 });
 
 export const ROOT = resolve(import.meta.dirname, '../..');
 export const SAMPLE_WEATHER = join(ROOT, 'sample-data/orlin.epw');
