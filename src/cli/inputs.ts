@@ -1,5 +1,6 @@
 import { basename, dirname, isAbsolute, join, relative, resolve, sep } from 'node:path';
 import type { Study } from '../inputs/index.ts';
+import { TrackworthError } from '../shared/index.ts';
 import type { RawYear } from '../weather/index.ts';
 import { readInputFile, sha256, textOf } from './input-file.ts';
 import { SAMPLE_STUDY, samplePath } from './package-files.ts';
@@ -32,12 +33,26 @@ export const demoStudyPath = (cwd: string): string => {
   return short.startsWith(`..${sep}`) || isAbsolute(short) ? path : short;
 };
 
+const weatherForStudy = (typed: string): TrackworthError =>
+  new TrackworthError('input', [
+    {
+      code: 'weather-for-study',
+      file: typed,
+      expected: 'a study file',
+      found: 'the name of a weather file',
+      fix:
+        'Name the study that names this file; trackworth start DIR writes one to begin from, and trackworth weather ' +
+        'FILE shows what a weather file holds.',
+    },
+  ]);
+
 /**
  * Reads a study and the weather that it names: relative to the study, or absolute.
  * @param typed the study's path as the user typed it, from `cwd`
  * @throws TrackworthError of kind `input` with all problems of the study, or else of its weather
  */
 export const readStudyInputs = async (typed: string, cwd: string): Promise<StudyInputs> => {
+  if (WEATHER_NAMES.test(typed)) throw weatherForStudy(typed);
   const studyPath = resolve(cwd, typed);
   const studyBytes = await readInputFile({
     path: studyPath,

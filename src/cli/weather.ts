@@ -1,6 +1,6 @@
 import { resolve } from 'node:path';
 import type { Study } from '../inputs/index.ts';
-import type { HourLabel, Place } from '../shared/index.ts';
+import { type HourLabel, type Place, TrackworthError } from '../shared/index.ts';
 import type { RawYear } from '../weather/index.ts';
 import { isStudyName, readStudyInputs, readWeatherFile } from './inputs.ts';
 import type { Io } from './io.ts';
@@ -36,8 +36,21 @@ const readFile = async (typed: string, options: WeatherOptions, cwd: string): Pr
   return { raw, clock: { addMinutes: 0, acceptClock: false }, path: typed };
 };
 
-/** The weather of a study, with the study's columns, place and clock. */
-const readOfStudy = async (typed: string, cwd: string): Promise<Read> => {
+/** The weather of a study, with the study's columns, place and clock, which no option may contradict. */
+const readOfStudy = async (
+  typed: string,
+  { json: _, ...over }: WeatherOptions,
+  cwd: string,
+): Promise<Read> => {
+  if (Object.keys(over).length > 0)
+    throw new TrackworthError('usage', [
+      {
+        code: 'options-with-study',
+        expected: 'a weather file beside options that overrule it',
+        found: `the study ${typed}`,
+        fix: 'Write the place and the label in the study: site: { ... }, weather: { label: ... }.',
+      },
+    ]);
   const { study, raw, weatherPath } = await readStudyInputs(typed, cwd);
   return { raw, clock: study.weather, path: weatherPath };
 };
@@ -45,7 +58,7 @@ const readOfStudy = async (typed: string, cwd: string): Promise<Read> => {
 /** What a weather file holds and how far to trust it. */
 export const weather = async (typed: string, options: WeatherOptions, io: Io): Promise<void> => {
   const { raw, clock, path } = isStudyName(typed)
-    ? await readOfStudy(typed, io.cwd)
+    ? await readOfStudy(typed, options, io.cwd)
     : await readFile(typed, options, io.cwd);
   const [{ readyYear }, { weatherFacts }] = await Promise.all([
     import('../study.ts'),

@@ -38,6 +38,13 @@ const weatherLine = `weather: { file: ${JSON.stringify(SAMPLE_WEATHER)} }\n`;
 
 export const BAD_STUDIES: readonly BadCase[] = [
   {
+    title: 'a weather file in place of the study',
+    files: { 'year.epw': sample },
+    args: ['compare', 'year.epw'],
+    code: 3,
+    says: ['year.epw', 'weather file', 'trackworth start'],
+  },
+  {
     title: 'a missing study',
     files: { 'other.yaml': 'x: 1' },
     code: 3,
@@ -154,6 +161,13 @@ export const BAD_WEATHER: readonly BadCase[] = [
 ];
 
 export const BAD_USAGE: readonly BadCase[] = [
+  {
+    title: 'an option that would overrule a study',
+    files: { 'study.yaml': simplestStudy() },
+    args: ['weather', 'study.yaml', '--label', 'start'],
+    code: 2,
+    says: ['study.yaml', 'weather: { label: ... }'],
+  },
   { title: 'an unknown command', files: {}, args: ['comprae'], code: 2, says: ['comprae', 'compare'] },
   { title: 'an unknown option', files: {}, args: ['compare', '--jsn'], code: 2, says: ['--jsn', '--json'] },
   { title: 'no study', files: {}, args: ['compare'], code: 2, says: ['trackworth compare --demo'] },

@@ -62,6 +62,17 @@ describe('the built program', () => {
     expect(plain.out).not.toContain('\u001b');
   });
 
+  test('writes the same bytes in other time zones, languages and folders', () => {
+    const cwd = put(tempFolder(), { 'study.yaml': simplestStudy(), 'far/away/here': '' });
+    const here = shell(cwd, 'trackworth compare study.yaml --out a');
+    const there = shell(
+      join(cwd, 'far/away'),
+      'TZ=Pacific/Chatham LANG=tr_TR.UTF-8 LC_ALL=tr_TR.UTF-8 trackworth compare ../../study.yaml --out b',
+    );
+    expect([here.code, there.code]).toEqual([0, 0]);
+    expect(inventory(join(cwd, 'far/away/b'))).toEqual(inventory(join(cwd, 'a')));
+  });
+
   test('writes the same report as the sources do', async () => {
     const cwd = put(tempFolder(), { 'study.yaml': simplestStudy() });
     expect(program(cwd, 'compare', 'study.yaml', '--out', 'built').code).toBe(0);
