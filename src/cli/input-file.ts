@@ -53,7 +53,7 @@ const readOrFault = (wanted: Wanted): Uint8Array | Fault => {
   try {
     const entry = statSync(wanted.path);
     if (entry.isDirectory()) return isFolder(wanted);
-    if (entry.isBlockDevice() || entry.isSocket())
+    if (!entry.isFile() && !entry.isFIFO())
       return { code: 'no-file', found: 'a device', fix: 'Name a file.' };
     return readFileSync(wanted.path);
   } catch (error) {

@@ -38,6 +38,13 @@ const weatherLine = `weather: { file: ${JSON.stringify(SAMPLE_WEATHER)} }\n`;
 
 export const BAD_STUDIES: readonly BadCase[] = [
   {
+    title: 'a device that never ends',
+    files: {},
+    args: ['compare', '/dev/zero'],
+    code: 3,
+    says: ['/dev/zero', 'a device'],
+  },
+  {
     title: 'a weather file in place of the study',
     files: { 'year.epw': sample },
     args: ['compare', 'year.epw'],

@@ -159,6 +159,16 @@ describe('an output that cannot be written is exit 4, and nothing changes', () =
   });
 });
 
+test('a report is not replaced under the feet of a user who stands in it', async () => {
+  const cwd = withStudy();
+  expect((await compare(cwd, '--out', 'r')).code).toBe(0);
+  const before = inventory(cwd);
+  const inside = await command(join(cwd, 'r'), 'compare', '../study.yaml', '--no-charts', '--out', '.');
+  expect(inside.code).toBe(4);
+  expect(inside.err).toContain('in use');
+  expect(inventory(cwd)).toEqual(before);
+});
+
 test('a report behind a link is replaced where it lies, and the link stays', async () => {
   const cwd = withStudy();
   expect((await compare(cwd, '--out', 'far/r')).code).toBe(0);
