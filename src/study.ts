@@ -10,23 +10,14 @@ import { costOfEnergy, sameEnergy } from './cost/index.ts';
 import { energyUnderInverter } from './energy/index.ts';
 import type { Study } from './inputs/index.ts';
 import { isTracker } from './mounts/index.ts';
-import {
-  type ArraySummary,
-  type Comparison,
-  type HourlyYear,
-  type MountResult,
-  type SameEnergy,
-  type SkyModel,
-  TrackworthError,
-} from './shared/index.ts';
-import { orientationMap, skyOverHours } from './sky/index.ts';
-import { arrayOf } from './study/array.ts';
+import type { ArraySummary, Comparison, MountResult, SameEnergy, SkyModel } from './shared/index.ts';
 import { assumptionsOf } from './study/assumptions.ts';
 import { mountResult, worstMonth } from './study/mount-result.ts';
-import { ALL_MODELS, type MountRun, runMount, type Skies } from './study/mount-run.ts';
+import { type MountRun, runMounts } from './study/mount-run.ts';
 import { notCounted } from './study/not-counted.ts';
 import { type ReadyYear, readyYear } from './study/ready-year.ts';
 import { referenceOf } from './study/reference.ts';
+import { ALL_MODELS, type Setting, settingOf } from './study/setting.ts';
 import { tiltedForMonth } from './study/tilted-for-month.ts';
 import type { RawYear } from './weather/index.ts';
 import { windBasis } from './wind/index.ts';
@@ -37,40 +28,30 @@ export const SCHEMA = 'trackworth-comparison-1';
 
 /** Compares every mount of a study over one year of weather. The weather has been read with the study's place and label. */
 export const compareMounts = (study: Study, raw: RawYear): Comparison => {
-  const model = study.sky.model;
-  const array = arrayOf(study.array);
-
-  // weather → sun: the study's clock, what the file lacks, what looks wrong
-  const ready = readyYear(raw, study.weather);
-  const { year, sun } = ready;
-
-  // sky: the light of every hour under each model, and the best fixed plane under the study's own
-  const skies = skiesOf(study, ready);
-  const map = orientationMap(sun, skies[model], year.place.latitudeDeg);
+  // weather → sun → sky: what is the same for every mount
+  const setting = settingOf(study, raw);
+  const { ready, year, sun, sky, map, array } = setting;
 
   // mounts → energy: where each points, what it collects and delivers
-  const runs = study.mounts.map((mount) => runMount(mount, map.best, study, ready, array, skies));
+  const runs = runMounts(setting);
   const reference = referenceOf(study, runs);
   const facing =
     reference.geometry.kind === 'fixed-tilt' ? reference.geometry.azimuthDeg : map.best.azimuthDeg;
-  const monthPlanes = tiltedForMonth(sun, skies[model], reference, facing);
+  const monthPlanes = tiltedForMonth(sun, sky, reference, facing);
 
   // wind and cost, mount by mount
-  const maximum = Math.max(
-    map.best.irradiationKwhM2,
-    ...runs.filter((r) => !isTracker(r.geometry)).map((r) => r.delivered[model].irradiationKwhM2),
-  );
-  const mounts = runs.map((run) => mountResult(run, reference, study, array, skies, maximum));
-  const fixedInstead = fixedArraysInstead(study, array, runs, reference, mounts);
+  const maximum = map.best.irradiationKwhM2;
+  const mounts = runs.map((run) => mountResult(run, reference, setting, maximum));
+  const fixedInstead = fixedArraysInstead(setting, runs, reference, mounts);
 
   // advice
-  const counted = { study, year, sun, sky: skies[model], array, runs, reference };
+  const counted = { ...setting, runs, reference };
   const blanks = notCounted(counted);
   const adviceInput = {
     mounts: mounts.map((result, i) => adviceMount(result, runs[i], study, array)),
     referenceId: reference.mount.id,
     objective: study.objective,
-    skyModel: model,
+    skyModel: study.sky.model,
     findings: ready.found.findings,
     notCounted: blanks,
     inverterGiven: array.ac_kw !== null,
@@ -96,7 +77,7 @@ export const compareMounts = (study: Study, raw: RawYear): Comparison => {
       utc_offset_h: year.place.utcOffsetH,
     },
     weather: weatherSummary(ready),
-    sky_model: model,
+    sky_model: study.sky.model,
     array,
     best_orientation: {
       tilt_deg: map.best.tiltDeg,
@@ -119,31 +100,9 @@ export const compareMounts = (study: Study, raw: RawYear): Comparison => {
   };
 };
 
-const skiesOf = (study: Study, { sun, year }: ReadyYear): Skies => {
-  const albedo = study.sky.albedo === 'file' ? albedoOfFile(year) : study.sky.albedo;
-  return Object.fromEntries(
-    ALL_MODELS.map((model) => [model, skyOverHours(sun, year, albedo, model)]),
-  ) as Skies;
-};
-
-const albedoOfFile = (year: HourlyYear): Float64Array => {
-  if (year.albedo) return year.albedo;
-  throw new TrackworthError('input', [
-    {
-      code: 'no-albedo',
-      file: year.source,
-      field: 'sky.albedo',
-      expected: 'a ground reflectance column, since the study says `albedo: file`',
-      found: 'none in the weather file',
-      fix: 'Write a number such as `albedo: 0.2`.',
-    },
-  ]);
-};
-
 /** For each tracker, the array on the reference mount that delivers as much under the same inverter. */
 const fixedArraysInstead = (
-  study: Study,
-  array: ArraySummary,
+  { study, array }: Setting,
   runs: readonly MountRun[],
   reference: MountRun,
   mounts: readonly MountResult[],

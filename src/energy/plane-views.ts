@@ -32,11 +32,15 @@ const emptyViews = (hours: number): Views => {
   return { beam: column(), sky: column(), steep: column(), horizon: column(), ground: column() };
 };
 
-/** Averages a plane's pointing over the samples of each hour. */
-export const planeViews = (sun: SunHours, pointing: Pointing): PlaneViews => {
+/**
+ * Averages a plane's pointing over the samples of each hour.
+ * @param used views of the same sun that are no longer needed: their columns are written over, which spares memory
+ */
+export const planeViews = (sun: SunHours, pointing: Pointing, used: PlaneViews | null = null): PlaneViews => {
   const hours = sun.cosZenith.length;
   const { cosIncidence, cosTilt, sinTilt, neighbours } = pointing;
-  const [open, glass] = [emptyViews(hours), emptyViews(hours)];
+  const open = used?.open ?? emptyViews(hours);
+  const glass = used?.glass ?? emptyViews(hours);
   const tilt = new Float64Array(hours);
   for (let h = 0; h < hours; h++) {
     // Plain variables: taking arrays apart here runs their iterators and costs a quarter of the time.
@@ -68,14 +72,21 @@ export const planeViews = (sun: SunHours, pointing: Pointing): PlaneViews => {
     open.ground[h] = 1 - open.sky[h];
     glass.beam[h] = lit * share;
   }
-  const rows = neighbours ? behindNeighbours(sun, pointing, neighbours, open) : open;
+  const usedRows = used && used.rows !== used.open ? used.rows : null;
+  const rows = neighbours ? behindNeighbours(sun, pointing, neighbours, open, usedRows) : open;
   diffusePastGlass(sun, rows, tilt, glass);
   return { open, rows, glass };
 };
 
 /** Takes off what the neighbours shade and mask. */
-const behindNeighbours = (sun: SunHours, pointing: Pointing, neighbours: Neighbours, open: Views): Views => {
-  const rows = emptyViews(sun.cosZenith.length);
+const behindNeighbours = (
+  sun: SunHours,
+  pointing: Pointing,
+  neighbours: Neighbours,
+  open: Views,
+  used: Views | null,
+): Views => {
+  const rows = used ?? emptyViews(sun.cosZenith.length);
   const { cosIncidence, cosTilt, sinTilt } = pointing;
   const { shaded, skyLeft, groundLeft } = neighbours;
   for (let h = 0; h < sun.cosZenith.length; h++) {
@@ -116,19 +127,17 @@ const diffusePastGlass = (sun: SunHours, before: Views, cosTilt: Float64Array, g
   }
 };
 
-/** Light that a plane takes in every hour under one sky, W/m2: all kinds together. */
-export const lightThrough = (sky: SkyHours, views: Views): Float64Array => {
-  const light = new Float64Array(sky.direct.length);
-  const { direct, circumsolar, isotropic, steep, horizon, ground } = sky;
-  for (let h = 0; h < light.length; h++)
-    light[h] =
-      (direct[h] + circumsolar[h]) * views.beam[h] +
-      isotropic[h] * views.sky[h] +
-      steep[h] * views.steep[h] +
-      horizon[h] * views.horizon[h] +
-      ground[h] * views.ground[h];
-  return light;
-};
+/** Light that a plane takes in one hour under one sky, W/m2: all kinds together. */
+export const lightAt = (sky: SkyHours, views: Views, h: number): number =>
+  (sky.direct[h] + sky.circumsolar[h]) * views.beam[h] +
+  sky.isotropic[h] * views.sky[h] +
+  sky.steep[h] * views.steep[h] +
+  sky.horizon[h] * views.horizon[h] +
+  sky.ground[h] * views.ground[h];
+
+/** The same for every hour of the year. */
+export const lightThrough = (sky: SkyHours, views: Views): Float64Array =>
+  Float64Array.from({ length: sky.direct.length }, (_, h) => lightAt(sky, views, h));
 
 /** The year's open light by where it comes from, kWh/m2. Circumsolar light counts as sky, as the contract says. */
 export const lightBySource = (sky: SkyHours, open: Views): { beam: number; sky: number; ground: number } => {

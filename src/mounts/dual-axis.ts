@@ -9,8 +9,8 @@ import type { DualAxis } from './spec.ts';
  * of sky and ground is that of long rows at the same pitch times the share of a row that the masts fill (assumption:
  * no published figure is known to us).
  */
-export const pointDualAxis = (sun: SunHours, mount: DualAxis): Pointing => {
-  const pointing = emptyPointing(sun, mount.rows !== null);
+export const pointDualAxis = (sun: SunHours, mount: DualAxis, used: Pointing | null = null): Pointing => {
+  const pointing = emptyPointing(sun, mount.rows !== null, used);
   pointing.cosIncidence.fill(1);
   pointing.cosTilt.set(sun.up);
   for (let s = 0; s < sun.up.length; s++)

@@ -9,14 +9,16 @@ import { groundLeftByRows, skyLeftByRows } from './row-view.ts';
  * @param tiltDeg 0..90
  * @param azimuthDeg the way it faces, clockwise from true north
  * @param gcr ground coverage ratio of the rows, or null for a plane without rows
+ * @param used see {@link emptyPointing}
  */
 export const pointFixed = (
   sun: SunHours,
   tiltDeg: number,
   azimuthDeg: number,
   gcr: number | null,
+  used: Pointing | null = null,
 ): Pointing => {
-  const pointing = emptyPointing(sun, gcr !== null);
+  const pointing = emptyPointing(sun, gcr !== null, used);
   const { cosIncidence, neighbours } = pointing;
   const [sinTilt, cosTilt] = [sinDeg(tiltDeg), cosDeg(tiltDeg)];
   const [east, north] = [sinTilt * sinDeg(azimuthDeg), sinTilt * cosDeg(azimuthDeg)];

@@ -25,17 +25,21 @@ export const resolveBest = (
       }
     : geometry;
 
-/** Where a mount points in every sample of the sun. */
-export const pointMount = (sun: SunHours, mount: ResolvedGeometry): Pointing => {
+/** Where a mount points in every sample of the sun; `used` as for {@link emptyPointing}. */
+export const pointMount = (
+  sun: SunHours,
+  mount: ResolvedGeometry,
+  used: Pointing | null = null,
+): Pointing => {
   switch (mount.kind) {
     case 'roof-plane':
-      return pointFixed(sun, mount.tiltDeg, mount.azimuthDeg, null);
+      return pointFixed(sun, mount.tiltDeg, mount.azimuthDeg, null, used);
     case 'fixed-tilt':
-      return pointFixed(sun, mount.tiltDeg, mount.azimuthDeg, mount.rows?.gcr ?? null);
+      return pointFixed(sun, mount.tiltDeg, mount.azimuthDeg, mount.rows?.gcr ?? null, used);
     case 'single-axis':
-      return pointSingleAxis(sun, mount);
+      return pointSingleAxis(sun, mount, used);
     case 'dual-axis':
-      return pointDualAxis(sun, mount);
+      return pointDualAxis(sun, mount, used);
   }
 };
 

@@ -23,12 +23,19 @@ export interface Neighbours {
   readonly groundLeft: Float64Array;
 }
 
-export const emptyPointing = (sun: SunHours, withRows: boolean): Pointing => {
+/**
+ * Columns to fill. Fresh memory costs more than the arithmetic here, so a caller that is done with a pointing of the
+ * same sun may hand it over as `used`; its columns are then written over.
+ */
+export const emptyPointing = (sun: SunHours, withRows: boolean, used: Pointing | null = null): Pointing => {
   const column = () => new Float64Array(sun.up.length);
-  return {
+  const { cosIncidence, cosTilt, sinTilt } = used ?? {
     cosIncidence: column(),
     cosTilt: column(),
     sinTilt: column(),
-    neighbours: withRows ? { shaded: column(), skyLeft: column(), groundLeft: column() } : null,
   };
+  const neighbours = withRows
+    ? (used?.neighbours ?? { shaded: column(), skyLeft: column(), groundLeft: column() })
+    : null;
+  return { cosIncidence, cosTilt, sinTilt, neighbours };
 };

@@ -38,9 +38,9 @@ export const trackerRowShade = (
  * the axis's own frame (across, along, out): Marion & Dobos 2013, NREL/TP-6A20-58891, eq. 3; turning right-handed
  * about the axis, so that with the axis falling south a positive turn faces west. Limits apply after backtracking.
  */
-export const pointSingleAxis = (sun: SunHours, mount: SingleAxis): Pointing => {
+export const pointSingleAxis = (sun: SunHours, mount: SingleAxis, used: Pointing | null = null): Pointing => {
   const gcr = mount.rows?.gcr ?? null;
-  const pointing = emptyPointing(sun, gcr !== null);
+  const pointing = emptyPointing(sun, gcr !== null, used);
   const { cosIncidence, cosTilt, sinTilt, neighbours } = pointing;
   const [sinAz, cosAz] = [sinDeg(mount.axisAzimuthDeg), cosDeg(mount.axisAzimuthDeg)];
   const [sinAxis, cosAxis] = [sinDeg(mount.axisTiltDeg), cosDeg(mount.axisTiltDeg)];

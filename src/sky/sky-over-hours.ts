@@ -29,22 +29,24 @@ interface Radiation {
   readonly dhi: Float64Array;
 }
 
+const emptyColumns = (hours: number) => {
+  const column = () => new Float64Array(hours);
+  return { circumsolar: column(), isotropic: column(), horizon: column(), steep: column() };
+};
+
 /**
- * Asks a sky model about every sunlit hour.
+ * Asks several sky models about every sunlit hour, in one pass over the year.
  * @param albedo ground reflectance 0..1, one number or one per hour
  */
-export const skyOverHours = (
+export const skiesOverHours = <M extends SkyModel>(
   sun: SunHours,
   radiation: Radiation,
   albedo: number | Float64Array,
-  model: SkyModel,
-): SkyHours => {
+  models: readonly M[],
+): Record<M, SkyHours> => {
   const hours = sun.cosZenith.length;
-  const column = () => new Float64Array(hours);
-  const [direct, circumsolar, isotropic, horizon, steep, ground] = [
-    column(), column(), column(), column(), column(), column(),
-  ]; // biome-ignore format: six columns alike
-  const ask = SKY_MODELS[model];
+  const [direct, ground] = [new Float64Array(hours), new Float64Array(hours)];
+  const skies = models.map((model) => ({ model, ask: SKY_MODELS[model], ...emptyColumns(hours) }));
   const hour: SkyHour = {
     directNormal: 0,
     diffuseHorizontal: 0,
@@ -66,11 +68,23 @@ export const skyOverHours = (
     hour.cosZenith = cosZenith;
     hour.extraterrestrialNormal = sun.extraterrestrialWm2[h];
     hour.airMass = relativeAirMass(zenithDeg - refractionDeg(90 - zenithDeg));
-    ask(hour, weights);
-    circumsolar[h] = (diffuse * weights.circumsolar) / Math.max(COS_85, cosZenith);
-    isotropic[h] = diffuse * weights.isotropic;
-    horizon[h] = diffuse * weights.horizon;
-    steep[h] = isotropic[h] * weights.steepness;
+    for (const sky of skies) {
+      sky.ask(hour, weights);
+      sky.circumsolar[h] = (diffuse * weights.circumsolar) / Math.max(COS_85, cosZenith);
+      sky.isotropic[h] = diffuse * weights.isotropic;
+      sky.horizon[h] = diffuse * weights.horizon;
+      sky.steep[h] = sky.isotropic[h] * weights.steepness;
+    }
   }
-  return { model, direct, circumsolar, isotropic, horizon, steep, ground };
+  const all = {} as Record<M, SkyHours>;
+  for (const { ask: _, ...columns } of skies) all[columns.model] = { ...columns, direct, ground };
+  return all;
 };
+
+/** The same for one sky model. */
+export const skyOverHours = (
+  sun: SunHours,
+  radiation: Radiation,
+  albedo: number | Float64Array,
+  model: SkyModel,
+): SkyHours => skiesOverHours(sun, radiation, albedo, [model])[model];

@@ -10,7 +10,8 @@ import {
   type SkyModel,
 } from '../shared/index.ts';
 import { type EdgeGeometry, screenWind, steepestChordTiltDeg } from '../wind/index.ts';
-import { ALL_MODELS, type MountRun, type Skies } from './mount-run.ts';
+import type { MountRun } from './mount-run.ts';
+import { ALL_MODELS, type Setting } from './setting.ts';
 
 /** Energy per kW of DC rating in the month that gives least a day. */
 export const worstMonth = (monthlyKwhPerKw: readonly number[]): MountResult['worst_month'] => {
@@ -56,16 +57,14 @@ const landM2 = ({ geometry, gcr }: MountRun, array: ArraySummary): number | null
 export const mountResult = (
   run: MountRun,
   reference: MountRun,
-  study: Study,
-  array: ArraySummary,
-  skies: Skies,
+  { study, array, sky }: Setting,
   mapMaximumKwhM2: number,
 ): MountResult => {
   const { mount, geometry } = run;
   const model = study.sky.model;
   const delivered = run.delivered[model];
   const tracker = isTracker(geometry);
-  const source = lightBySource(skies[model], run.views.open);
+  const source = lightBySource(sky, run.views.open);
   const gain = (m: SkyModel) =>
     run === reference ? 0 : run.delivered[m].energyKwhPerKw / reference.delivered[m].energyKwhPerKw - 1;
   const energyKwh = delivered.energyKwhPerKw * array.dc_kw;
@@ -77,8 +76,9 @@ export const mountResult = (
   });
   const even = tracker && run !== reference ? breakEven(costed(run), costed(reference), study.finance) : null;
   const referenceCapital = mountCost(reference.mount.cost, array.dc_kw).capitalPerKw;
-  const given = mount.geometry.kind === 'fixed-tilt' && [mount.geometry.tiltDeg, mount.geometry.azimuthDeg];
-  const best = given && given.includes('best');
+  const best =
+    mount.geometry.kind === 'fixed-tilt' &&
+    (mount.geometry.tiltDeg === 'best' || mount.geometry.azimuthDeg === 'best');
   const weakest = delivered.stages.reduce((a, b) => (b.efficiency < a.efficiency ? b : a));
   return {
     id: mount.id,

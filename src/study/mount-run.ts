@@ -1,5 +1,4 @@
 import {
-  type ArraySpec,
   type ChainSpec,
   type Delivered,
   deliver,
@@ -9,16 +8,11 @@ import {
   type PlaneViews,
   planeViews,
 } from '../energy/index.ts';
-import type { Study, StudyMount } from '../inputs/index.ts';
-import { isTracker, pointFixed, pointMount, type ResolvedGeometry, resolveBest } from '../mounts/index.ts';
-import { type ArraySummary, type HourlyYear, type SkyModel, sinDeg } from '../shared/index.ts';
-import { DOUBT_MODELS, type SkyHours } from '../sky/index.ts';
-import type { SunHours } from '../sun/index.ts';
+import type { StudyMount } from '../inputs/index.ts';
+import { isTracker, type Pointing, pointMount, type ResolvedGeometry, resolveBest } from '../mounts/index.ts';
+import { type SkyModel, sinDeg } from '../shared/index.ts';
 import { powerLawFactor } from '../wind/index.ts';
-
-/** The four skies of a study; every mount is worked out under each. */
-export type Skies = Readonly<Record<SkyModel, SkyHours>>;
-export const ALL_MODELS: readonly SkyModel[] = [...DOUBT_MODELS, 'isotropic'];
+import { ALL_MODELS, type Setting } from './setting.ts';
 
 /** One mount with all that was worked out for it before money. */
 export interface MountRun {
@@ -26,8 +20,8 @@ export interface MountRun {
   readonly geometry: ResolvedGeometry;
   readonly gcr: number | null;
   readonly views: PlaneViews;
-  /** Trackers: the plane lying flat where it stands, among its rows. */
-  readonly flat: PlaneViews | null;
+  /** Trackers: the plane where a dead one lies. */
+  readonly stuck: PlaneViews | null;
   readonly chain: ChainSpec;
   readonly arrayHeightM: number;
   readonly delivered: Readonly<Record<SkyModel, Delivered>>;
@@ -54,42 +48,39 @@ const arrayHeight = (
 const heatLossOf = ({ lengths, geometry }: StudyMount): HeatLoss =>
   geometry.kind === 'roof-plane' ? onRoof(lengths.airBehindM) : OPEN_RACK;
 
-/** The energy chain of a mount, alike for all but heat, wind at its height, and its drive. */
-export const chainOf = (
-  study: { readonly losses: Study['losses']; readonly array: ArraySpec },
-  year: HourlyYear,
-  array: ArraySummary,
-  heatLoss: HeatLoss,
-  arrayHeightM: number,
-  drive: ChainSpec['drive'],
-): ChainSpec => ({
+/** The energy chain of a mount: alike for all but cooling, wind at its height, and its drive. */
+const chainOf = ({ study, year, array }: Setting, mount: StudyMount, arrayHeightM: number): ChainSpec => ({
   ambient: year,
-  heatLoss,
+  heatLoss: heatLossOf(mount),
   windFactor: powerLawFactor(arrayHeightM),
   heatPerK: study.array.module?.heatPerK ?? USUAL_HEAT_PER_K,
   losses: study.losses,
   ceilingKwPerKw: array.ac_kw === null ? null : array.ac_kw / array.dc_kw,
-  drive,
+  drive: mount.drive,
 });
 
-/** Points one mount at the sun and follows its light to delivered energy, under every sky model. */
-export const runMount = (
+const runMount = (
   mount: StudyMount,
-  best: { readonly tiltDeg: number; readonly azimuthDeg: number },
-  study: Study,
-  ready: { readonly year: HourlyYear; readonly sun: SunHours },
-  array: ArraySummary,
-  skies: Skies,
+  geometry: ResolvedGeometry,
+  pointing: Pointing,
+  setting: Setting,
 ): MountRun => {
-  const { sun, year } = ready;
-  const geometry = resolveBest(mount.geometry, best);
+  const views = planeViews(setting.sun, pointing);
+  const stuck = isTracker(geometry) ? setting.flat : null;
+  const arrayHeightM = arrayHeight(mount, geometry, setting.study.site.roofHeightM);
+  const chain = chainOf(setting, mount, arrayHeightM);
+  const delivered = {} as Record<SkyModel, Delivered>;
+  for (const model of ALL_MODELS) delivered[model] = deliver(setting.skies[model], views, chain, stuck);
   const gcr = 'rows' in geometry ? (geometry.rows?.gcr ?? null) : null;
-  const views = planeViews(sun, pointMount(sun, geometry));
-  const flat = isTracker(geometry) ? planeViews(sun, pointFixed(sun, 0, 180, gcr)) : null;
-  const arrayHeightM = arrayHeight(mount, geometry, study.site.roofHeightM);
-  const chain = chainOf(study, year, array, heatLossOf(mount), arrayHeightM, mount.drive);
-  const delivered = Object.fromEntries(
-    ALL_MODELS.map((model) => [model, deliver(skies[model], views, chain, flat)]),
-  ) as Record<SkyModel, Delivered>;
-  return { mount, geometry, gcr, views, flat, chain, arrayHeightM, delivered };
+  return { mount, geometry, gcr, views, stuck, chain, arrayHeightM, delivered };
+};
+
+/** Points every mount at the sun and follows its light to delivered energy, under every sky model. */
+export const runMounts = (setting: Setting): MountRun[] => {
+  let pointing: Pointing | null = null;
+  return setting.study.mounts.map((mount) => {
+    const geometry = resolveBest(mount.geometry, setting.map.best);
+    pointing = pointMount(setting.sun, geometry, pointing);
+    return runMount(mount, geometry, pointing, setting);
+  });
 };

@@ -1,19 +1,12 @@
 import { mountCost, presentEnergy } from '../cost/index.ts';
 import { type ChainSpec, type Delivered, deliver, energyUnderInverter } from '../energy/index.ts';
-import type { Study } from '../inputs/index.ts';
 import { isTracker } from '../mounts/index.ts';
-import type { ArraySummary, HourlyYear, NotCounted } from '../shared/index.ts';
-import type { SkyHours } from '../sky/index.ts';
-import type { SunHours } from '../sun/index.ts';
+import type { NotCounted } from '../shared/index.ts';
 import type { MountRun } from './mount-run.ts';
+import type { Setting } from './setting.ts';
 
-/** Everything that the effects below are worked out from. */
-export interface Counted {
-  readonly study: Study;
-  readonly year: HourlyYear;
-  readonly sun: SunHours;
-  readonly sky: SkyHours;
-  readonly array: ArraySummary;
+/** The setting, and every mount worked out in it: what the effects below are reckoned from. */
+export interface Counted extends Setting {
   readonly runs: readonly MountRun[];
   readonly reference: MountRun;
 }
@@ -41,7 +34,7 @@ const kwh = (x: number): string => `${Math.round(x)} kWh/kW·yr`;
 
 const deliveredBy = (c: Counted, run: MountRun): Delivered => run.delivered[c.study.sky.model];
 const again = (c: Counted, run: MountRun, change: Partial<ChainSpec>): Delivered =>
-  deliver(c.sky, run.views, { ...run.chain, ...change }, run.flat);
+  deliver(c.sky, run.views, { ...run.chain, ...change }, run.stuck);
 const each = (c: Counted, share: (run: MountRun) => number): string =>
   c.runs.map((run) => `${run.mount.id} ${percent(share(run))}`).join(', ');
 
@@ -84,9 +77,9 @@ const driveLines = (c: Counted): NotCounted[] =>
 const stowLine = (c: Counted, run: MountRun): NotCounted => {
   const what = `wind stow of ${run.mount.id}`;
   const wind = c.year.windMs;
-  if (!wind || !run.flat) return { what, effect: 'the weather file has no wind, so it cannot be estimated' };
+  if (!wind || !run.stuck) return { what, effect: 'the weather file has no wind, so it cannot be estimated' };
   const working = deliver(c.sky, run.views, { ...run.chain, drive: null }).uncappedKwPerKw;
-  const flat = deliver(c.sky, run.flat, { ...run.chain, drive: null }).uncappedKwPerKw;
+  const flat = deliver(c.sky, run.stuck, { ...run.chain, drive: null }).uncappedKwPerKw;
   const ceiling = run.chain.ceilingKwPerKw ?? Number.POSITIVE_INFINITY;
   let [all, lost, hours] = [0, 0, 0];
   for (let h = 0; h < wind.length; h++) {

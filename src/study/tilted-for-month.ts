@@ -1,5 +1,5 @@
-import { deliver, planeViews } from '../energy/index.ts';
-import { pointFixed } from '../mounts/index.ts';
+import { deliver, type PlaneViews, planeViews } from '../energy/index.ts';
+import { type Pointing, pointFixed } from '../mounts/index.ts';
 import { type Comparison, MONTH_DAYS, MONTH_NAMES } from '../shared/index.ts';
 import type { SkyHours } from '../sky/index.ts';
 import type { SunHours } from '../sun/index.ts';
@@ -27,8 +27,10 @@ export const tiltedForMonth = (
   azimuthDeg: number,
 ): Comparison['tilted_for_month'] => {
   const chain = { ...reference.chain, drive: null };
+  let [pointing, views]: [Pointing | null, PlaneViews | null] = [null, null];
   const byTilt = Array.from({ length: 90 / STEP_DEG + 1 }, (_, i) => {
-    const views = planeViews(sun, pointFixed(sun, i * STEP_DEG, azimuthDeg, reference.gcr));
+    pointing = pointFixed(sun, i * STEP_DEG, azimuthDeg, reference.gcr, pointing);
+    views = planeViews(sun, pointing, views);
     return deliver(sky, views, chain).energyMonthlyKwhPerKw;
   });
   return MONTH_NAMES.map((month, m) => {

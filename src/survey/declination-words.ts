@@ -1,0 +1,51 @@
+import { plain, refuse, shown } from './refuse.ts';
+
+/** `16 E`, `13 W`, `0 E`; two decimals. */
+export const declinationShort = (declinationDeg: number): string =>
+  `${plain(Math.abs(declinationDeg))} ${Number(declinationDeg.toFixed(2)) < 0 ? 'W' : 'E'}`;
+
+/** `16.1 degrees east`, `13 degrees west`. */
+export const declinationWords = (declinationDeg: number): string => {
+  const size = plain(Math.abs(declinationDeg), 1);
+  if (size === '0') return '0 degrees';
+  return `${size} degrees ${declinationDeg < 0 ? 'west' : 'east'}`;
+};
+
+/** `0.11 degrees a year toward west`, or `no change to speak of`. */
+export const yearlyChangeWords = (perYearDeg: number): string => {
+  const size = plain(Math.abs(perYearDeg));
+  return size === '0'
+    ? 'no change to speak of'
+    : `${size} degrees a year toward ${perYearDeg < 0 ? 'west' : 'east'}`;
+};
+
+const NUMBER = String.raw`\d+(?:\.\d*)?|\.\d+`;
+const DECLINATION = new RegExp(
+  String.raw`^(${NUMBER})\s*(?:°|º|deg(?:rees?)?)?\s*(?:(${NUMBER})\s*(?:['’′]|min(?:utes?)?)\s*)?(E|W|east|west)$`,
+  'i',
+);
+const BARE = new RegExp(`^[+-]?(?:${NUMBER})$`);
+
+/**
+ * A declination as maps print it, with its side: `16 E`, `16.5° E`, `16°30' E`, `13W`, `13 west`. Degrees, east
+ * positive, 0 to 180 either way. Refuses a bare number (code `wrong-declination`): a lost sign doubles the error.
+ */
+export const parseDeclination = (raw: unknown): number => {
+  const text = typeof raw === 'string' ? raw.replace(/\s+/g, ' ').trim() : '';
+  const parts = DECLINATION.exec(text);
+  const minutes = Number(parts?.[2] ?? 0);
+  const size = Number(parts?.[1] ?? Number.NaN) + minutes / 60;
+  if (parts && minutes < 60 && size <= 180) return /^w/i.test(parts[3]) && size > 0 ? -size : size;
+  return refuse({
+    code: 'wrong-declination',
+    expected: 'a declination from 0 to 180 degrees with its side, E or W',
+    found: shown(raw),
+    fix: fixFor(typeof raw === 'number' ? String(raw) : text),
+  });
+};
+
+const fixFor = (text: string): string => {
+  if (!BARE.test(text) || Math.abs(Number(text)) > 180) return 'Write for example 16 E or 13 W.';
+  const size = text.replace(/^[+-]/, '');
+  return `Write ${size} E or ${size} W: a sign alone is read both ways.`;
+};
