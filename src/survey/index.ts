@@ -54,8 +54,8 @@ export { readSkylineFile } from './skyline-file.ts';
 export {
   checkedSkyline,
   gapFindings,
-  type PointPlace,
   type PlaceOf,
+  type PointPlace,
   WIDEST_GAP_DEG,
 } from './skyline-points.ts';
 export { isBlocked, type SkylineTable, SLOTS, skylineTable, slotOf } from './skyline-table.ts';

@@ -18,7 +18,8 @@ export const pointProblems = (points: readonly SkylinePoint[], placeOf: PlaceOf)
     const azimuth = isBearing(azimuthDeg) ? azimuthDeg % 360 : azimuthDeg;
     const other = seen.get(azimuth);
     if (other === undefined) seen.set(azimuth, elevationDeg);
-    else if (other !== elevationDeg) problems.push(twoElevations(azimuth, other, elevationDeg, placeOf(index)));
+    else if (other !== elevationDeg)
+      problems.push(twoElevations(azimuth, other, elevationDeg, placeOf(index)));
   });
   if (seen.size < 2) problems.push(tooFew(seen.size, points.length > 0 ? placeOf(0) : {}));
   return problems;
