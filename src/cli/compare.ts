@@ -47,9 +47,9 @@ export const compare = async (typed: string | undefined, options: CompareOptions
     if (memo) io.err(`Report written: ${memo}\n`);
     return io.out(report.resultsJson(comparison));
   }
-  // On the screen the weather is named by a path that can be typed from here.
-  const weather = { ...comparison.weather, source: inputs.weatherPath };
-  io.out(report.screenTable({ ...comparison, weather }, { reportPath: memo }));
+  // A plain table is only understood through its study.
+  const weatherArgument = inputs.study.weather.table ? studyPath : inputs.weatherPath;
+  io.out(report.screenTable(comparison, { reportPath: memo, weatherArgument }));
 };
 
 const checkedFolder = async (folder: string, inputPaths: readonly string[], io: Io) => {

@@ -11,6 +11,8 @@ import { monthInFull, mountById, nameOf, ratingWords, yearWords } from './words.
 export interface ScreenOptions {
   /** Where the memo lies, as the user would type it; null or absent: no report was written. */
   readonly reportPath?: string | null;
+  /** What `trackworth weather` can be given to see more of the year, as the user would type it; absent: the source. */
+  readonly weatherArgument?: string;
   /** Terminal columns. */
   readonly width?: 100;
 }
@@ -44,12 +46,15 @@ const flowed = (facts: readonly string[], width: number): string[] => {
   return lines;
 };
 
+/** The last part of a path. */
+const fileName = (path: string): string => oneLine(path.split(/[/\\]/).at(-1) ?? path);
+
 const placeLines = (c: Comparison, width: number): string[] =>
   flowed(
     [
       `${shorten(oneLine(c.title), TITLE_COLUMNS)}  ${formatPlace(c.site.latitude_deg, c.site.longitude_deg)}`,
       ratingWords(c),
-      `${yearWords(c.weather.format)} ${shorten(oneLine(c.weather.source), 40)}, ${clockWords(c.weather.time_shift_min)}`,
+      `${yearWords(c.weather.format)} ${shorten(fileName(c.weather.source), 40)}, ${clockWords(c.weather.time_shift_min)}`,
     ],
     width,
   );
@@ -107,13 +112,10 @@ const namedLines = (name: string, texts: readonly string[], most: number, width:
 const quoted = (file: string): string =>
   /^[\w./\\:-]+$/.test(file) && !file.startsWith('-') ? file : `'${file.replaceAll("'", "'\\''")}'`;
 
-const closingLines = (c: Comparison, reportPath: string | null, width: number): string[] => {
-  const next = `trackworth weather ${quoted(oneLine(c.weather.source))}`;
-  return [
-    ...(reportPath === null ? [] : hanging('Report', oneLine(reportPath), INDENT, width)),
-    ...hanging('Next', next, INDENT, width),
-  ];
-};
+const closingLines = (reportPath: string | null, weatherArgument: string, width: number): string[] => [
+  ...(reportPath === null ? [] : hanging('Report', oneLine(reportPath), INDENT, width)),
+  ...hanging('Next', `trackworth weather ${quoted(oneLine(weatherArgument))}`, INDENT, width),
+];
 
 /**
  * The first screen of `compare`: the answer, the table, what it does not count and where the memo lies. No line is
@@ -121,7 +123,7 @@ const closingLines = (c: Comparison, reportPath: string | null, width: number): 
  */
 export const screenTable = (
   c: Comparison,
-  { reportPath = null, width = 100 }: ScreenOptions = {},
+  { reportPath = null, weatherArgument = c.weather.source, width = 100 }: ScreenOptions = {},
 ): string => {
   const lack = costLack(c);
   const findings = findingLines(c, width);
@@ -145,7 +147,7 @@ export const screenTable = (
     ),
     ...namedLines('Doubt', c.advice.doubts, MOST_DOUBTS, width),
     ...(showsWind(c) ? hanging('Wind', oneLine(windDeferral(c)), INDENT, width) : []),
-    ...closingLines(c, reportPath, width),
+    ...closingLines(reportPath, weatherArgument, width),
   ];
   return `${lines.map((line) => shorten(line.trimEnd(), width)).join('\n')}\n`;
 };

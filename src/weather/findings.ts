@@ -111,7 +111,8 @@ const closureFindings = (closure: Closure | null): Finding[] => {
   if (!closure) return [];
   const { biasWm2, rmsWm2, hours } = closure;
   const off = Math.abs(biasWm2) > CLOSURE_LIMIT.biasWm2 || rmsWm2 > CLOSURE_LIMIT.rmsWm2;
-  const bias = `${biasWm2 < 0 ? '-' : '+'}${Math.abs(biasWm2).toFixed(1)}`;
+  const tenths = Math.round(biasWm2 * 10) + 0; // no -0
+  const bias = `${tenths > 0 ? '+' : ''}${(tenths / 10).toFixed(1)}`;
   return [
     {
       code: 'closure',
