@@ -1,6 +1,7 @@
 import { wrap360 } from '../shared/index.ts';
 import { declinationShort } from './declination-words.ts';
-import { plain, refuse, shown } from './refuse.ts';
+import { refuse, shown } from './refuse.ts';
+import { plain } from './words.ts';
 
 /** True bearing (0 included .. 360 excluded) of a magnetic one; declination east positive. */
 export const trueFromMagnetic = (magneticDeg: number, declinationDeg: number): number =>

@@ -1,4 +1,5 @@
-import { plain, refuse, shown } from './refuse.ts';
+import { refuse, shown } from './refuse.ts';
+import { degreesText, plain } from './words.ts';
 
 /** `16 E`, `13 W`, `0 E`; two decimals. */
 export const declinationShort = (declinationDeg: number): string =>
@@ -6,9 +7,9 @@ export const declinationShort = (declinationDeg: number): string =>
 
 /** `16.1 degrees east`, `13 degrees west`. */
 export const declinationWords = (declinationDeg: number): string => {
-  const size = plain(Math.abs(declinationDeg), 1);
-  if (size === '0') return '0 degrees';
-  return `${size} degrees ${declinationDeg < 0 ? 'west' : 'east'}`;
+  const size = degreesText(Math.abs(declinationDeg));
+  if (size === '0 degrees') return size;
+  return `${size} ${declinationDeg < 0 ? 'west' : 'east'}`;
 };
 
 /** `0.11 degrees a year toward west`, or `no change to speak of`. */

@@ -2,7 +2,8 @@ import { atan2Deg, DEG, type Finding, wrap180 } from '../shared/index.ts';
 import { type CalendarDate, dateText } from './calendar-date.ts';
 import { declinationWords } from './declination-words.ts';
 import { COVERED_DATES, isCovered, type MagneticField, magneticField } from './magnetic-field.ts';
-import { plain, refuse } from './refuse.ts';
+import { refuse } from './refuse.ts';
+import { degreesText } from './words.ts';
 
 export interface DeclinationRequest {
   /** North positive, -90..90. */
@@ -79,7 +80,7 @@ export const compareDeclinations = (byHandDeg: number, modelled: Declination): F
   return {
     code: 'odd-declination',
     severity: 'warning',
-    text: `The declination entered, ${declinationWords(byHandDeg)}, is ${plain(apart, 1)} degrees from the ${declinationWords(modelled.declinationDeg)} of ${modelled.model}.`,
+    text: `The declination entered, ${declinationWords(byHandDeg)}, is ${degreesText(apart)} from the ${declinationWords(modelled.declinationDeg)} of ${modelled.model}.`,
     fix: mirrored
       ? 'East and west look exchanged; check the side.'
       : 'Check the value, its side and the year of the map.',
@@ -113,6 +114,6 @@ const refuseMagneticPole = (horizontalNt: number): never =>
 const weakField = (horizontalNt: number, uncertaintyDeg: number): Finding => ({
   code: 'weak-horizontal-field',
   severity: 'warning',
-  text: `The horizontal magnetic field is ${Math.round(horizontalNt)} nT here, in the caution zone (${BLACKOUT_NT} to ${CAUTION_NT} nT) around a magnetic pole: a compass is sluggish, and the declination good to ${plain(uncertaintyDeg, 1)} degrees at best.`,
+  text: `The horizontal magnetic field is ${Math.round(horizontalNt)} nT here, in the caution zone (${BLACKOUT_NT} to ${CAUTION_NT} nT) around a magnetic pole: a compass is sluggish, and the declination good to ${degreesText(uncertaintyDeg)} at best.`,
   fix: 'Prefer a bearing from a map.',
 });

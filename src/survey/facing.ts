@@ -1,6 +1,7 @@
 import { compassWords, wrap180, wrap360 } from '../shared/index.ts';
 import { compassPoint } from './compass-point.ts';
-import { plain, refuse, shown } from './refuse.ts';
+import { refuse, shown } from './refuse.ts';
+import { plain } from './words.ts';
 
 /** How a bearing was taken: standing on the roof and looking out, looking at it from below, or along ridge or eave. */
 export const TAKEN = ['facing', 'looking_at', 'along_ridge'] as const;

@@ -58,7 +58,14 @@ export {
   type PointPlace,
   WIDEST_GAP_DEG,
 } from './skyline-points.ts';
-export { isBlocked, type SkylineTable, SLOTS, skylineTable, slotOf } from './skyline-table.ts';
+export {
+  HORIZON_BAND_DEG,
+  isBlocked,
+  type SkylineTable,
+  SLOTS,
+  skylineTable,
+  slotOf,
+} from './skyline-table.ts';
 export { unionOf } from './skyline-union.ts';
 export {
   gradeOfTilt,

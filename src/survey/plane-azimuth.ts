@@ -1,8 +1,9 @@
 import { type Finding, wrap360 } from '../shared/index.ts';
 import { type DeclinationMistakes, declinationMistakes, sumToTrue, trueFromMagnetic } from './bearing.ts';
 import { type Downslope, facingOf, facingWords, type Taken } from './facing.ts';
-import { plain, refuse } from './refuse.ts';
+import { refuse } from './refuse.ts';
 import { meanReading } from './two-readings.ts';
+import { plain } from './words.ts';
 
 /** A compass or map bearing of a plane, as read. */
 export interface BearingReading {

@@ -14,6 +14,3 @@ export const shown = (raw: unknown): string => {
 export const refuse = (...problems: readonly Problem[]): never => {
   throw new TrackworthError('input', problems);
 };
-
-/** Up to `decimals` decimals, without trailing zeros and without a negative zero. */
-export const plain = (x: number, decimals = 2): string => String(Number(x.toFixed(decimals)) + 0);

@@ -40,7 +40,7 @@ export const readSkylineFile = async (file: string, text: string): Promise<Skyli
   });
   const readable = read.filter((p) => !Number.isNaN(p.azimuthDeg) && !Number.isNaN(p.elevationDeg));
   const points = readable.map(({ azimuthDeg, elevationDeg }) => ({ azimuthDeg, elevationDeg }));
-  const found = pointProblems(points, (index) => ({ file, line: readable[index].line }));
+  const found = pointProblems(points, (index) => ({ file, line: readable[index]?.line ?? header.line }));
   // With unreadable rows, how many bearings there are cannot be told.
   problems.push(...found.filter(({ code }) => problems.length === 0 || code !== 'too-few-points'));
   if (problems.length > 0)

@@ -1,6 +1,6 @@
 import { type Finding, type Problem, TrackworthError, wrap360 } from '../shared/index.ts';
-import { plain } from './refuse.ts';
 import { type Skyline, type SkylinePoint, skylineOfPoints, turnPoints } from './skyline.ts';
+import { plain } from './words.ts';
 
 /** Common practice, no source: measured points should lie no farther apart than this. */
 export const WIDEST_GAP_DEG = 15;
@@ -21,7 +21,7 @@ export const pointProblems = (points: readonly SkylinePoint[], placeOf: PlaceOf)
     else if (other !== elevationDeg)
       problems.push(twoElevations(azimuth, other, elevationDeg, placeOf(index)));
   });
-  if (seen.size < 2) problems.push(tooFew(seen.size, points.length > 0 ? placeOf(0) : {}));
+  if (seen.size < 2) problems.push(tooFew(seen.size, placeOf(0)));
   return problems;
 };
 

@@ -1,5 +1,6 @@
 import { atan2Deg, cosDeg, DEG, tanDeg } from '../shared/index.ts';
-import { plain, refuse, shown } from './refuse.ts';
+import { refuse, shown } from './refuse.ts';
+import { degreesText, plain } from './words.ts';
 
 export interface Slope {
   /** From horizontal, 0..90. */
@@ -87,7 +88,7 @@ export const tiltErrorOfGrade = (tiltDeg: number, gradeErrorPercent: number): nu
 
 /** All forms of one tilt, `6:12 = 50 % = 26.6 degrees`; an upright plane has the last alone. */
 export const slopeWords = (tiltDeg: number): string => {
-  const degrees = `${plain(tiltDeg, 1)} degrees`;
+  const degrees = degreesText(tiltDeg);
   if (tiltDeg > 89.9) return `upright, ${degrees}`;
   const grade = gradeOfTilt(tiltDeg);
   return `${plain((grade * 12) / 100)}:12 = ${plain(grade, 1)} % = ${degrees}`;

@@ -1,5 +1,6 @@
 import { type Finding, wrap180, wrap360 } from '../shared/index.ts';
-import { plain, refuse } from './refuse.ts';
+import { refuse } from './refuse.ts';
+import { degreesText, plain } from './words.ts';
 
 /** Common practice, no source: forward and back bearings of one line should fit within this. */
 export const AGREEMENT_DEG = 2;
@@ -13,7 +14,7 @@ export interface MeanReading {
   readonly disagreementDeg: number;
   /** The reading error is at least this: half the disagreement. */
   readonly leastErrorDeg: number;
-  /** `forward 10 and back 191: mean 10.5, 1 degrees from opposite`. */
+  /** `forward 10 and back 191: mean 10.5, 1 degree from opposite`. */
   readonly words: string;
   readonly findings: readonly Finding[];
 }
@@ -37,7 +38,7 @@ export const meanReading = (forwardDeg: number, backDeg: number): MeanReading =>
     bearingDeg,
     disagreementDeg,
     leastErrorDeg: disagreementDeg / 2,
-    words: `forward ${plain(forwardDeg)} and back ${plain(backDeg)}: mean ${plain(bearingDeg)}, ${plain(disagreementDeg)} degrees from opposite`,
+    words: `forward ${plain(forwardDeg)} and back ${plain(backDeg)}: mean ${plain(bearingDeg)}, ${degreesText(disagreementDeg, 2)} from opposite`,
     findings:
       disagreementDeg > AGREEMENT_DEG + ROUNDING_DEG ? [localIron(forwardDeg, backDeg, disagreementDeg)] : [],
   };
@@ -46,6 +47,6 @@ export const meanReading = (forwardDeg: number, backDeg: number): MeanReading =>
 const localIron = (forwardDeg: number, backDeg: number, disagreementDeg: number): Finding => ({
   code: 'bearings-disagree',
   severity: 'warning',
-  text: `The bearings ${plain(forwardDeg)} forward and ${plain(backDeg)} back miss 180 degrees by ${plain(disagreementDeg, 1)}, over the ${AGREEMENT_DEG} of common practice: local iron or a current near one end is likely, and their mean may be wrong by more than the ${plain(disagreementDeg / 2, 1)} degrees shown.`,
+  text: `The bearings ${plain(forwardDeg)} forward and ${plain(backDeg)} back miss 180 degrees by ${plain(disagreementDeg, 1)}, over the ${AGREEMENT_DEG} of common practice: local iron or a current near one end is likely, and their mean may be wrong by more than the ${degreesText(disagreementDeg / 2)} shown.`,
   fix: 'Take the bearing from a map, or both readings again away from metal, vehicles and cables.',
 });
