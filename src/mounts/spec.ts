@@ -24,14 +24,14 @@ export interface RoofPlane {
   readonly kind: 'roof-plane';
   /** Of the roof itself, 0..90. */
   readonly tiltDeg: number;
-  /** The way the roof faces, 0..360 clockwise from true north. */
-  readonly azimuthDeg: number;
+  /** The way the roof faces, 0..360 clockwise from true north; `surveyed`: from a bearing, which needs the place first. */
+  readonly azimuthDeg: number | 'surveyed';
 }
 
 export interface FixedTilt {
   readonly kind: 'fixed-tilt';
   readonly tiltDeg: number | 'best';
-  readonly azimuthDeg: number | 'best';
+  readonly azimuthDeg: number | 'best' | 'surveyed';
   readonly rows: RowSpec | null;
 }
 

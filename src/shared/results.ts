@@ -27,6 +27,10 @@ export interface Comparison {
   array: ArraySummary;
   best_orientation: { tilt_deg: number; azimuth_deg: number; irradiation_kwh_m2: number };
   orientation_map: OrientationMapResult;
+  /** What stands before the sky; null where the study gives no skyline. */
+  skyline: SkylineResult | null;
+  /** Declinations applied, in words; empty where no magnetic bearing was read. */
+  declinations: string[];
   mounts: MountResult[];
   /** Twelve entries: the fixed plane that yields most in that month, on the reference's rows and losses. */
   tilted_for_month: { month: string; tilt_deg: number; azimuth_deg: number; kwh_per_kw_day: number }[];
@@ -70,6 +74,14 @@ export interface OrientationMapResult {
   irradiation_kwh_m2: number[][];
 }
 
+export interface SkylineResult {
+  /** One for each point of the array, straight lines between the points given; true azimuths 0..360. */
+  profiles: { name: string; azimuths_deg: number[]; elevations_deg: number[]; sky_blocked: number }[];
+  worst_point: string;
+  /** The sun's paths on the solstices and an equinox: true azimuth and elevation, every ten minutes while it is up. */
+  sun_paths: { name: string; azimuths_deg: number[]; elevations_deg: number[] }[];
+}
+
 export interface MountResult {
   id: string;
   kind: MountKind;
@@ -81,6 +93,22 @@ export interface MountResult {
   tilt_basis: string | null;
   /** TOF: irradiation over the map's maximum, 0..1; null for trackers. */
   orientation_factor: number | null;
+  /** Reading errors of tilt and azimuth, either way; null where none is given. */
+  tilt_error_deg: number | null;
+  azimuth_error_deg: number | null;
+  /** TOF at the least and most favourable angles that the reading errors allow; null without reading errors. */
+  orientation_factor_band: { low: number; high: number } | null;
+  /** Share of the unshaded front irradiation (beam, circumsolar, sky) that the skyline takes; 0 with an open horizon given or none. */
+  shading_fraction: number;
+  /** The same by month; null in a month without light. */
+  shading_monthly: (number | null)[];
+  /** The same at the worst of several points of the array. */
+  shading_worst_point: number;
+  /** TOF times (1 - shading at the worst point); null for trackers. */
+  tsrf: number | null;
+  /** The readings as written, and how the angles follow from them. */
+  readings: string[];
+  survey_steps: string[];
   /** Ground coverage ratio of the rows; null without rows. */
   gcr: number | null;
   /** What the rows are in words: `rows at GCR 0.45`, `no rows`, `lone mast`. */
