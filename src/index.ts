@@ -56,7 +56,7 @@ export {
   type ResolvedGeometry,
   type RoofPlane,
   type RowSpec,
-  resolveBest,
+  resolveAngles,
   rowShade,
   type SingleAxis,
 } from './mounts/index.ts';

@@ -10,7 +10,7 @@ import { costOfEnergy, sameEnergy } from './cost/index.ts';
 import { energyUnderInverter } from './energy/index.ts';
 import type { Study } from './inputs/index.ts';
 import { isTracker } from './mounts/index.ts';
-import type { ArraySummary, Comparison, MountResult, SameEnergy, SkyModel } from './shared/index.ts';
+import type { ArraySummary, Comparison, Finding, MountResult, SameEnergy, SkyModel } from './shared/index.ts';
 import { assumptionsOf } from './study/assumptions.ts';
 import { mountResult, worstMonth } from './study/mount-result.ts';
 import { type MountRun, runMounts } from './study/mount-run.ts';
@@ -18,18 +18,22 @@ import { notCounted } from './study/not-counted.ts';
 import { type ReadyYear, readyYear } from './study/ready-year.ts';
 import { referenceOf } from './study/reference.ts';
 import { ALL_MODELS, type Setting, settingOf } from './study/setting.ts';
+import { NO_SURVEY, type SiteSurvey } from './study/site-survey.ts';
+import { skylineResult } from './study/skyline-result.ts';
 import { tiltedForMonth } from './study/tilted-for-month.ts';
 import type { RawYear } from './weather/index.ts';
 import { windBasis } from './wind/index.ts';
 
+export { type PlaneFacts, planeFacts } from './study/plane-facts.ts';
+export { NO_SURVEY, type SiteSurvey, surveySite } from './study/site-survey.ts';
 export { type ReadyYear, readyYear };
 
 export const SCHEMA = 'trackworth-comparison-1';
 
 /** Compares every mount of a study over one year of weather. The weather has been read with the study's place and label. */
-export const compareMounts = (study: Study, raw: RawYear): Comparison => {
+export const compareMounts = (study: Study, raw: RawYear, survey: SiteSurvey = NO_SURVEY): Comparison => {
   // weather → sun → sky: what is the same for every mount
-  const setting = settingOf(study, raw);
+  const setting = settingOf(study, raw, survey);
   const { ready, year, sun, sky, map, array } = setting;
 
   // mounts → energy: where each points, what it collects and delivers
@@ -37,22 +41,22 @@ export const compareMounts = (study: Study, raw: RawYear): Comparison => {
   const reference = referenceOf(study, runs);
   const facing =
     reference.geometry.kind === 'fixed-tilt' ? reference.geometry.azimuthDeg : map.best.azimuthDeg;
-  const monthPlanes = tiltedForMonth(sun, sky, reference, facing);
+  const monthPlanes = tiltedForMonth(sun, sky, reference, facing, setting.shade);
 
   // wind and cost, mount by mount
-  const maximum = map.best.irradiationKwhM2;
-  const mounts = runs.map((run) => mountResult(run, reference, setting, maximum));
+  const mounts = runs.map((run) => mountResult(run, reference, setting));
   const fixedInstead = fixedArraysInstead(setting, runs, reference, mounts);
 
   // advice
   const counted = { ...setting, runs, reference };
   const blanks = notCounted(counted);
+  const findings = [...ready.found.findings, ...survey.findings];
   const adviceInput = {
     mounts: mounts.map((result, i) => adviceMount(result, runs[i], study, array)),
     referenceId: reference.mount.id,
     objective: study.objective,
     skyModel: study.sky.model,
-    findings: ready.found.findings,
+    findings,
     notCounted: blanks,
     inverterGiven: array.ac_kw !== null,
     globalOnly: ready.globalOnly,
@@ -76,7 +80,7 @@ export const compareMounts = (study: Study, raw: RawYear): Comparison => {
       elevation_m: year.place.elevationM,
       utc_offset_h: year.place.utcOffsetH,
     },
-    weather: weatherSummary(ready),
+    weather: weatherSummary(ready, findings),
     sky_model: study.sky.model,
     array,
     best_orientation: {
@@ -89,6 +93,8 @@ export const compareMounts = (study: Study, raw: RawYear): Comparison => {
       azimuths_deg: [...map.azimuthsDeg],
       irradiation_kwh_m2: map.irradiationKwhM2.map((row) => [...row]),
     },
+    skyline: skylineResult(setting),
+    declinations: [...survey.declinations],
     mounts,
     tilted_for_month: monthPlanes,
     comparisons: { same_money: null, same_energy: fixedInstead, same_land: null, own_best: null },
@@ -145,7 +151,7 @@ const adviceMount = (result: MountResult, run: MountRun, study: Study, array: Ar
   downtime_blank: isTracker(run.geometry) && (run.mount.drive?.working ?? null) === null,
 });
 
-const weatherSummary = ({ year, found }: ReadyYear): Comparison['weather'] => ({
+const weatherSummary = ({ year, found }: ReadyYear, findings: readonly Finding[]): Comparison['weather'] => ({
   source: year.source,
   format: year.format,
   station: year.station,
@@ -155,5 +161,5 @@ const weatherSummary = ({ year, found }: ReadyYear): Comparison['weather'] => ({
   ghi_monthly_kwh_m2: [...found.ghiMonthlyKwhM2],
   time_shift_min: found.timeShiftMin,
   dropped_night_kwh_m2: found.droppedNightKwhM2,
-  findings: [...found.findings],
+  findings: [...findings],
 });

@@ -32,6 +32,7 @@ export interface Stage {
 }
 
 export type StageName =
+  | 'skyline'
   | 'rows'
   | 'incidence'
   | 'heat'
@@ -48,6 +49,8 @@ export interface Delivered {
   /** Open light on the plane, kWh/m2 (1 kWh/m2 is 1 kWh per kW at test conditions). */
   readonly irradiationKwhM2: number;
   readonly irradiationMonthlyKwhM2: readonly number[];
+  /** What of it comes past the skyline, by month; all of it with an open horizon. */
+  readonly pastSkylineMonthlyKwhM2: readonly number[];
   /** Counted stages, in order: their efficiencies times the irradiation are the energy. */
   readonly stages: readonly Stage[];
   readonly energyKwhPerKw: number;
@@ -59,6 +62,7 @@ export interface Delivered {
 /** One pass over the year: sums at each depth, kWh per kW of DC rating (1 kWh/m2 of light is 1 kWh per kW). */
 interface YearPass {
   readonly open: number[];
+  readonly skyline: number[];
   readonly rows: number;
   readonly lit: number;
   readonly heated: number;
@@ -72,26 +76,23 @@ interface YearPass {
 const passThroughYear = (sky: SkyHours, views: PlaneViews, spec: ChainSpec): YearPass => {
   const { temperatureC, windMs } = spec.ambient;
   const { u0, u1 } = spec.heatLoss;
-  const hasRows = views.rows !== views.open;
+  const hasSkyline = views.skyline !== views.open;
+  const hasRows = views.rows !== views.skyline;
   const ceiling = spec.ceilingKwPerKw ?? Number.POSITIVE_INFINITY;
   const kept = constantShares(spec.losses).reduce((product, [, share]) => product * (1 - share), 1);
   const uncapped = new Float64Array(sky.direct.length);
-  const pass = {
-    open: new Array<number>(12),
-    rows: 0,
-    lit: 0,
-    heated: 0,
-    ac: new Array<number>(12),
-    uncapped,
-  };
+  const twelve = () => new Array<number>(12).fill(0);
+  const pass = { open: twelve(), skyline: twelve(), rows: 0, lit: 0, heated: 0, ac: twelve(), uncapped };
   for (let month = 0; month < 12; month++) {
     let open = 0;
+    let pastSkyline = 0;
     let ac = 0;
     const end = MONTH_FIRST_DAY[month + 1] * 24;
     for (let h = MONTH_FIRST_DAY[month] * 24; h < end; h++) {
       const light = lightAt(sky, views.open, h) / 1000;
       if (light <= 0) continue;
-      const behindRows = hasRows ? lightAt(sky, views.rows, h) / 1000 : light;
+      const seen = hasSkyline ? lightAt(sky, views.skyline, h) / 1000 : light;
+      const behindRows = hasRows ? lightAt(sky, views.rows, h) / 1000 : seen;
       const lit = Math.max(0, lightAt(sky, views.glass, h) / 1000);
       let dc = lit;
       if (temperatureC) {
@@ -101,6 +102,7 @@ const passThroughYear = (sky: SkyHours, views: PlaneViews, spec: ChainSpec): Yea
       }
       const power = dc * kept;
       open += light;
+      pastSkyline += seen;
       pass.rows += behindRows;
       pass.lit += lit;
       pass.heated += dc;
@@ -108,6 +110,7 @@ const passThroughYear = (sky: SkyHours, views: PlaneViews, spec: ChainSpec): Yea
       ac += power < ceiling ? power : ceiling;
     }
     pass.open[month] = open;
+    pass.skyline[month] = pastSkyline;
     pass.ac[month] = ac;
   }
   return pass;
@@ -127,7 +130,7 @@ const constantShares = (losses: LossSpec): [StageName, number][] =>
 const sum = (monthly: readonly number[]): number => monthly.reduce((total, month) => total + month, 0);
 
 /**
- * From the views of a plane and a sky to delivered AC energy, stage by stage: rows, incidence, heat, dirt, module
+ * From the views of a plane and a sky to delivered AC energy, stage by stage: skyline, rows, incidence, heat, dirt, module
  * spread, cables, conversion, the inverter's ceiling hour by hour, the drive's own use, and downtime.
  * A tracker that does not work delivers what it does where it is stuck: energy is `working` times the tracker's own
  * and `1 - working` times the stuck plane's (expected value; failures are taken as even over the year).
@@ -147,7 +150,8 @@ export const deliver = (
     stages.push({ name, efficiency: now > 0 ? after / now : 1, kwhPerKwAfter: after });
     now = after;
   };
-  if (views.rows !== views.open) stage('rows', pass.rows);
+  if (views.skyline !== views.open) stage('skyline', sum(pass.skyline));
+  if (views.rows !== views.skyline) stage('rows', pass.rows);
   stage('incidence', pass.lit);
   if (spec.ambient.temperatureC) stage('heat', pass.heated);
   for (const [name, share] of constantShares(spec.losses)) stage(name, now * (1 - share));
@@ -167,6 +171,7 @@ export const deliver = (
   return {
     irradiationKwhM2,
     irradiationMonthlyKwhM2: pass.open,
+    pastSkylineMonthlyKwhM2: pass.skyline,
     stages,
     energyKwhPerKw: sum(ac),
     energyMonthlyKwhPerKw: ac,

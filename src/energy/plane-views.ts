@@ -1,15 +1,19 @@
 import type { Neighbours, Pointing } from '../mounts/index.ts';
+import { acosDeg } from '../shared/index.ts';
 import type { SkyHours } from '../sky/index.ts';
 import type { SunHours } from '../sun/index.ts';
 import { beamThroughGlass, diffuseThroughGlass, tiltIndex } from './incidence.ts';
+import type { SkylineShade } from './skyline-shade.ts';
 
 /**
  * How much of each kind of light a plane takes in each hour, whatever the sky's brightness: means over the hour's
- * sunlit samples. Three depths: `open` (no neighbours), `rows` (neighbours' shade and masking taken off), `glass`
- * (reflection at the glass taken off too). Worked out once per mount; every sky model then costs one dot product.
+ * sunlit samples. Four depths: `open` (nothing in the way), `skyline` (behind hills and trees), `rows` (neighbours'
+ * shade and masking taken off too), `glass` (reflection at the glass taken off too). A depth that takes nothing is the
+ * one before it. Worked out once per mount; every sky model then costs one dot product.
  */
 export interface PlaneViews {
   readonly open: Views;
+  readonly skyline: Views;
   readonly rows: Views;
   readonly glass: Views;
 }
@@ -34,9 +38,15 @@ const emptyViews = (hours: number): Views => {
 
 /**
  * Averages a plane's pointing over the samples of each hour.
+ * @param shade what the skyline takes; null: the horizon is open
  * @param used views of the same sun that are no longer needed: their columns are written over, which spares memory
  */
-export const planeViews = (sun: SunHours, pointing: Pointing, used: PlaneViews | null = null): PlaneViews => {
+export const planeViews = (
+  sun: SunHours,
+  pointing: Pointing,
+  shade: SkylineShade | null = null,
+  used: PlaneViews | null = null,
+): PlaneViews => {
   const hours = sun.cosZenith.length;
   const { cosIncidence, cosTilt, sinTilt, neighbours } = pointing;
   const open = used?.open ?? emptyViews(hours);
@@ -60,7 +70,10 @@ export const planeViews = (sun: SunHours, pointing: Pointing, used: PlaneViews |
       const cos = cosIncidence[s];
       if (cos > 0) {
         beam += cos;
-        lit += cos * beamThroughGlass(cos) * (neighbours ? 1 - neighbours.shaded[s] : 1);
+        let arriving = cos;
+        if (shade) arriving *= 1 - shade.hidden[s];
+        if (neighbours) arriving *= 1 - neighbours.shaded[s];
+        lit += arriving * beamThroughGlass(cos);
       }
     }
     const share = 1 / (to - from);
@@ -72,17 +85,48 @@ export const planeViews = (sun: SunHours, pointing: Pointing, used: PlaneViews |
     open.ground[h] = 1 - open.sky[h];
     glass.beam[h] = lit * share;
   }
-  const usedRows = used && used.rows !== used.open ? used.rows : null;
-  const rows = neighbours ? behindNeighbours(sun, pointing, neighbours, open, usedRows) : open;
+  const skyline = shade ? behindSkyline(sun, pointing, shade, open, tilt) : open;
+  const usedRows = used && used.rows !== used.skyline ? used.rows : null;
+  const rows = neighbours
+    ? behindNeighbours(sun, pointing, neighbours, shade, skyline, open, usedRows)
+    : skyline;
   diffusePastGlass(sun, rows, tilt, glass);
-  return { open, rows, glass };
+  return { open, skyline, rows, glass };
 };
 
-/** Takes off what the neighbours shade and mask. */
+/** Takes off what the skyline hides: the sun sample by sample, the sky by the plane's angles in the middle of the hour. */
+const behindSkyline = (
+  sun: SunHours,
+  pointing: Pointing,
+  shade: SkylineShade,
+  open: Views,
+  cosTilt: Float64Array,
+): Views => {
+  const views = { ...emptyViews(sun.cosZenith.length), ground: open.ground };
+  const { cosIncidence, azimuthDegAt } = pointing;
+  for (let h = 0; h < sun.cosZenith.length; h++) {
+    const from = sun.first[h];
+    const to = sun.first[h + 1];
+    if (to === from) continue;
+    let beam = 0;
+    for (let s = from; s < to; s++) if (cosIncidence[s] > 0) beam += cosIncidence[s] * (1 - shade.hidden[s]);
+    const azimuthDeg = azimuthDegAt((from + to) >> 1);
+    const skyLeft = shade.skyLeft(acosDeg(cosTilt[h]), azimuthDeg);
+    views.beam[h] = beam / (to - from);
+    views.sky[h] = open.sky[h] * skyLeft;
+    views.steep[h] = open.steep[h] * skyLeft;
+    views.horizon[h] = open.horizon[h] * shade.bandLeft(azimuthDeg);
+  }
+  return views;
+};
+
+/** Takes off what the neighbours shade and mask; of the sky they leave a share of what the skyline left. */
 const behindNeighbours = (
   sun: SunHours,
   pointing: Pointing,
   neighbours: Neighbours,
+  shade: SkylineShade | null,
+  before: Views,
   open: Views,
   used: Views | null,
 ): Views => {
@@ -102,13 +146,13 @@ const behindNeighbours = (
       sky += (1 - away) * skyLeft[s];
       horizon += sinTilt[s] * skyLeft[s];
       ground += away * groundLeft[s];
-      if (cosIncidence[s] > 0) beam += cosIncidence[s] * (1 - shaded[s]);
+      if (cosIncidence[s] > 0) beam += cosIncidence[s] * (1 - shaded[s]) * (shade ? 1 - shade.hidden[s] : 1);
     }
     const share = 1 / (to - from);
     rows.beam[h] = beam * share;
-    rows.sky[h] = sky * share;
+    rows.sky[h] = sky * share * (before.sky[h] / open.sky[h]);
     rows.steep[h] = open.steep[h] * (rows.sky[h] / open.sky[h]);
-    rows.horizon[h] = horizon * share;
+    rows.horizon[h] = open.horizon[h] > 0 ? horizon * share * (before.horizon[h] / open.horizon[h]) : 0;
     rows.ground[h] = ground * share;
   }
   return rows;

@@ -1,4 +1,4 @@
-import type { SunHours } from '../sun/index.ts';
+import { type SunHours, sunAzimuthDeg } from '../sun/index.ts';
 import { mastFieldShade } from './mast-field.ts';
 import { emptyPointing, type Pointing } from './pointing.ts';
 import { groundLeftByRows, skyLeftByRows } from './row-view.ts';
@@ -10,7 +10,7 @@ import type { DualAxis } from './spec.ts';
  * no published figure is known to us).
  */
 export const pointDualAxis = (sun: SunHours, mount: DualAxis, used: Pointing | null = null): Pointing => {
-  const pointing = emptyPointing(sun, mount.rows !== null, used);
+  const pointing = emptyPointing(sun, mount.rows !== null, (s) => sunAzimuthDeg(sun, s), used);
   pointing.cosIncidence.fill(1);
   pointing.cosTilt.set(sun.up);
   for (let s = 0; s < sun.up.length; s++)

@@ -18,7 +18,7 @@ export const pointFixed = (
   gcr: number | null,
   used: Pointing | null = null,
 ): Pointing => {
-  const pointing = emptyPointing(sun, gcr !== null, used);
+  const pointing = emptyPointing(sun, gcr !== null, () => azimuthDeg, used);
   const { cosIncidence, neighbours } = pointing;
   const [sinTilt, cosTilt] = [sinDeg(tiltDeg), cosDeg(tiltDeg)];
   const [east, north] = [sinTilt * sinDeg(azimuthDeg), sinTilt * cosDeg(azimuthDeg)];

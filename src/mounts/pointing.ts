@@ -9,6 +9,8 @@ export interface Pointing {
   readonly cosIncidence: Float64Array;
   readonly cosTilt: Float64Array;
   readonly sinTilt: Float64Array;
+  /** The way the plane faces in one sample, true azimuth 0..360; asked only where a skyline hides part of the sky. */
+  readonly azimuthDegAt: (sample: number) => number;
   /** Set where there are rows. */
   readonly neighbours: Neighbours | null;
 }
@@ -27,7 +29,12 @@ export interface Neighbours {
  * Columns to fill. Fresh memory costs more than the arithmetic here, so a caller that is done with a pointing of the
  * same sun may hand it over as `used`; its columns are then written over.
  */
-export const emptyPointing = (sun: SunHours, withRows: boolean, used: Pointing | null = null): Pointing => {
+export const emptyPointing = (
+  sun: SunHours,
+  withRows: boolean,
+  azimuthDegAt: Pointing['azimuthDegAt'],
+  used: Pointing | null = null,
+): Pointing => {
   const column = () => new Float64Array(sun.up.length);
   const { cosIncidence, cosTilt, sinTilt } = used ?? {
     cosIncidence: column(),
@@ -37,5 +44,5 @@ export const emptyPointing = (sun: SunHours, withRows: boolean, used: Pointing |
   const neighbours = withRows
     ? (used?.neighbours ?? { shaded: column(), skyLeft: column(), groundLeft: column() })
     : null;
-  return { cosIncidence, cosTilt, sinTilt, neighbours };
+  return { cosIncidence, cosTilt, sinTilt, azimuthDegAt, neighbours };
 };

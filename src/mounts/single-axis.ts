@@ -1,4 +1,4 @@
-import { acosDeg, cosDeg, sinDeg, tanDeg } from '../shared/index.ts';
+import { acosDeg, atan2Deg, cosDeg, sinDeg, tanDeg, wrap360 } from '../shared/index.ts';
 import type { SunHours } from '../sun/index.ts';
 import { emptyPointing, type Pointing } from './pointing.ts';
 import { rowShade } from './row-shade.ts';
@@ -33,6 +33,19 @@ export const trackerRowShade = (
   return cosIncidence > 0 ? rowShade(up, cosIncidence, gcr) : 0;
 };
 
+/** The way a tracker's plane faces in one sample, 0..360: its normal turned out of the axis's frame. */
+const facingAt = (sun: SunHours, mount: SingleAxis, s: number): number => {
+  const [sinAz, cosAz] = [sinDeg(mount.axisAzimuthDeg), cosDeg(mount.axisAzimuthDeg)];
+  const [sinAxis, cosAxis] = [sinDeg(mount.axisTiltDeg), cosDeg(mount.axisTiltDeg)];
+  const across = sun.east[s] * cosAz - sun.north[s] * sinAz;
+  const out = (sun.east[s] * sinAz + sun.north[s] * cosAz) * sinAxis + sun.up[s] * cosAxis;
+  const trueTurnDeg = atan2Deg(across, out);
+  const free = mount.rows?.lowSun === 'backtrack' ? backtrackTurn(trueTurnDeg, mount.rows.gcr) : trueTurnDeg;
+  const turnDeg = Math.max(-mount.swingDeg, Math.min(mount.swingDeg, free));
+  const [aside, forward] = [sinDeg(turnDeg), cosDeg(turnDeg) * sinAxis];
+  return wrap360(atan2Deg(aside * cosAz + forward * sinAz, forward * cosAz - aside * sinAz));
+};
+
 /**
  * A plane that turns about one axis, as near to the sun as its swing and its neighbours allow. The sun is taken into
  * the axis's own frame (across, along, out): Marion & Dobos 2013, NREL/TP-6A20-58891, eq. 3; turning right-handed
@@ -40,7 +53,7 @@ export const trackerRowShade = (
  */
 export const pointSingleAxis = (sun: SunHours, mount: SingleAxis, used: Pointing | null = null): Pointing => {
   const gcr = mount.rows?.gcr ?? null;
-  const pointing = emptyPointing(sun, gcr !== null, used);
+  const pointing = emptyPointing(sun, gcr !== null, (s) => facingAt(sun, mount, s), used);
   const { cosIncidence, cosTilt, sinTilt, neighbours } = pointing;
   const [sinAz, cosAz] = [sinDeg(mount.axisAzimuthDeg), cosDeg(mount.axisAzimuthDeg)];
   const [sinAxis, cosAxis] = [sinDeg(mount.axisTiltDeg), cosDeg(mount.axisTiltDeg)];

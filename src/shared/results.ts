@@ -104,8 +104,9 @@ export interface MountResult {
   shading_monthly: (number | null)[];
   /** The same at the worst of several points of the array. */
   shading_worst_point: number;
-  /** TOF times (1 - shading at the worst point); null for trackers. */
+  /** TOF times (1 - shading), and the same at the worst point of the array; null for trackers. */
   tsrf: number | null;
+  tsrf_worst_point: number | null;
   /** The readings as written, and how the angles follow from them. */
   readings: string[];
   survey_steps: string[];
@@ -151,7 +152,14 @@ export interface MountResult {
   /** Capital per kW above the reference's, as quoted. */
   premium_per_kw: number | null;
   wind: MountWind;
-  limits: { name: string; status: LimitStatus; detail: string; excess_m: number | null }[];
+  /** `bound`: a value that may be at `most` or must be at `least` so much. */
+  limits: {
+    name: string;
+    bound: 'most' | 'least';
+    status: LimitStatus;
+    detail: string;
+    excess_m: number | null;
+  }[];
 }
 
 export interface MountWind {

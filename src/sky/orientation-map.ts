@@ -146,9 +146,19 @@ const beamOn = (v: SunVectors, tiltDeg: number, azimuthDeg: number): number => {
   return sum;
 };
 
+/** Yearly irradiation of unshaded fixed planes, kWh/m2, as a function of tilt and azimuth; gathers the year's sun once. */
+export const irradiationOfPlanes = (
+  sun: SunHours,
+  sky: SkyHours,
+): ((tiltDeg: number, azimuthDeg: number) => number) => {
+  const vectors = sunVectors(sun, sky, 1);
+  const diffuse = diffuseYear(sky);
+  return (tiltDeg, azimuthDeg) => beamOn(vectors, tiltDeg, azimuthDeg) + diffuseOn(diffuse, tiltDeg);
+};
+
 /** Yearly irradiation of one unshaded fixed plane, kWh/m2. */
 export const planeIrradiation = (sun: SunHours, sky: SkyHours, tiltDeg: number, azimuthDeg: number): number =>
-  beamOn(sunVectors(sun, sky, 1), tiltDeg, azimuthDeg) + diffuseOn(diffuseYear(sky), tiltDeg);
+  irradiationOfPlanes(sun, sky)(tiltDeg, azimuthDeg);
 
 /** Climbs from the best grid point by turns in tilt and azimuth, to 0.05 degrees. */
 const refine = (

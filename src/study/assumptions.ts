@@ -1,6 +1,7 @@
 import { isTracker } from '../mounts/index.ts';
 import type { Assumption } from '../shared/index.ts';
 import { SAMPLES_PER_HOUR, SOLAR_CONSTANT_WM2 } from '../sun/index.ts';
+import { HORIZON_BAND_DEG } from '../survey/index.ts';
 import { type MountRun, USUAL_HEAT_PER_K } from './mount-run.ts';
 import type { Counted } from './not-counted.ts';
 
@@ -79,6 +80,12 @@ export const assumptionsOf = (c: Counted): Assumption[] => {
       value:
         'long, level and equal; every row is shaded like one in the middle; loss in proportion to the shaded area',
       source: 'assumption: strings of modules may lose more, a first row loses nothing',
+    });
+  if (c.shade)
+    list.push({
+      what: 'skyline',
+      value: `hides the sun hour by hour, and the even sky and the horizon band (${HORIZON_BAND_DEG} degrees high) by its view${(c.survey.skyline?.profiles.length ?? 0) > 1 ? '; mean of all points of the array' : ''}`,
+      source: 'the study; band after Perez et al. 1986, from memory; the ground before it is taken as lit',
     });
   if (trackers.length > 0)
     list.push({ what: 'trackers', value: 'point exactly; level ground', source: 'assumption' });

@@ -10,7 +10,8 @@ import {
   type SkyModel,
 } from '../shared/index.ts';
 import { type EdgeGeometry, screenWind, steepestChordTiltDeg } from '../wind/index.ts';
-import type { MountRun } from './mount-run.ts';
+import { type MountRun, shadingOf } from './mount-run.ts';
+import { factorBand, programmeLimits } from './orientation.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
 
 /** Energy per kW of DC rating in the month that gives least a day. */
@@ -53,13 +54,63 @@ const landM2 = ({ geometry, gcr }: MountRun, array: ArraySummary): number | null
     ? null
     : (array.modules * array.module_area_m2) / gcr;
 
+export type Orientation = Pick<
+  MountResult,
+  | 'tilt_error_deg'
+  | 'azimuth_error_deg'
+  | 'orientation_factor'
+  | 'orientation_factor_band'
+  | 'shading_fraction'
+  | 'shading_monthly'
+  | 'shading_worst_point'
+  | 'tsrf'
+  | 'tsrf_worst_point'
+  | 'readings'
+  | 'survey_steps'
+>;
+
+/** How well a plane is turned to the light, what the skyline takes, and how that was read. */
+export const orientationOf = (run: MountRun, { study, sun, sky, map }: Setting): Orientation => {
+  const { geometry, survey, shadingAtWorst } = run;
+  const { irradiationKwhM2, irradiationMonthlyKwhM2, pastSkylineMonthlyKwhM2 } =
+    run.delivered[study.sky.model];
+  const past = pastSkylineMonthlyKwhM2.reduce((sum, month) => sum + month, 0);
+  const shading = shadingOf(irradiationKwhM2, past);
+  const [tiltErrorDeg, azimuthErrorDeg] = [survey?.tiltErrorDeg ?? null, survey?.azimuthErrorDeg ?? null];
+  const fixed = 'tiltDeg' in geometry ? geometry : null;
+  const maximum = map.best.irradiationKwhM2;
+  const factor = fixed && Math.min(1, irradiationKwhM2 / maximum);
+  return {
+    tilt_error_deg: tiltErrorDeg,
+    azimuth_error_deg: azimuthErrorDeg,
+    orientation_factor: factor,
+    orientation_factor_band:
+      fixed && factorBand(sun, sky, { ...fixed, tiltErrorDeg, azimuthErrorDeg }, maximum),
+    shading_fraction: shading,
+    shading_monthly: irradiationMonthlyKwhM2.map((open, m) =>
+      open > 0 ? shadingOf(open, pastSkylineMonthlyKwhM2[m]) : null,
+    ),
+    shading_worst_point: shadingAtWorst,
+    tsrf: factor === null ? null : factor * (1 - shading),
+    tsrf_worst_point: factor === null ? null : factor * (1 - shadingAtWorst),
+    readings: [...(survey?.readings ?? [])],
+    survey_steps: [...(survey?.steps ?? [])],
+  };
+};
+
+const limitsOfProgramme = (o: Orientation, { study }: Setting): MountResult['limits'] =>
+  o.orientation_factor === null
+    ? []
+    : programmeLimits(
+        study.programme,
+        o.orientation_factor,
+        o.orientation_factor_band,
+        o.shading_worst_point,
+      );
+
 /** One mount of the comparison, key by key of the contract. */
-export const mountResult = (
-  run: MountRun,
-  reference: MountRun,
-  { study, array, sky }: Setting,
-  mapMaximumKwhM2: number,
-): MountResult => {
+export const mountResult = (run: MountRun, reference: MountRun, setting: Setting): MountResult => {
+  const { study, array, sky } = setting;
   const { mount, geometry } = run;
   const model = study.sky.model;
   const delivered = run.delivered[model];
@@ -79,6 +130,8 @@ export const mountResult = (
   const best =
     mount.geometry.kind === 'fixed-tilt' &&
     (mount.geometry.tiltDeg === 'best' || mount.geometry.azimuthDeg === 'best');
+  const orientation = orientationOf(run, setting);
+  const screened = screenWind(edgeGeometry(run, study), study.wind);
   const weakest = delivered.stages.reduce((a, b) => (b.efficiency < a.efficiency ? b : a));
   return {
     id: mount.id,
@@ -87,7 +140,7 @@ export const mountResult = (
     tilt_deg: 'tiltDeg' in geometry ? geometry.tiltDeg : null,
     azimuth_deg: 'azimuthDeg' in geometry ? geometry.azimuthDeg : null,
     tilt_basis: tracker ? null : best ? 'best: unshaded optimum of the orientation map' : 'given',
-    orientation_factor: tracker ? null : Math.min(1, delivered.irradiationKwhM2 / mapMaximumKwhM2),
+    ...orientation,
     gcr: run.gcr,
     rows: rowsInWords(run),
     irradiation_kwh_m2: delivered.irradiationKwhM2,
@@ -125,7 +178,8 @@ export const mountResult = (
       run === reference || cost.capitalPerKw === null || referenceCapital === null
         ? null
         : cost.capitalPerKw - referenceCapital,
-    ...screenWind(edgeGeometry(run, study), study.wind),
+    wind: screened.wind,
+    limits: [...screened.limits, ...limitsOfProgramme(orientation, setting)],
   };
 };
 
@@ -134,6 +188,8 @@ const STAGE_SOURCES: Record<
   MountRun['delivered']['perez']['stages'][number]['name'],
   (run: MountRun) => string
 > = {
+  skyline: () =>
+    'sun hour by hour against the skyline, even sky by its view, horizon band of 6.5 degrees (Perez et al. 1986)',
   rows: ({ geometry }) =>
     geometry.kind === 'dual-axis'
       ? 'shadows of a square field of masts; plain geometry, diffuse by assumption'

@@ -3,16 +3,24 @@ import {
   type Delivered,
   deliver,
   type HeatLoss,
+  lightThrough,
   OPEN_RACK,
   onRoof,
   type PlaneViews,
   planeViews,
 } from '../energy/index.ts';
 import type { StudyMount } from '../inputs/index.ts';
-import { isTracker, type Pointing, pointMount, type ResolvedGeometry, resolveBest } from '../mounts/index.ts';
-import { type SkyModel, sinDeg } from '../shared/index.ts';
+import {
+  isTracker,
+  type Pointing,
+  pointMount,
+  type ResolvedGeometry,
+  resolveAngles,
+} from '../mounts/index.ts';
+import { type SkyModel, sinDeg, yearlySum } from '../shared/index.ts';
 import { powerLawFactor } from '../wind/index.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
+import type { MountSurvey } from './site-survey.ts';
 
 /** One mount with all that was worked out for it before money. */
 export interface MountRun {
@@ -24,6 +32,9 @@ export interface MountRun {
   readonly stuck: PlaneViews | null;
   readonly chain: ChainSpec;
   readonly arrayHeightM: number;
+  readonly survey: MountSurvey | null;
+  /** Share of the open light that the skyline takes at the worst point of the array. */
+  readonly shadingAtWorst: number;
   readonly delivered: Readonly<Record<SkyModel, Delivered>>;
 }
 
@@ -65,21 +76,38 @@ const runMount = (
   pointing: Pointing,
   setting: Setting,
 ): MountRun => {
-  const views = planeViews(setting.sun, pointing);
+  const views = planeViews(setting.sun, pointing, setting.shade);
   const stuck = isTracker(geometry) ? setting.flat : null;
   const arrayHeightM = arrayHeight(mount, geometry, setting.study.site.roofHeightM);
   const chain = chainOf(setting, mount, arrayHeightM);
   const delivered = {} as Record<SkyModel, Delivered>;
   for (const model of ALL_MODELS) delivered[model] = deliver(setting.skies[model], views, chain, stuck);
   const gcr = 'rows' in geometry ? (geometry.rows?.gcr ?? null) : null;
-  return { mount, geometry, gcr, views, stuck, chain, arrayHeightM, delivered };
+  const survey = setting.survey.mounts.get(mount.id) ?? null;
+  const shadingAtWorst = worstShading(setting, views, pointing);
+  return { mount, geometry, gcr, views, stuck, chain, arrayHeightM, survey, shadingAtWorst, delivered };
 };
+
+const worstShading = (
+  { sun, sky, worstShade, shade }: Setting,
+  views: PlaneViews,
+  pointing: Pointing,
+): number => {
+  if (!worstShade) return 0;
+  const atWorst = worstShade === shade ? views : planeViews(sun, pointing, worstShade);
+  return shadingOf(yearlySum(lightThrough(sky, views.open)), yearlySum(lightThrough(sky, atWorst.skyline)));
+};
+
+/** Share of the open light that does not come past the skyline. */
+export const shadingOf = (open: number, pastSkyline: number): number =>
+  open > 0 ? Math.max(0, 1 - pastSkyline / open) : 0;
 
 /** Points every mount at the sun and follows its light to delivered energy, under every sky model. */
 export const runMounts = (setting: Setting): MountRun[] => {
   let pointing: Pointing | null = null;
   return setting.study.mounts.map((mount) => {
-    const geometry = resolveBest(mount.geometry, setting.map.best);
+    const surveyed = setting.survey.mounts.get(mount.id)?.azimuthDeg ?? null;
+    const geometry = resolveAngles(mount.geometry, setting.map.best, surveyed);
     pointing = pointMount(setting.sun, geometry, pointing);
     return runMount(mount, geometry, pointing, setting);
   });

@@ -113,21 +113,20 @@ const inverterLine = (c: Counted): NotCounted[] => {
   ];
 };
 
-const skylineLine = (c: Counted): NotCounted => ({
-  what: 'skyline',
-  effect: `no shade of hills, trees or buildings is counted; all light from a sun lower than 10 degrees is ${each(
-    c,
-    (run) => {
-      let [low, all] = [0, 0];
-      for (let h = 0; h < c.sky.direct.length; h++) {
-        const light = c.sky.direct[h] * run.views.rows.beam[h];
-        all += light;
-        if (c.sun.cosZenith[h] < LOW_SUN) low += light;
-      }
-      return low / (all || 1);
-    },
-  )} of the beam`,
-});
+const skylineLine = (c: Counted): NotCounted[] => {
+  if (c.shade) return [];
+  const lowSun = (run: MountRun): number => {
+    let [low, all] = [0, 0];
+    for (let h = 0; h < c.sky.direct.length; h++) {
+      const light = c.sky.direct[h] * run.views.rows.beam[h];
+      all += light;
+      if (c.sun.cosZenith[h] < LOW_SUN) low += light;
+    }
+    return all > 0 ? low / all : 0;
+  };
+  const effect = `no shade of hills, trees or buildings is counted; the share of the beam that comes from a sun lower than 10 degrees is ${each(c, lowSun)}`;
+  return [{ what: 'site.skyline', effect }];
+};
 
 const snowLine = (c: Counted): NotCounted[] => {
   const air = c.year.temperatureC;
@@ -236,6 +235,6 @@ export const notCounted = (c: Counted): NotCounted[] => [
   ...lossLines(c),
   ...heatLine(c),
   ...moneyLines(c),
-  skylineLine(c),
+  ...skylineLine(c),
   ...snowLine(c),
 ];

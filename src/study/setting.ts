@@ -1,4 +1,4 @@
-import { type PlaneViews, planeViews } from '../energy/index.ts';
+import { type PlaneViews, planeViews, type SkylineShade, skylineShade } from '../energy/index.ts';
 import type { Study } from '../inputs/index.ts';
 import { pointFixed } from '../mounts/index.ts';
 import { type ArraySummary, type HourlyYear, type SkyModel, TrackworthError } from '../shared/index.ts';
@@ -13,6 +13,7 @@ import type { SunHours } from '../sun/index.ts';
 import type { RawYear } from '../weather/index.ts';
 import { arrayOf } from './array.ts';
 import { type ReadyYear, readyYear } from './ready-year.ts';
+import type { SiteSurvey } from './site-survey.ts';
 
 /** The four skies of a study; every mount is worked out under each. */
 export type Skies = Readonly<Record<SkyModel, SkyHours>>;
@@ -29,6 +30,11 @@ export interface Setting {
   readonly sky: SkyHours;
   readonly map: OrientationMap;
   readonly array: ArraySummary;
+  readonly survey: SiteSurvey;
+  /** What the skyline takes, all points of the array together; null: open. */
+  readonly shade: SkylineShade | null;
+  /** The same at the worst point alone; the very same object where there is one point. */
+  readonly worstShade: SkylineShade | null;
   /** A level plane: where a dead tracker lies. Level rows neither shade nor mask each other, so it serves them all. */
   readonly flat: PlaneViews;
 }
@@ -49,12 +55,28 @@ const albedoOf = (study: Study, year: HourlyYear): number | Float64Array => {
 };
 
 /** weather → sun → sky: the study's clock applied, gaps closed, every model asked, the best fixed plane found. */
-export const settingOf = (study: Study, raw: RawYear): Setting => {
+export const settingOf = (study: Study, raw: RawYear, survey: SiteSurvey): Setting => {
   const ready = readyYear(raw, study.weather);
   const { year, sun } = ready;
   const skies = skiesOverHours(sun, year, albedoOf(study, year), ALL_MODELS);
   const sky = skies[study.sky.model];
   const map = orientationMap(sun, sky, year.place.latitudeDeg);
-  const flat = planeViews(sun, pointFixed(sun, 0, 180, null));
-  return { study, ready, year, sun, skies, sky, map, array: arrayOf(study.array), flat };
+  const shade = survey.skyline && skylineShade(sun, survey.skyline.profiles);
+  const several = survey.skyline && survey.skyline.profiles.length > 1;
+  const worstShade = survey.skyline && several ? skylineShade(sun, [survey.skyline.worst]) : shade;
+  const flat = planeViews(sun, pointFixed(sun, 0, 180, null), shade);
+  return {
+    study,
+    ready,
+    year,
+    sun,
+    skies,
+    sky,
+    map,
+    array: arrayOf(study.array),
+    survey,
+    shade,
+    worstShade,
+    flat,
+  };
 };

@@ -1,4 +1,4 @@
-import { deliver, type PlaneViews, planeViews } from '../energy/index.ts';
+import { deliver, type PlaneViews, planeViews, type SkylineShade } from '../energy/index.ts';
 import { type Pointing, pointFixed } from '../mounts/index.ts';
 import { type Comparison, MONTH_DAYS, MONTH_NAMES } from '../shared/index.ts';
 import type { SkyHours } from '../sky/index.ts';
@@ -19,18 +19,20 @@ const peak = (before: number, middle: number, after: number): { shift: number; v
  * tracker in its worst month. Energy is worked out at tilts of 0, 10 .. 90 degrees and a parabola drawn between, which
  * is within 0.2 % of working out the peak itself (test/study/tilted-for-month.test.ts).
  * @param azimuthDeg the way the planes face
+ * @param shade the skyline, which stands before these planes as before all others
  */
 export const tiltedForMonth = (
   sun: SunHours,
   sky: SkyHours,
   reference: Pick<MountRun, 'chain' | 'gcr'>,
   azimuthDeg: number,
+  shade: SkylineShade | null = null,
 ): Comparison['tilted_for_month'] => {
   const chain = { ...reference.chain, drive: null };
   let [pointing, views]: [Pointing | null, PlaneViews | null] = [null, null];
   const byTilt = Array.from({ length: 90 / STEP_DEG + 1 }, (_, i) => {
     pointing = pointFixed(sun, i * STEP_DEG, azimuthDeg, reference.gcr, pointing);
-    views = planeViews(sun, pointing, views);
+    views = planeViews(sun, pointing, shade, views);
     return deliver(sky, views, chain).energyMonthlyKwhPerKw;
   });
   return MONTH_NAMES.map((month, m) => {

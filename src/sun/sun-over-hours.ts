@@ -1,4 +1,4 @@
-import { cosDeg, DEG, HOURS, type Place, sinDeg } from '../shared/index.ts';
+import { atan2Deg, cosDeg, DEG, HOURS, type Place, sinDeg, wrap360 } from '../shared/index.ts';
 import { daySuns, parabolaAt } from './day-sun.ts';
 import { alongPieces, HOUR_DEG, sunlitPieces } from './sunlit-pieces.ts';
 
@@ -85,3 +85,7 @@ export const sunOverHours = (
     extraterrestrialWm2,
   };
 };
+
+/** True azimuth of the sun in one sample, 0..360. */
+export const sunAzimuthDeg = (sun: SunHours, sample: number): number =>
+  wrap360(atan2Deg(sun.east[sample], sun.north[sample]));

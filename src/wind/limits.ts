@@ -43,7 +43,7 @@ export const checkLimits = (
   const valueM = roof ? edge.aboveRoofM : edge.aboveGroundM;
   const limitM = (roof ? limits?.roofProjectionM : limits?.heightM) ?? null;
   const notChecked = (why: string): LimitResult[] => [
-    { name, status: 'not_checked', detail: `not checked: ${why}`, excess_m: null },
+    { name, bound: 'most', status: 'not_checked', detail: `not checked: ${why}`, excess_m: null },
   ];
   if (limitM === null) {
     return notChecked(`the study gives no wind.limits.${roof ? 'roof_projection' : 'height'}`);
@@ -55,6 +55,12 @@ export const checkLimits = (
   }
   const status = statusOf(valueM - limitM, readingErrorM);
   return [
-    { name, status, detail: detailOf(status, valueM, limitM, readingErrorM), excess_m: valueM - limitM },
+    {
+      name,
+      bound: 'most',
+      status,
+      detail: detailOf(status, valueM, limitM, readingErrorM),
+      excess_m: valueM - limitM,
+    },
   ];
 };

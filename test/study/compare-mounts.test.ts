@@ -46,7 +46,7 @@ describe('the sums of every mount close', () => {
     const blanks = c.not_counted.map((n) => n.what);
     for (const what of [
       'array.inverter', 'losses.dirt', 'losses.module_spread', 'losses.cables', 'losses.conversion',
-      'mounts.t.drive.working', 'mounts.t.drive.own_use', 'mounts.a.cost', 'mounts.t.cost', 'skyline',
+      'mounts.t.drive.working', 'mounts.t.drive.own_use', 'mounts.a.cost', 'mounts.t.cost', 'site.skyline',
     ]) expect(blanks).toContain(what); // biome-ignore format: one list
     for (const { what, effect } of c.not_counted)
       if (!what.endsWith('.cost')) expect(effect, what).toMatch(/\d/);
