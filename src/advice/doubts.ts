@@ -63,7 +63,7 @@ export const doubtsOf = (input: AdviceInput, reference: AdviceMount): string[] =
   ...(input.inverterGiven
     ? []
     : [
-        'No inverter is given, so its ceiling was not counted, which flatters trackers: they reach it more often.',
+        'No inverter is given, so its ceiling was not counted, which usually flatters trackers: they reach it more often.',
       ]),
   ...aboutRows(input.mounts, reference),
   ...input.mounts.flatMap(aboutMount),

@@ -9,28 +9,44 @@ import type { DualAxis, FixedTilt, MountGeometry, RoofPlane, SingleAxis } from '
 export type ResolvedGeometry = SingleAxis | DualAxis | ResolvedPlane<RoofPlane> | ResolvedPlane<FixedTilt>;
 type ResolvedPlane<G extends RoofPlane | FixedTilt> = G & { tiltDeg: number; azimuthDeg: number };
 
+/** What `best` stands for: both angles free, or one of them with the other given. */
+export interface BestAngles {
+  readonly tiltDeg: number;
+  readonly azimuthDeg: number;
+  readonly tiltFacing: (azimuthDeg: number) => number;
+  readonly azimuthAtTilt: (tiltDeg: number) => number;
+}
+
 /**
- * Puts the optimum of the orientation map where a study says `best`, and the azimuth that its bearing came to where it
- * says `surveyed`. A given tilt keeps the map's azimuth and the reverse.
+ * Puts the optimum where a study says `best`, and the azimuth that its bearing came to where it says `surveyed`. Where one
+ * angle is given, the other is the best that goes with it.
  */
 export const resolveAngles = (
   geometry: MountGeometry,
-  best: { readonly tiltDeg: number; readonly azimuthDeg: number },
+  best: BestAngles,
   surveyedAzimuthDeg: number | null,
 ): ResolvedGeometry => {
   if (geometry.kind === 'single-axis' || geometry.kind === 'dual-axis') return geometry;
-  if (geometry.azimuthDeg === 'surveyed' && surveyedAzimuthDeg === null)
+  const given = geometry.azimuthDeg === 'surveyed' ? surveyedAzimuthDeg : geometry.azimuthDeg;
+  if (given === null)
     throw new Error(
       'A mount with a bearing needs the survey of its site (surveySite) before it can be compared.',
     );
-  const tiltDeg = geometry.tiltDeg === 'best' ? best.tiltDeg : geometry.tiltDeg;
-  const azimuthDeg =
-    geometry.azimuthDeg === 'best'
-      ? best.azimuthDeg
-      : geometry.azimuthDeg === 'surveyed'
-        ? (surveyedAzimuthDeg as number)
-        : geometry.azimuthDeg;
-  return { ...geometry, tiltDeg, azimuthDeg } as ResolvedGeometry;
+  const { tiltDeg } = geometry;
+  const angles = bothAngles(tiltDeg, given, best);
+  return { ...geometry, ...angles } as ResolvedGeometry;
+};
+
+const bothAngles = (
+  tiltDeg: number | 'best',
+  azimuthDeg: number | 'best',
+  best: BestAngles,
+): { tiltDeg: number; azimuthDeg: number } => {
+  if (tiltDeg === 'best')
+    return azimuthDeg === 'best'
+      ? { tiltDeg: best.tiltDeg, azimuthDeg: best.azimuthDeg }
+      : { tiltDeg: best.tiltFacing(azimuthDeg), azimuthDeg };
+  return { tiltDeg, azimuthDeg: azimuthDeg === 'best' ? best.azimuthAtTilt(tiltDeg) : azimuthDeg };
 };
 
 /** Where a mount points in every sample of the sun; `used` as for {@link emptyPointing}. */

@@ -160,6 +160,23 @@ export const irradiationOfPlanes = (
 export const planeIrradiation = (sun: SunHours, sky: SkyHours, tiltDeg: number, azimuthDeg: number): number =>
   irradiationOfPlanes(sun, sky)(tiltDeg, azimuthDeg);
 
+/** The tilt (0..90, to 0.1 degrees) at which a plane that faces one way receives most in the year. */
+export const bestTiltFacing = (sun: SunHours, sky: SkyHours, azimuthDeg: number): number => {
+  const at = irradiationOfPlanes(sun, sky);
+  return tenth(goldenMaximum((tilt) => at(tilt, azimuthDeg), 0, 90, 0.05));
+};
+
+/** The azimuth (to 0.1 degrees) at which a plane of one tilt receives most in the year. */
+export const bestAzimuthAtTilt = (sun: SunHours, sky: SkyHours, tiltDeg: number): number => {
+  const at = irradiationOfPlanes(sun, sky);
+  let best = 0;
+  for (let azimuth = 10; azimuth < 360; azimuth += 10)
+    if (at(tiltDeg, azimuth) > at(tiltDeg, best)) best = azimuth;
+  return wrap360(tenth(goldenMaximum((azimuth) => at(tiltDeg, azimuth), best - 10, best + 10, 0.05)));
+};
+
+const tenth = (deg: number): number => Math.round(deg * 10) / 10;
+
 /** Climbs from the best grid point by turns in tilt and azimuth, to 0.05 degrees. */
 const refine = (
   at: (tiltDeg: number, azimuthDeg: number) => number,
@@ -205,8 +222,8 @@ export const orientationMap = (
   const at = (tilt: number, azimuth: number) => beamOn(vectors, tilt, azimuth) + diffuseOn(diffuse, tilt);
   const fine = refine(at, bestTilt, azimuthsDeg[bestAzimuth], azimuthStepDeg);
   const flat = fine.tilt < 0.5;
-  const tiltDeg = flat ? 0 : Math.round(fine.tilt * 10) / 10;
-  const azimuthDeg = flat ? (latitudeDeg >= 0 ? 180 : 0) : wrap360(Math.round(fine.azimuth * 10) / 10);
+  const tiltDeg = flat ? 0 : tenth(fine.tilt);
+  const azimuthDeg = flat ? (latitudeDeg >= 0 ? 180 : 0) : wrap360(tenth(fine.azimuth));
   return {
     tiltsDeg,
     azimuthsDeg,

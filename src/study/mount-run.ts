@@ -11,6 +11,7 @@ import {
 } from '../energy/index.ts';
 import type { StudyMount } from '../inputs/index.ts';
 import {
+  type BestAngles,
   isTracker,
   type Pointing,
   pointMount,
@@ -18,6 +19,7 @@ import {
   resolveAngles,
 } from '../mounts/index.ts';
 import { type SkyModel, sinDeg, yearlySum } from '../shared/index.ts';
+import { bestAzimuthAtTilt, bestTiltFacing } from '../sky/index.ts';
 import { powerLawFactor } from '../wind/index.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
 import type { MountSurvey } from './site-survey.ts';
@@ -104,10 +106,16 @@ export const shadingOf = (open: number, pastSkyline: number): number =>
 
 /** Points every mount at the sun and follows its light to delivered energy, under every sky model. */
 export const runMounts = (setting: Setting): MountRun[] => {
+  const { sun, sky, map } = setting;
+  const best: BestAngles = {
+    ...map.best,
+    tiltFacing: (azimuthDeg) => bestTiltFacing(sun, sky, azimuthDeg),
+    azimuthAtTilt: (tiltDeg) => bestAzimuthAtTilt(sun, sky, tiltDeg),
+  };
   let pointing: Pointing | null = null;
   return setting.study.mounts.map((mount) => {
     const surveyed = setting.survey.mounts.get(mount.id)?.azimuthDeg ?? null;
-    const geometry = resolveAngles(mount.geometry, setting.map.best, surveyed);
+    const geometry = resolveAngles(mount.geometry, best, surveyed);
     pointing = pointMount(setting.sun, geometry, pointing);
     return runMount(mount, geometry, pointing, setting);
   });

@@ -108,7 +108,7 @@ const inverterLine = (c: Counted): NotCounted[] => {
   return [
     {
       what: 'array.inverter',
-      effect: `its ceiling is not counted, which flatters trackers; at ${DC_PER_AC_EXAMPLE} DC per AC it would take ${each(c, share)}`,
+      effect: `its ceiling is not counted, which usually flatters trackers; at ${DC_PER_AC_EXAMPLE} DC per AC it would take ${each(c, share)}`,
     },
   ];
 };

@@ -103,7 +103,7 @@ test('what flatters trackers or is unknown stands among the doubts', () => {
   });
   const doubts = advise(input).doubts.join('\n');
   for (const part of [
-    'ceiling was not counted, which flatters trackers',
+    'ceiling was not counted, which usually flatters trackers',
     'split from global light',
     'uses the isotropic sky',
     'lone mast',

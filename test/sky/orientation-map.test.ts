@@ -2,6 +2,8 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { HOURS, type SkyModel, yearlySum } from '../../src/shared/index.ts';
 import {
+  bestAzimuthAtTilt,
+  bestTiltFacing,
   COS_85,
   orientationMap,
   planeIrradiation,
@@ -199,4 +201,19 @@ test('hours without sun carry no light into the sky, and an hour without diffuse
 test('an albedo for every hour gives what one number gives where all are alike', () => {
   const column = skyOverHours(north.sun, north.radiation, new Float64Array(HOURS).fill(0.2), 'perez');
   expect(column.ground).toEqual(sky.ground);
+});
+
+test('with one angle given, the other is the best that goes with it', () => {
+  for (const azimuth of [90, 150, 240]) {
+    const tilt = bestTiltFacing(north.sun, sky, azimuth);
+    const own = planeIrradiation(north.sun, sky, tilt, azimuth);
+    for (let t = 0; t <= 90; t++)
+      expect(planeIrradiation(north.sun, sky, t, azimuth)).toBeLessThan(own * (1 + 1e-6));
+  }
+  for (const tilt of [10, 40, 80]) {
+    const azimuth = bestAzimuthAtTilt(north.sun, sky, tilt);
+    const own = planeIrradiation(north.sun, sky, tilt, azimuth);
+    for (let a = 0; a < 360; a += 3)
+      expect(planeIrradiation(north.sun, sky, tilt, a)).toBeLessThan(own * (1 + 1e-6));
+  }
 });
