@@ -1,7 +1,7 @@
 import { breakEven, costOfEnergy, mountCost } from '../cost/index.ts';
 import { lightBySource } from '../energy/index.ts';
 import type { Study } from '../inputs/index.ts';
-import { isTracker } from '../mounts/index.ts';
+import { isTracker, type MountGeometry } from '../mounts/index.ts';
 import {
   type ArraySummary,
   MONTH_DAYS,
@@ -127,9 +127,6 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
   });
   const even = tracker && run !== reference ? breakEven(costed(run), costed(reference), study.finance) : null;
   const referenceCapital = mountCost(reference.mount.cost, array.dc_kw).capitalPerKw;
-  const best =
-    mount.geometry.kind === 'fixed-tilt' &&
-    (mount.geometry.tiltDeg === 'best' || mount.geometry.azimuthDeg === 'best');
   const orientation = orientationOf(run, setting);
   const screened = screenWind(edgeGeometry(run, study), study.wind);
   const weakest = delivered.stages.reduce((a, b) => (b.efficiency < a.efficiency ? b : a));
@@ -139,7 +136,7 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
     label: mount.label,
     tilt_deg: 'tiltDeg' in geometry ? geometry.tiltDeg : null,
     azimuth_deg: 'azimuthDeg' in geometry ? geometry.azimuthDeg : null,
-    tilt_basis: tracker ? null : best ? 'best: unshaded optimum of the orientation map' : 'given',
+    tilt_basis: tiltBasis(mount.geometry),
     ...orientation,
     gcr: run.gcr,
     rows: rowsInWords(run),
@@ -181,6 +178,17 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
     wind: screened.wind,
     limits: [...screened.limits, ...limitsOfProgramme(orientation, setting)],
   };
+};
+
+/** Whose angles a fixed plane has; null for trackers. */
+const tiltBasis = (asked: MountGeometry): string | null => {
+  if (asked.kind === 'single-axis' || asked.kind === 'dual-axis') return null;
+  const [tilt, azimuth] = [asked.tiltDeg === 'best', asked.azimuthDeg === 'best'];
+  const optimum = 'best: unshaded optimum of the orientation map';
+  if (tilt && azimuth) return optimum;
+  if (tilt) return `${optimum} for the azimuth given`;
+  if (azimuth) return `${optimum} for the tilt given`;
+  return asked.azimuthDeg === 'surveyed' ? 'read on site' : 'given';
 };
 
 /** Where each stage's figure comes from. */
