@@ -22,3 +22,11 @@ export const wrapped = (text: string, columns: number, indent: number): string =
   }
   return [...lines, line].join(`\n${' '.repeat(indent)}`);
 };
+
+/** Screens are at most this wide; what a line says begins behind its name. */
+const COLUMNS = 100;
+export const INDENT = 16;
+
+/** A named line of a screen, broken below its own beginning. */
+export const named = (name: string, text: string): string =>
+  name.padEnd(INDENT) + wrapped(text, COLUMNS, INDENT);

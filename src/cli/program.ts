@@ -1,5 +1,7 @@
 import { Command, CommanderError, Option } from 'commander';
+import { addBearing } from './bearing-command.ts';
 import type { CompareOptions } from './compare.ts';
+import { examples } from './help.ts';
 import type { Io } from './io.ts';
 import { folderName, numberBetween } from './options.ts';
 import { version } from './package-files.ts';
@@ -7,8 +9,6 @@ import { reportTrouble } from './trouble.ts';
 import type { WeatherOptions } from './weather.ts';
 
 const WRONG_USAGE = 2;
-
-const examples = (...lines: string[]): string => `Examples:\n${lines.map((line) => `  ${line}\n`).join('')}`;
 
 const EXIT_CODES = `
 Exit codes: 0 done, 1 a fault of trackworth, 2 wrong usage, 3 an input file is wrong, 4 output could not be written.`;
@@ -127,6 +127,7 @@ const programFor = (io: Io): Command => {
   addCompare(program, io);
   addStart(program, io);
   addWeather(program, io);
+  addBearing(program, io);
   addSchema(program, io);
   return program;
 };

@@ -1,9 +1,7 @@
 import { type Finding, type HourLabel, MONTH_NAMES, type Severity } from '../shared/index.ts';
-import { printable, shellWord, wrapped } from './plain.ts';
+import { placeWords } from './figures.ts';
+import { INDENT, named, printable, shellWord } from './plain.ts';
 import type { WeatherFacts } from './weather-facts.ts';
-
-const COLUMNS = 100;
-const INDENT = 16;
 
 const LABEL_WORDS: Record<HourLabel, string> = {
   end: 'Times mark the end of each hour.',
@@ -12,17 +10,10 @@ const LABEL_WORDS: Record<HourLabel, string> = {
 };
 const SEVERITY_WORDS: Record<Severity, string> = { block: 'BLOCKS', warning: 'Warning', note: 'Note' };
 
-const named = (name: string, text: string): string => name.padEnd(INDENT) + wrapped(text, COLUMNS, INDENT);
-
 const whole = (x: number): string => x.toFixed(0).replace(/\B(?=(\d{3})+$)/g, ' ');
-const place = ({ site: s }: WeatherFacts): string => {
-  const side = (deg: number, plus: string, minus: string) =>
-    `${Math.abs(deg).toFixed(2)} ${deg < 0 ? minus : plus}`;
-  return (
-    `${side(s.latitude_deg, 'N', 'S')} ${side(s.longitude_deg, 'E', 'W')}, ${whole(s.elevation_m)} m above sea ` +
-    `level, standard time UTC${s.utc_offset_h < 0 ? '' : '+'}${s.utc_offset_h} h`
-  );
-};
+const place = ({ site: s }: WeatherFacts): string =>
+  `${placeWords(s.latitude_deg, s.longitude_deg)}, ${whole(s.elevation_m)} m above sea ` +
+  `level, standard time UTC${s.utc_offset_h < 0 ? '' : '+'}${s.utc_offset_h} h`;
 
 /** One line that says how far to trust the year. */
 const verdict = (findings: readonly Finding[]): string => {

@@ -66,7 +66,7 @@ export const weather = async (typed: string, options: WeatherOptions, io: Io): P
   ]);
   const facts = weatherFacts(readyYear(raw, clock));
   if (options.json) {
-    const { factsJson } = await import('./weather-json.ts');
+    const { factsJson } = await import('./facts-json.ts');
     return io.out(factsJson(facts));
   }
   const { weatherScreen } = await import('./weather-screen.ts');

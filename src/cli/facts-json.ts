@@ -1,8 +1,7 @@
 import { toSignificant } from '../shared/index.ts';
-import type { WeatherFacts } from './weather-facts.ts';
 
 const DIGITS = 10;
 
 /** JSON with numbers at 10 significant digits, as in the results file. */
-export const factsJson = (facts: WeatherFacts): string =>
+export const factsJson = (facts: object): string =>
   `${JSON.stringify(facts, (_, value) => (typeof value === 'number' ? toSignificant(value, DIGITS) + 0 : value), 2)}\n`;

@@ -1,0 +1,3 @@
+/** What the help of a command opens with. */
+export const examples = (...lines: string[]): string =>
+  `Examples:\n${lines.map((line) => `  ${line}\n`).join('')}`;
