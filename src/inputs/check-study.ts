@@ -43,19 +43,23 @@ const kindFault = (raw: unknown, path: Path, known: readonly MountKind[]): Fault
 /** Checks raw values against the schemas: the frame of the study, then each mount by its own kind. */
 export const checkStudy = (raw: unknown, convert: Convert): CheckedStudy => {
   const frameSchema = studyFrame(convert, (...path) => rawAt(raw, path) !== undefined);
-  const kinds = mountSchemas(convert);
+  const list = rawAt(raw, ['mounts']);
+  const entries: readonly unknown[] = Array.isArray(list) ? list : [];
+  const kinds = mountSchemas(convert, (...path) => entries.some((mount) => rawAt(mount, path) !== undefined));
   const known = Object.keys(kinds) as MountKind[];
-  const homes = once((): Home[] => [
-    ...known.map((kind) => ({ schema: kinds[kind](), name: `${kind} mounts` })),
-    { schema: studyFrame(convert, everything), name: '' },
-  ]);
+  const homes = once((): Home[] => {
+    const whole = mountSchemas(convert, everything);
+    return [
+      ...known.map((kind) => ({ schema: whole[kind](), name: `${kind} mounts` })),
+      { schema: studyFrame(convert, everything), name: '' },
+    ];
+  });
   const frame = z.safeParse(frameSchema, raw);
   const faults = frame.success
     ? []
     : faultsOf(frame.error.issues, { raw, schema: frameSchema, root: [], homes });
   const mounts: RawMount[] = [];
-  const list = rawAt(raw, ['mounts']);
-  for (const [i, mount] of (Array.isArray(list) ? list : []).entries()) {
+  for (const [i, mount] of entries.entries()) {
     const path = ['mounts', i];
     if (!isGroup(mount)) {
       faults.push(groupFault(path, mount, ['id', 'kind']));

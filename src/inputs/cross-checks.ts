@@ -2,6 +2,7 @@ import type { Fault } from './fault.ts';
 import { isGroup, rawAt } from './fault.ts';
 import { nearest } from './nearest.ts';
 import { shown } from './shown.ts';
+import { surveyFaults } from './survey-checks.ts';
 import type { Path, Position } from './text/place.ts';
 
 const idOf = (mount: unknown): string | null => {
@@ -139,5 +140,6 @@ export const crossFaults = (raw: unknown, at: (path: Path) => Position): Fault[]
     ...lateRenewals(raw, mounts),
     ...reference(raw, mounts),
     ...lightColumns(raw),
+    ...surveyFaults(raw, mounts),
   ];
 };

@@ -11,6 +11,11 @@ type Issue = z.core.$ZodIssue;
 const EXAMPLES: Record<string, string> = {
   weather: 'weather: { file: year.epw }',
   mounts: 'mounts: [ { id: ground, kind: fixed-tilt } ]',
+  skyline: 'skyline: { points: [ [90, 12], [105, 9] ] }',
+  points: 'points: [ [90, 12], [105, 9] ]',
+  obstacles: 'obstacles: [ { height: 6 m, distance: 20 m, from: 100, to: 130 } ]',
+  bearing: 'bearing: { magnetic: 150, dated: 2026-05-01 }',
+  slope: 'slope: { reading: 3:12 }',
 };
 const A_MOUNT = '{ id: ground, kind: fixed-tilt }';
 
@@ -40,11 +45,16 @@ const listFault = (path: Path, raw: unknown): Fault => {
   };
 };
 
+/** `found` is set where a group was refused for more than the one value at its path. */
+interface FieldWords extends Pick<Fault, 'code' | 'expected' | 'fix'> {
+  readonly found?: string;
+}
+
 /** A field's own refusal, as src/inputs/fields/field.ts packs it. */
 const fieldFault = (issue: z.core.$ZodIssueCustom, path: Path, raw: unknown): Fault => {
-  const { code, expected, fix } = issue.params as { code: string; expected: string; fix: string };
+  const { code, expected, fix, ...own } = issue.params as FieldWords;
   const advice = code === 'missing-key' ? `Add for example ${String(path.at(-1))}: ${fix}.` : fix;
-  return { code, path, expected, found: found(raw), fix: advice };
+  return { code, path, expected, found: own.found ?? found(raw), fix: advice };
 };
 
 /** What was checked: the raw value, its schema, where it stands in the study, and where keys may live. */
@@ -71,8 +81,10 @@ export const faultsOf = (issues: readonly Issue[], checked: Checked): Fault[] =>
       });
     }
     if (issue.code === 'invalid_union') {
-      // A column is a name or a group: judge it by the form that was tried.
-      const tried = issue.errors[isGroup(here) ? 1 : 0];
+      // A column is a name or a group, a skyline a list or a group: judge it by the form that was tried.
+      const [other, group] = issue.errors;
+      const noList = other.some((below) => below.path.length === 0 && below.code === 'invalid_type');
+      const tried = isGroup(here) || noList ? group : other;
       const inner = tried.map((below) => ({ ...below, path: [...issue.path, ...below.path] }));
       return faultsOf(inner, checked);
     }

@@ -12,16 +12,18 @@ interface Definition {
 /** The inside of a zod schema. */
 export const partsOf = (schema: Schema): Definition => schema._zod.def as unknown as Definition;
 
-/** The schema below `schema` at `path`: into groups, lists, optional values and the group form of a choice. */
+/** The schema below `schema` at `path`: into groups, lists, optional values and the group or list form of a choice. */
 const schemaAt = (schema: Schema | undefined, path: readonly PropertyKey[]): Schema | undefined => {
   if (!schema) return undefined;
   const { type, innerType, element, options, shape } = partsOf(schema);
   if (type === 'optional') return schemaAt(innerType, path);
-  if (type === 'union')
+  if (type === 'union') {
+    const form = typeof path[0] === 'number' ? 'array' : 'object';
     return schemaAt(
-      options?.find((o) => partsOf(o).type === 'object'),
+      options?.find((o) => partsOf(o).type === form),
       path,
     );
+  }
   if (path.length === 0) return schema;
   const [step, ...rest] = path;
   if (type === 'array') return schemaAt(element, rest);

@@ -31,6 +31,11 @@ weather:
 #  elevation: 1600 m  # above sea level
 #  utc_offset: -7     # hours that local standard time is ahead of UTC; 5.75 or "+05:45" do too
 #  roof_height: 5 m   # of the roof above ground. Blank: wind on the roof is not checked
+#  skyline: { points: [ [90, 12], [105, 9], [120, 0], [240, 0], [255, 15] ] } # bearing and elevation angle, degrees
+# A skyline may also be a file, or obstacles; bearings are true, or magnetic with their date or declination. Where the
+# array is large, give a list of several, each with its name. Blank: the horizon is open. For example
+# skyline: { name: north-east corner, file: skyline.csv, bearings: magnetic, dated: 2026-05-01 }
+# skyline: { obstacles: [ { height: 6 m, distance: 20 m, from: 100, to: 130 } ] }
 
 # Light on a tilted plane.
 #sky:
@@ -52,6 +57,12 @@ array:
 #   roof-plane   parallel to a roof         fixed-tilt   a rack on the ground that does not move
 #   single-axis  a tracker about one axis   dual-axis    a tracker that faces the sun
 # Azimuth is clockwise from true north: 180 faces south. Tilt is in degrees, or a slope (3:12), or a grade (25 %).
+# A roof or a rack read on site has bearing in place of azimuth, and slope in place of tilt, each with its error:
+# bearing: { magnetic: 150, taken: facing, dated: 2026-05-01, error: 5 } # declination is applied here, once
+# bearing: { true: 76, back: 257, taken: along_ridge, downslope: right } # or looking_at; back is from the far end
+# bearing: { magnetic: 150, declination: 16 E } # from a map of the time, in place of the date
+# slope: { reading: 3:12, error: 2 } # or 25 %, or 14 deg
+# slope: { rise: 4 ft, run: 12 ft, rise_error: 1 in, run_error: 1 in } # the run is level
 # gcr is the slant length of a row over the distance from row to row. Give it for all ground mounts or for none:
 # where only one side has rows, no clear lead is claimed. Every price here is made up: put your quotes in.
 mounts:
@@ -111,7 +122,8 @@ mounts:
 
 # What the choice is to serve: lowest cost per kWh, most kWh per kW, or best worst month.
 # Blank: cost per kWh where costs are given, else kWh per kW.
-#advice: { objective: lowest cost per kWh }
+# A programme's least TOF or TSRF of fixed planes is held against each of them. Blank: not checked.
+#advice: { objective: lowest cost per kWh, minimum_tof: 75 %, minimum_tsrf: 75 % }
 
 # The fixed mount that gains are counted from. Blank: the ground rack with the most kWh per kW.
 #compare_with: ground

@@ -5,7 +5,8 @@ import type { TableColumn, TableColumns } from '../weather/index.ts';
 import type { WindSpec } from '../wind/index.ts';
 import type { RawMount } from './schema/mounts.ts';
 import type { RawStudy } from './schema/study.ts';
-import type { Study, StudyMount } from './study-file.ts';
+import type { MountReadings, Study, StudyMount } from './study-file.ts';
+import { readingsOf, skylinesOf } from './to-readings.ts';
 
 /** Common practice, no source: grass and bare soil lie between 0.15 and 0.25. */
 const DEFAULT_ALBEDO = 0.2;
@@ -18,15 +19,25 @@ const rowsOf = (
   otherwise: RowSpec['lowSun'],
 ): RowSpec | null => (rows ? { gcr: rows.gcr, lowSun: rows.low_sun ?? otherwise } : null);
 
-const geometryOf = (mount: RawMount): MountGeometry => {
+/** A roof has each angle outright or as read on site: checked before. */
+const known = (angleDeg: number | undefined): number => {
+  if (angleDeg === undefined) throw new RangeError('a roof without its angles');
+  return angleDeg;
+};
+
+const geometryOf = (mount: RawMount, readings: MountReadings | null): MountGeometry => {
   switch (mount.kind) {
     case 'roof-plane':
-      return { kind: mount.kind, tiltDeg: mount.tilt, azimuthDeg: mount.azimuth };
+      return {
+        kind: mount.kind,
+        tiltDeg: readings?.slope ? readings.slope.tiltDeg : known(mount.tilt),
+        azimuthDeg: readings?.bearing ? 'surveyed' : known(mount.azimuth),
+      };
     case 'fixed-tilt':
       return {
         kind: mount.kind,
-        tiltDeg: mount.tilt ?? 'best',
-        azimuthDeg: mount.azimuth ?? 'best',
+        tiltDeg: readings?.slope ? readings.slope.tiltDeg : (mount.tilt ?? 'best'),
+        azimuthDeg: readings?.bearing ? 'surveyed' : (mount.azimuth ?? 'best'),
         rows: rowsOf(mount.rows, 'shade'),
       };
     case 'single-axis':
@@ -70,14 +81,18 @@ const costOf = ({ cost }: RawMount): CostSpec | null => {
   };
 };
 
-const mountOf = (mount: RawMount): StudyMount => ({
-  id: mount.id,
-  label: mount.label ?? mount.id,
-  geometry: geometryOf(mount),
-  lengths: lengthsOf(mount),
-  drive: driveOf(mount),
-  cost: costOf(mount),
-});
+const mountOf = (mount: RawMount): StudyMount => {
+  const readings = 'bearing' in mount || 'slope' in mount ? readingsOf(mount) : null;
+  return {
+    id: mount.id,
+    label: mount.label ?? mount.id,
+    geometry: geometryOf(mount, readings),
+    readings,
+    lengths: lengthsOf(mount),
+    drive: driveOf(mount),
+    cost: costOf(mount),
+  };
+};
 
 const arrayOf = (array: RawStudy['array']): ArraySpec => ({
   given: array !== undefined,
@@ -138,6 +153,7 @@ export const toStudy = (frame: RawStudy, mounts: readonly RawMount[], file: stri
     elevationM: frame.site?.elevation ?? null,
     utcOffsetH: frame.site?.utc_offset ?? null,
     roofHeightM: frame.site?.roof_height ?? null,
+    skyline: skylinesOf(frame.site?.skyline),
   },
   weather: {
     file: frame.weather.file,
@@ -163,5 +179,9 @@ export const toStudy = (frame: RawStudy, mounts: readonly RawMount[], file: stri
   },
   wind: windOf(frame.wind),
   objective: frame.advice?.objective ?? null,
+  programme: {
+    minimumTof: frame.advice?.minimum_tof ?? null,
+    minimumTsrf: frame.advice?.minimum_tsrf ?? null,
+  },
   compareWith: frame.compare_with ?? null,
 });

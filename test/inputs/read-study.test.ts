@@ -6,13 +6,21 @@ import { FILE, LEAST } from './problems-of.ts';
 const read = (text: string, file = FILE) => readStudy({ file, text });
 
 const BLANK: Omit<Study, 'title' | 'weather' | 'mounts'> = {
-  site: { latitudeDeg: null, longitudeDeg: null, elevationM: null, utcOffsetH: null, roofHeightM: null },
+  site: {
+    latitudeDeg: null,
+    longitudeDeg: null,
+    elevationM: null,
+    utcOffsetH: null,
+    roofHeightM: null,
+    skyline: null,
+  },
   sky: { model: 'perez', albedo: 0.2 },
   array: { given: false, dcKw: 1, inverterKw: null, module: null },
   losses: { dirt: null, moduleSpread: null, cables: null, conversion: null },
   finance: { realRate: null, years: null, ageing: null, currency: null },
   wind: null,
   objective: null,
+  programme: { minimumTof: null, minimumTsrf: null },
   compareWith: null,
 };
 const WEATHER = { table: null, label: null, addMinutes: 0, acceptClock: false };
@@ -42,6 +50,7 @@ mounts:
           azimuthDeg: 'best',
           rows: { gcr: 0.45, lowSun: 'shade' },
         },
+        readings: null,
         lengths: NO_LENGTHS,
         drive: null,
         cost: null,
@@ -56,6 +65,7 @@ mounts:
           swingDeg: 60,
           rows: { gcr: 0.4, lowSun: 'backtrack' },
         },
+        readings: null,
         lengths: NO_LENGTHS,
         drive: BLANK_DRIVE,
         cost: null,
@@ -96,6 +106,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
       elevationM: 1634,
       utcOffsetH: -7,
       roofHeightM: null,
+      skyline: null,
     },
     weather: { ...WEATHER, file: 'boulder.tmy2.gz' },
     sky: { model: 'perez', albedo: 0.2 },
@@ -110,6 +121,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         id: 'roof',
         label: 'roof',
         geometry: { kind: 'roof-plane', tiltDeg: expect.closeTo(roofTiltDeg, 12) as number, azimuthDeg: 166 },
+        readings: null,
         lengths: { ...NO_LENGTHS, airBehindM: 0.1 },
         drive: null,
         cost: { ...NO_COST, capitalPerKw: 1700, upkeepPerKw: 15 },
@@ -123,6 +135,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
           azimuthDeg: 'best',
           rows: { gcr: 0.45, lowSun: 'shade' },
         },
+        readings: null,
         lengths: NO_LENGTHS,
         drive: null,
         cost: { ...NO_COST, capital: 21000 },
@@ -137,6 +150,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
           swingDeg: 60,
           rows: { gcr: 0.4, lowSun: 'backtrack' },
         },
+        readings: null,
         lengths: NO_LENGTHS,
         drive: { working: 0.97, stuck: 'flat', ownUse: 0.003 },
         cost: { ...NO_COST, upkeep: 0, renewals: [{ what: 'drive', year: 12, cost: 800 }] },
@@ -145,6 +159,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         id: 'mast',
         label: 'mast',
         geometry: { kind: 'dual-axis', rows: null },
+        readings: null,
         lengths: NO_LENGTHS,
         drive: BLANK_DRIVE,
         cost: null,
@@ -158,6 +173,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
       limits: { roofProjectionM: 0.254, heightM: 3 },
     },
     objective: 'lowest cost per kWh',
+    programme: { minimumTof: null, minimumTsrf: null },
     compareWith: 'ground',
   } satisfies Study);
 });

@@ -1,9 +1,10 @@
-import { DEG } from '../../shared/index.ts';
+import { tiltOfSlopeText } from '../../survey/index.ts';
 import type { Convert } from '../convert.ts';
 import { field, orWord } from './field.ts';
 import type { QuantityRule } from './quantity.ts';
 import { numberOrText, quantity, quantityWords, readQuantity } from './quantity.ts';
 import { plainText } from './range.ts';
+import { asWritten, bySurvey } from './readings.ts';
 
 type AngleRule = Omit<QuantityRule, 'description'>;
 
@@ -28,17 +29,10 @@ const SWING: AngleRule = {
   example: '60 deg',
 };
 
-const GRADE = /^(\d+(?:\.\d*)?|\.\d+) ?%$/;
-const SLOPE = /^(\d+(?:\.\d*)?|\.\d+) ?(?:[:/]|in) ?(\d+(?:\.\d*)?|\.\d+)$/;
-
-/** Degrees from horizontal; `25 %` is a grade (rise over run) and `3:12` a slope, both by the inverse tangent. */
+/** Degrees from horizontal; `25 %` is a grade (rise over run) and `3:12` a slope. */
 const readTilt = (raw: unknown, convert: Convert): number => {
-  const text = typeof raw === 'string' ? plainText(raw) : '';
-  const grade = GRADE.exec(text);
-  if (grade) return Math.atan(Number(grade[1]) / 100) / DEG;
-  const slope = SLOPE.exec(text);
-  if (slope && Number(slope[2]) > 0) return Math.atan2(Number(slope[1]), Number(slope[2])) / DEG;
-  return readQuantity(raw, TILT, convert);
+  const slope = typeof raw === 'string' ? bySurvey(() => tiltOfSlopeText(plainText(raw))) : null;
+  return slope ?? readQuantity(raw, TILT, convert);
 };
 
 const wordsOf = (rule: AngleRule, description: string) => ({
@@ -57,6 +51,24 @@ const wordsOrBest = (rule: AngleRule, description: string) => ({
 
 export const tilt = (convert: Convert, description: string) =>
   field(wordsOf(TILT, description), (raw) => readTilt(raw, convert));
+
+export interface WrittenTilt {
+  readonly tiltDeg: number;
+  /** Read as a grade in per cent. */
+  readonly grade: boolean;
+  readonly written: string;
+}
+
+/** A tilt that keeps the user's own words, for the list of readings. */
+export const writtenTilt = (convert: Convert, description: string) =>
+  field(
+    { ...wordsOf(TILT, description), example: '3:12' },
+    (raw): WrittenTilt => ({
+      tiltDeg: readTilt(raw, convert),
+      grade: typeof raw === 'string' && raw.includes('%'),
+      written: asWritten(raw, 'deg'),
+    }),
+  );
 
 export const azimuth = (convert: Convert, description: string) =>
   field(wordsOf(AZIMUTH, description), (raw) => readQuantity(raw, AZIMUTH, convert));

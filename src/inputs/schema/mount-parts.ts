@@ -5,6 +5,9 @@ import { quantity } from '../fields/quantity.ts';
 import { share } from '../fields/share.ts';
 import { choice, text } from '../fields/words.ts';
 import { cost } from './money.ts';
+import type { Present } from './present.ts';
+import { wherePresent } from './present.ts';
+import { bearingGroup, slopeGroup } from './readings.ts';
 
 /** An id names files and JSON fields, so it stays plain. */
 const ID = /^[a-z0-9][a-z0-9_-]*$/;
@@ -81,7 +84,7 @@ const drive = () =>
     .register(hints, { description: 'The drive of a tracker.' });
 
 /** The parts that the kinds of mount share, each made once: making schemas is what reading a study costs most. */
-export const mountParts = (convert: Convert) => ({
+export const mountParts = (convert: Convert, has: Present) => ({
   common: {
     id: idField('an id', 'Short name, unique in the study: lower-case letters, digits, - and _.'),
     label: z.optional(
@@ -93,6 +96,10 @@ export const mountParts = (convert: Convert) => ({
       }),
     ),
     cost: z.optional(cost()),
+  },
+  onSite: {
+    bearing: wherePresent(has('bearing'), () => z.optional(bearingGroup(convert))),
+    slope: wherePresent(has('slope'), () => z.optional(slopeGroup(convert))),
   },
   rows: z.optional(rows()),
   trackerRows: z.optional(trackerRows()),

@@ -3,25 +3,34 @@ import type { Convert } from '../convert.ts';
 import { azimuth, azimuthOrBest, swing, tilt, tiltOrBest } from '../fields/angles.ts';
 import { hints } from '../fields/field.ts';
 import { mountParts } from './mount-parts.ts';
+import type { Present } from './present.ts';
 import { once } from './present.ts';
 
 type Parts = ReturnType<typeof mountParts>;
 
-const roofPlane = (convert: Convert, { common, airBehind }: Parts) =>
+/** For editors; what reads the study has its own words for it. */
+const eitherOf = (...keys: string[]) => ({ anyOf: keys.map((key) => ({ required: [key] })) });
+
+const roofPlane = (convert: Convert, { common, onSite, airBehind }: Parts) =>
   z
     .strictObject({
       kind: z.literal('roof-plane'),
       ...common,
-      tilt: tilt(
-        convert,
-        'Of the roof: degrees from horizontal, a slope such as 3:12, a grade such as 25 %.',
+      tilt: z.optional(
+        tilt(convert, 'Of the roof: degrees from horizontal, a slope such as 3:12, a grade such as 25 %.'),
       ),
-      azimuth: azimuth(convert, 'The way the roof faces: degrees clockwise from true north, 180 is south.'),
+      azimuth: z.optional(
+        azimuth(convert, 'The way the roof faces: degrees clockwise from true north, 180 is south.'),
+      ),
+      ...onSite,
       air_behind: airBehind,
     })
-    .register(hints, { description: 'Modules parallel to a roof.' });
+    .register(hints, {
+      description: 'Modules parallel to a roof.',
+      allOf: [eitherOf('tilt', 'slope'), eitherOf('azimuth', 'bearing')],
+    });
 
-const fixedTilt = (convert: Convert, { common, rows, slant, lowerEdge }: Parts) =>
+const fixedTilt = (convert: Convert, { common, onSite, rows, slant, lowerEdge }: Parts) =>
   z
     .strictObject({
       kind: z.literal('fixed-tilt'),
@@ -35,6 +44,7 @@ const fixedTilt = (convert: Convert, { common, rows, slant, lowerEdge }: Parts) 
       azimuth: z.optional(
         azimuthOrBest(convert, 'Degrees clockwise from true north, 180 is south, or best (also if blank).'),
       ),
+      ...onSite,
       rows,
       slant,
       lower_edge: lowerEdge,
@@ -68,9 +78,9 @@ const dualAxis = ({ common, rows, slant, axisHeight, drive }: Parts) =>
     .strictObject({ kind: z.literal('dual-axis'), ...common, rows, slant, axis_height: axisHeight, drive })
     .register(hints, { description: 'A tracker that faces the sun. Without rows it is a lone mast.' });
 
-/** One schema for each kind of mount, made at its first use; its keys are the kind's own. */
-export const mountSchemas = (convert: Convert) => {
-  const parts = once(() => mountParts(convert));
+/** One schema for each kind of mount, made at its first use; its keys are the kind's own. `has` looks into all mounts. */
+export const mountSchemas = (convert: Convert, has: Present) => {
+  const parts = once(() => mountParts(convert, has));
   return {
     'roof-plane': once(() => roofPlane(convert, parts())),
     'fixed-tilt': once(() => fixedTilt(convert, parts())),

@@ -5,8 +5,11 @@ import { coordinate, utcOffset } from '../fields/place.ts';
 import { quantity } from '../fields/quantity.ts';
 import { shareOr } from '../fields/share.ts';
 import { choice } from '../fields/words.ts';
+import type { Present } from './present.ts';
+import { wherePresent } from './present.ts';
+import { skyline } from './skyline.ts';
 
-export const site = (convert: Convert) =>
+export const site = (convert: Convert, has: Present) =>
   z
     .strictObject({
       latitude: z.optional(
@@ -39,6 +42,7 @@ export const site = (convert: Convert) =>
             'Of the roof above ground; a bare number is metres. Blank: wind on the roof is not checked.',
         }),
       ),
+      skyline: wherePresent(has('site', 'skyline'), () => z.optional(skyline(convert))),
     })
     .register(hints, { description: 'Where the array stands. Blank: as the weather file says.' });
 

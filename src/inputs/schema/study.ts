@@ -1,6 +1,7 @@
 import * as z from 'zod/mini';
 import type { Convert } from '../convert.ts';
 import { hints } from '../fields/field.ts';
+import { share } from '../fields/share.ts';
 import { choice, text } from '../fields/words.ts';
 import { array, losses } from './array.ts';
 import { finance } from './money.ts';
@@ -15,6 +16,16 @@ import { wind } from './wind.ts';
 // A study is read once: compiling validators, which zod does for speed in long runs, would cost more than it saves.
 z.config({ jitless: true });
 
+const least = (what: string, description: string) =>
+  z.optional(
+    share({
+      what,
+      range: { above: 0, max: 1 },
+      example: '75 %',
+      description: `${description} Blank: not checked.`,
+    }),
+  );
+
 const advice = () =>
   z
     .strictObject({
@@ -23,6 +34,14 @@ const advice = () =>
           ['lowest cost per kWh', 'most kWh per kW', 'best worst month'],
           'What the choice is to serve. Blank: cost per kWh where costs are given, else kWh per kW.',
         ),
+      ),
+      minimum_tof: least(
+        'a tilt-and-orientation factor',
+        'Least TOF that a programme asks of fixed planes: their light over that of the best plane.',
+      ),
+      minimum_tsrf: least(
+        'a total solar resource fraction',
+        'Least TSRF that a programme asks of fixed planes: TOF times what the skyline leaves.',
       ),
     })
     .register(hints, { description: 'What the recommendation is to serve.' });
@@ -46,7 +65,7 @@ const studyWith = <M extends z.ZodMiniType>(convert: Convert, oneMount: M, has: 
         }),
       ),
       weather: weather(convert, has),
-      site: wherePresent(has('site'), () => z.optional(site(convert))),
+      site: wherePresent(has('site'), () => z.optional(site(convert, has))),
       sky: wherePresent(has('sky'), () => z.optional(sky())),
       array: wherePresent(has('array'), () => z.optional(array(convert))),
       mounts: z
@@ -71,7 +90,7 @@ export const studyFrame = (convert: Convert, has: Present) => studyWith(convert,
 
 /** The whole study in one schema, for editors. */
 export const wholeStudy = (convert: Convert) => {
-  const kinds = mountSchemas(convert);
+  const kinds = mountSchemas(convert, everything);
   const mount = z.discriminatedUnion('kind', [
     kinds['roof-plane'](),
     kinds['fixed-tilt'](),
