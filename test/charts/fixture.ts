@@ -39,12 +39,17 @@ export interface InventedMount {
   swingOfYear?: number;
   clipped?: number;
   tof?: number | null;
+  tiltError?: number;
+  azimuthError?: number;
+  band?: { low: number; high: number };
+  shading?: number;
 }
 
 export const inventedMount = (m: InventedMount): MountResult => {
   const light = m.light ?? 2000;
   const tracker = m.kind === 'single-axis' || m.kind === 'dual-axis';
   const list: [string, number][] = [
+    ...(m.shading === undefined ? [] : ([['skyline', 1 - m.shading]] as [string, number][])),
     ['rows', 0.97],
     ['incidence', 0.975],
     ['heat', m.kind === 'roof-plane' ? 0.91 : 0.94],
@@ -73,6 +78,16 @@ export const inventedMount = (m: InventedMount): MountResult => {
     azimuth_deg: tracker ? null : (m.azimuth ?? 186),
     tilt_basis: tracker ? null : 'given',
     orientation_factor: tracker ? null : (m.tof ?? light / PEAK),
+    tilt_error_deg: m.tiltError ?? null,
+    azimuth_error_deg: m.azimuthError ?? null,
+    orientation_factor_band: m.band ?? null,
+    shading_fraction: m.shading ?? 0,
+    shading_monthly: season.map((s) => (light > 0 ? (m.shading ?? 0) / s : null)),
+    shading_worst_point: (m.shading ?? 0) * 1.5,
+    tsrf: tracker ? null : (m.tof ?? light / PEAK) * (1 - (m.shading ?? 0)),
+    tsrf_worst_point: tracker ? null : (m.tof ?? light / PEAK) * (1 - (m.shading ?? 0) * 1.5),
+    readings: [],
+    survey_steps: [],
     gcr: null,
     rows: 'no rows',
     irradiation_kwh_m2: light,
@@ -158,6 +173,8 @@ export const inventedComparison = (
     array: { given: true, dc_kw: 12.04, ac_kw: 10, modules: 28, module_w: 430, module_area_m2: 55.7 },
     best_orientation: { tilt_deg: best.tilt, azimuth_deg: best.azimuth, irradiation_kwh_m2: PEAK },
     orientation_map: orientationMap(best.tilt, best.azimuth),
+    skyline: null,
+    declinations: [],
     mounts: results,
     tilted_for_month: MONTH_NAMES.map((month, i) => ({
       month,

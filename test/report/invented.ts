@@ -63,6 +63,16 @@ export const inventedMount = (m: Invented): MountResult => {
     azimuth_deg: tracker ? null : 186,
     tilt_basis: tracker ? null : 'best: unshaded optimum of the orientation map',
     orientation_factor: tracker ? null : 0.9987654321,
+    tilt_error_deg: null,
+    azimuth_error_deg: null,
+    orientation_factor_band: null,
+    shading_fraction: 0,
+    shading_monthly: MONTH_NAMES.map(() => 0),
+    shading_worst_point: 0,
+    tsrf: tracker ? null : 0.9987654321,
+    tsrf_worst_point: tracker ? null : 0.9987654321,
+    readings: [],
+    survey_steps: [],
     gcr: m.kind === 'dual-axis' ? null : 0.45,
     rows: m.kind === 'dual-axis' ? 'lone mast' : 'rows at GCR 0.45',
     irradiation_kwh_m2: m.irradiation,
@@ -107,6 +117,7 @@ export const inventedMount = (m: Invented): MountResult => {
     limits: [
       {
         name: 'height',
+        bound: 'most',
         status: 'not_checked',
         detail: 'not checked: slant and lower_edge are blank',
         excess_m: null,
@@ -125,11 +136,11 @@ export const invented = (): Comparison => {
     inventedMount({ id: 'mast', kind: 'dual-axis', label: 'Mast', irradiation: 2090.2, stages: { incidence: 0.989, ...drive, rows: 1 }, capitalPerKw: 3400, lcoe: 0.16322 }),
   ]; // biome-ignore format: a mount a line
   mounts[1].limits = [
-    { name: 'roof projection', status: 'kept', detail: 'within: 0.135 of 0.254 m', excess_m: null },
+    { name: 'roof projection', bound: 'most', status: 'kept', detail: 'within: 0.135 of 0.254 m', excess_m: null },
   ];
   mounts[3].limits = [
-    { name: 'height', status: 'broken', detail: 'exceeds 3 m by 0.9 m', excess_m: 0.9 },
-    { name: 'roof projection', status: 'not_checked', detail: 'not checked: not on a roof', excess_m: null },
+    { name: 'height', bound: 'most', status: 'broken', detail: 'exceeds 3 m by 0.9 m', excess_m: 0.9 },
+    { name: 'roof projection', bound: 'most', status: 'not_checked', detail: 'not checked: not on a roof', excess_m: null },
   ];
   return {
     schema: 'trackworth-comparison-1',
@@ -158,6 +169,8 @@ export const invented = (): Comparison => {
     array: { given: true, dc_kw: 12.04, ac_kw: 10, modules: 28, module_w: 430, module_area_m2: 1.9888 },
     best_orientation: { tilt_deg: 34.2, azimuth_deg: 186, irradiation_kwh_m2: 1652.4 },
     orientation_map: { tilts_deg: [0, 45], azimuths_deg: [90, 180], irradiation_kwh_m2: [[1421.5, 1421.5], [1301.2, 1640.3]] },
+    skyline: null,
+    declinations: [],
     mounts,
     tilted_for_month: MONTH_NAMES.map((month, m) => ({
       month,
