@@ -8,7 +8,7 @@ import {
   parseDownslope,
   type Taken,
 } from '../survey/index.ts';
-import { OptionReader } from './option-problems.ts';
+import { missingDate, OptionReader } from './option-problems.ts';
 
 export interface BearingOptions {
   readonly at?: string;
@@ -62,23 +62,15 @@ export const parseLatLon = (text: string): LatLon => {
 /** Without a declination by hand, the model needs to know where and when. */
 const askForModel = (reader: OptionReader, { at, dated, declination }: BearingOptions): void => {
   if (declination !== undefined) return;
-  const byHand = 'or give it by hand: --declination "16 E".';
   if (at === undefined)
     reader.refuse(
       '--at',
       'missing-place',
       'the place of the reading, since declination differs from place to place',
       'none',
-      `Write for example --at 45.6,-121.2, ${byHand}`,
+      'Write for example --at 45.6,-121.2, or give it by hand: --declination "16 E".',
     );
-  if (dated === undefined)
-    reader.refuse(
-      '--dated',
-      'missing-date',
-      'the day of the reading, since declination drifts with the years and the clock is never asked',
-      'none',
-      `Write for example --dated 2026-05-01, ${byHand}`,
-    );
+  if (dated === undefined) reader.problems.push(missingDate);
 };
 
 /** The turning options belong to what was read with a compass. */

@@ -6,7 +6,7 @@ import { type BearingOptions, type BearingRequest, bearingRequest } from './bear
 import { bearingScreen } from './bearing-screen.ts';
 import { factsJson } from './facts-json.ts';
 import type { Io } from './io.ts';
-import { atOption } from './option-problems.ts';
+import { atOption, BY_HAND } from './option-problems.ts';
 
 /** Which option a refusal of the survey is about. */
 const OPTION_OF: Record<string, string> = {
@@ -18,11 +18,9 @@ const OPTION_OF: Record<string, string> = {
   'wrong-downslope': '--downslope',
 };
 
-const WAY_OUT = 'Enter the declination itself, from a map of that year: --declination "16 E" or "16 W".';
-
 const said = (problem: Problem): Problem => ({
   ...atOption(problem, OPTION_OF[problem.code] ?? 'bearing'),
-  ...(problem.code === 'date-outside-model' ? { fix: WAY_OUT } : {}),
+  ...(problem.code === 'date-outside-model' ? { fix: BY_HAND } : {}),
 });
 
 /** What the survey refuses is wrong usage here. */

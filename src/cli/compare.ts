@@ -3,6 +3,7 @@ import { TrackworthError } from '../shared/index.ts';
 import { demoStudyPath, readStudyInputs } from './inputs.ts';
 import type { Io } from './io.ts';
 import { reportFolderName } from './report-name.ts';
+import { surveyOfStudy } from './site-survey.ts';
 
 export interface CompareOptions {
   readonly demo?: boolean;
@@ -30,15 +31,18 @@ export const compare = async (typed: string | undefined, options: CompareOptions
     import('../study.ts'),
     import('../report/index.ts'),
   ]);
+  const { survey, ...skyline } = await surveyOfStudy(inputs, io.cwd);
 
   const folder = options.out ?? (options.json ? undefined : reportFolderName(inputs.study.title));
-  const target = folder === undefined ? null : await checkedFolder(folder, inputs.paths, io);
+  const target =
+    folder === undefined ? null : await checkedFolder(folder, [...inputs.paths, ...skyline.paths], io);
 
-  const comparison = compareMounts(inputs.study, inputs.raw);
+  const comparison = compareMounts(inputs.study, inputs.raw, survey);
   if (target) {
     const { reportContent } = await import('./report-content.ts');
     const { writeReportFolder } = await import('./report-folder.ts');
-    const files = await reportContent(comparison, inputs.checksums, options.charts);
+    const checksums = [...inputs.checksums, ...skyline.checksums];
+    const files = await reportContent(comparison, checksums, options.charts);
     writeReportFolder(target, files);
   }
 

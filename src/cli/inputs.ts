@@ -5,16 +5,25 @@ import type { RawYear } from '../weather/index.ts';
 import { readInputFile, sha256, textOf } from './input-file.ts';
 import { SAMPLE_STUDY, samplePath } from './package-files.ts';
 
+/** A file as the report names it. */
+export interface Checksum {
+  readonly name: string;
+  readonly sha256: string;
+}
+
 /** A study and its weather, read. */
 export interface StudyInputs {
   readonly study: Study;
   readonly raw: RawYear;
+  /** The study as the user typed it, and its text. */
+  readonly typed: string;
+  readonly text: string;
   /** The weather file as the user would type it on a command line. */
   readonly weatherPath: string;
   /** Both files, absolute. */
   readonly paths: readonly string[];
   /** Both files as the report names them. */
-  readonly checksums: readonly { readonly name: string; readonly sha256: string }[];
+  readonly checksums: readonly Checksum[];
 }
 
 const STUDY_NAMES = /\.(ya?ml|json)$/i;
@@ -31,6 +40,16 @@ export const demoStudyPath = (cwd: string): string => {
   const path = samplePath(SAMPLE_STUDY);
   const short = relative(cwd, path);
   return short.startsWith(`..${sep}`) || isAbsolute(short) ? path : short;
+};
+
+/** A file that a study names, relative to itself or absolute, as the user would type it. */
+export const besideStudy = (typed: string, file: string): string =>
+  isAbsolute(file) ? file : join(dirname(typed), file);
+
+/** Where a study names a file, for a message about the file. */
+export const namedInStudy = async (typed: string, text: string, field: string) => {
+  const { placeOfField } = await import('./study-place.ts');
+  return { file: typed, ...placeOfField(text, field), field };
 };
 
 const weatherForStudy = (typed: string): TrackworthError =>
@@ -68,16 +87,13 @@ export const readStudyInputs = async (typed: string, cwd: string): Promise<Study
   const study = await readStudy({ file: typed, text });
 
   const { file, table, label } = study.weather;
-  const weatherPath = isAbsolute(file) ? file : join(dirname(typed), file);
+  const weatherPath = besideStudy(typed, file);
   const weatherBytes = await readInputFile({
     path: resolve(cwd, weatherPath),
     shown: weatherPath,
     what: 'a weather file',
     looksRight: WEATHER_NAMES,
-    namedAt: async () => {
-      const { placeOfWeatherFile } = await import('./study-place.ts');
-      return { file: typed, ...placeOfWeatherFile(text), field: 'weather.file' };
-    },
+    namedAt: () => namedInStudy(typed, text, 'weather.file'),
   });
   const raw = await readWeather({
     source: weatherPath,
@@ -90,6 +106,8 @@ export const readStudyInputs = async (typed: string, cwd: string): Promise<Study
     study,
     // Results name the file as the study does, so that they are the same from whatever folder they were made.
     raw: { ...raw, source: file },
+    typed,
+    text,
     weatherPath,
     paths: [studyPath, resolve(cwd, weatherPath)],
     checksums: [
