@@ -6,6 +6,7 @@ import { irradiationChart } from './irradiation.ts';
 import { lossesChart } from './losses.ts';
 import { monthsChart } from './months.ts';
 import { orientationChart } from './orientation.ts';
+import { skylineChart } from './skyline.ts';
 
 export { type FontFiles, type FontMetrics, prepareFont } from './font.ts';
 export type { Chart, VegaLiteSpec } from './frame.ts';
@@ -20,5 +21,6 @@ export const chartSpecs = (comparison: Comparison): Chart[] => [
   monthsChart(comparison),
   costChart(comparison),
   orientationChart(comparison),
+  ...(comparison.skyline === null ? [] : [skylineChart(comparison, comparison.skyline)]),
   lossesChart(comparison),
 ];

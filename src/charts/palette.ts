@@ -13,6 +13,9 @@ export const LIGHT = { beam: '#E2A336', sky: '#3E6F9E', ground: '#5A4632' } as c
 export const ON_LIGHT = { beam: INK, sky: PAPER, ground: PAPER } as const;
 
 export const BAR = '#3E6F9E';
+/** The sun's path as a line: amber, dark enough for a thin mark. What stands before it. */
+export const SUN_PATH = '#B5770D';
+export const HILL = '#CBD4DB';
 export interface SeriesStyle {
   readonly color: string;
   readonly dash: readonly number[];

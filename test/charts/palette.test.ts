@@ -1,5 +1,15 @@
 import { expect, test } from 'vitest';
-import { BAR, dialColor, INK, LIGHT, MUTED, ON_LIGHT, PAPER, SERIES } from '../../src/charts/palette.ts';
+import {
+  BAR,
+  dialColor,
+  INK,
+  LIGHT,
+  MUTED,
+  ON_LIGHT,
+  PAPER,
+  SERIES,
+  SUN_PATH,
+} from '../../src/charts/palette.ts';
 
 type Rgb = [number, number, number];
 const channels = (hex: string): Rgb =>
@@ -32,7 +42,7 @@ const closest = (colors: string[], see: (c: Rgb) => Rgb) => {
 };
 
 test('marks stand out from paper by 3 to 1, text by 4.5 to 1 (WCAG 2.2, 1.4.11 and 1.4.3)', () => {
-  for (const color of [...SERIES.map((s) => s.color), LIGHT.sky, LIGHT.ground, BAR])
+  for (const color of [...SERIES.map((s) => s.color), LIGHT.sky, LIGHT.ground, BAR, SUN_PATH])
     expect(contrast(color, PAPER), color).toBeGreaterThan(3);
   // Amber is pale by nature: its bars are told by their place and their printed figures, not by their edge.
   expect(contrast(LIGHT.beam, PAPER)).toBeGreaterThan(2);

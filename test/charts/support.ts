@@ -2,6 +2,7 @@ import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { prepareFont } from '../../src/charts/index.ts';
 import { EIGHT, type InventedMount, inventedComparison, USUAL } from './fixture.ts';
+import { SKYLINES } from './skyline-fixture.ts';
 
 const require = createRequire(import.meta.url);
 const file = (name: string) =>
@@ -55,4 +56,5 @@ export const VARIANTS = {
   'gain by cold': coldPlace,
   'no light at all': dark,
   'hostile labels': () => inventedComparison(USUAL.map((m) => ({ ...m, label: HOSTILE + m.id }))),
+  ...SKYLINES,
 } as const;
