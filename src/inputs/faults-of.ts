@@ -22,7 +22,7 @@ const A_MOUNT = '{ id: ground, kind: fixed-tilt }';
 /** Something else where a group of keys should be, or nothing. */
 export const groupFault = (path: Path, raw: unknown, keys: readonly string[]): Fault => {
   const last = path.at(-1);
-  const glued = typeof raw === 'string' ? /^(\w+):(\S.*)$/.exec(raw) : null;
+  const glued = typeof raw === 'string' ? /^([a-z_]\w*):(\S.*)$/i.exec(raw) : null;
   const isMount = typeof last === 'number' && path.length === 2;
   const example = isMount ? A_MOUNT : (EXAMPLES[String(last)] ?? `{ ${keys[0]}: ... }`);
   return {

@@ -110,7 +110,7 @@ const slopeFaults = (slope: Group, path: Path): Fault[] => {
       ? []
       : [
           {
-            code: 'unknown-key',
+            code: 'misplaced-key',
             path,
             key: 'error',
             expected: 'rise_error and run_error beside rise and run',
@@ -146,7 +146,10 @@ const skylineFaults = (skyline: Group, path: Path): Fault[] => [
 ];
 
 const sameNames = (skylines: readonly unknown[]): Fault[] => {
-  const names = skylines.map((one, i) => skylineName(rawAt(one, ['name']), i));
+  const names = skylines.map((one, i) => {
+    const name = rawAt(one, ['name']);
+    return skylineName(typeof name === 'object' || name === undefined ? undefined : String(name).trim(), i);
+  });
   return names.flatMap((name, i): Fault[] =>
     names.indexOf(name) === i
       ? []

@@ -74,8 +74,7 @@ export const obstacleOf = (raw: RawObstacle): Obstacle => ({
 });
 
 /** What a skyline is called where the study gives no name. */
-export const skylineName = (name: unknown, index: number): string =>
-  name === undefined ? `point ${index + 1}` : String(name).trim();
+export const skylineName = (name: string | undefined, index: number): string => name ?? `point ${index + 1}`;
 
 export const skylinesOf = (raw: RawSkyline | RawSkyline[] | undefined): StudySkyline[] | null => {
   if (raw === undefined) return null;

@@ -63,6 +63,8 @@ test('any value under any key is read or refused with places, never a crash', {
   const keys = [
     'title', 'weather', 'site', 'sky', 'array', 'mounts', 'losses', 'finance', 'wind', 'advice', 'compare_with',
     'file', 'table', 'time', 'ghi', 'id', 'kind', 'tilt', 'rows', 'gcr', 'drive', 'working', 'cost', 'renewals', 'year', 'dc', 'heat',
+    'bearing', 'magnetic', 'true', 'back', 'taken', 'downslope', 'dated', 'declination', 'slope', 'reading', 'rise', 'run',
+    'skyline', 'points', 'obstacles', 'bearings', 'error',
   ]; // biome-ignore format: one list
   const { value } = fc.letrec((tie) => ({
     value: fc.oneof(
@@ -82,6 +84,11 @@ test('any value under any key is read or refused with places, never a crash', {
         'single-axis',
         'a',
         '-0.3 %/K',
+        '16 E',
+        'along_ridge',
+        '2026-05-01',
+        150,
+        'magnetic',
       ),
       fc.array(tie('value'), { maxLength: 3 }),
       fc.dictionary(fc.constantFrom(...keys), tie('value'), { maxKeys: 6 }),
@@ -95,6 +102,11 @@ test('any value under any key is read or refused with places, never a crash', {
         mounts: [{ id: 'a', kind: 'single-axis', ...(any as object) }],
         site: any,
       };
+      const roof = { id: 'a', kind: 'roof-plane', bearing: any, slope: any };
+      await expectAnswer(
+        JSON.stringify({ weather: { file: 'a' }, mounts: [roof], site: { skyline: any } }, null, 1),
+      );
+
       await expectAnswer(JSON.stringify(study, null, 1));
     }),
     { numRuns: 100 },

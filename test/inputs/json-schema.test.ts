@@ -1,4 +1,5 @@
 import { beforeAll, describe, expect, test } from 'vitest';
+import { fromJSONSchema } from 'zod';
 import { studyJsonSchema } from '../../src/inputs/index.ts';
 
 type Json = Record<string, unknown>;
@@ -75,11 +76,64 @@ describe('the JSON Schema of a study', () => {
       'dual-axis',
     ]);
     expect(kinds.map((k) => k.required)).toEqual([
-      ['kind', 'id', 'tilt', 'azimuth'],
+      ['kind', 'id'],
       ['kind', 'id'],
       ['kind', 'id'],
       ['kind', 'id'],
     ]);
+  });
+
+  test('asks of a roof each angle outright or as read on site', () => {
+    const [roof] = inside(schema, 'properties', 'mounts', 'items').oneOf as Json[];
+    expect(roof.allOf).toEqual([
+      { anyOf: [{ required: ['tilt'] }, { required: ['slope'] }] },
+      { anyOf: [{ required: ['azimuth'] }, { required: ['bearing'] }] },
+    ]);
+  });
+
+  test('read back as a schema, takes what was read on site, and refuses it where a value is out of range', () => {
+    const reader = fromJSONSchema(schema as Parameters<typeof fromJSONSchema>[0]);
+    const takes = (mount: Json, more: Json = {}) =>
+      reader.safeParse({
+        weather: { file: 'a' },
+        mounts: [{ id: 'a', kind: 'roof-plane', ...mount }],
+        ...more,
+      }).success;
+    const bearing = { magnetic: 150, taken: 'facing', dated: '2026-05-01', error: 5 };
+    const slope = { reading: '3:12', error: 2 };
+    const points = [
+      [90, 12],
+      [120, 8],
+    ];
+    const obstacles = [{ height: '6 m', distance: 20, from: 100, to: 130 }];
+    expect(takes({ bearing, slope })).toBe(true);
+    expect(takes({ bearing: { true: 76, back: 257, taken: 'along_ridge', downslope: 'left' }, slope })).toBe(
+      true,
+    );
+    expect(takes({ bearing: { magnetic: 76, declination: '16 E' }, slope: { rise: '4 ft', run: 12 } })).toBe(
+      true,
+    );
+    expect(takes({ bearing: { ...bearing, magnetic: 400 }, slope })).toBe(false);
+    expect(takes({ bearing: { ...bearing, taken: 'facng' }, slope })).toBe(false);
+    expect(takes({ bearing: { ...bearing, dated: 'May' }, slope })).toBe(false);
+    expect(takes({ bearing: { magnetic: 150, declination: 16 }, slope })).toBe(false);
+    expect(takes({ bearing, slope: { reading: 400 } })).toBe(false);
+    for (const skyline of [
+      { points },
+      { file: 'a.csv', bearings: true },
+      { obstacles, bearings: 'magnetic', declination: '13 W' },
+      [
+        { points, name: 'a' },
+        { file: 'a.csv', name: 'b' },
+      ],
+    ])
+      expect(takes({ tilt: 3, azimuth: 3 }, { site: { skyline } })).toBe(true);
+    for (const skyline of [{ points: [[90]] }, { pints: points }, { obstacles: [{ height: 6 }] }, 5])
+      expect(takes({ tilt: 3, azimuth: 3 }, { site: { skyline } })).toBe(false);
+    expect(takes({ tilt: 3, azimuth: 3 }, { advice: { minimum_tof: '75 %', minimum_tsrf: 0.75 } })).toBe(
+      true,
+    );
+    expect(takes({ tilt: 3, azimuth: 3 }, { advice: { minimum_tof: 75 } })).toBe(false);
   });
 
   test('is plain JSON', () => {

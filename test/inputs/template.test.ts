@@ -28,10 +28,25 @@ describe('the template of a study', () => {
     ]);
     expect(study.mounts.every((m) => m.cost !== null)).toBe(true);
     const { site, losses, finance } = study;
+    expect(study.programme).toEqual({ minimumTof: 0.75, minimumTsrf: 0.75 });
+    expect(site.skyline?.[0].points).toHaveLength(5);
     for (const group of [site, losses, finance, study.array.module!, study.wind!])
       expect(Object.values(group)).not.toContain(null);
     expect(study.objective).toBe('lowest cost per kWh');
     expect(study.compareWith).toBe('ground');
+  });
+
+  test('shows readings that may stand in place of the keys beside them', async () => {
+    const shown = (key: string) =>
+      [...TEXT.matchAll(new RegExp(`^# (${key}: \\{.*\\})(?: #.*)?$`, 'gm'))].map(([, line]) => line);
+    const study = (keys: string, site = '') =>
+      read(`weather: { file: a }\nmounts: [ { id: m, kind: fixed-tilt, ${keys} } ]\nsite: { ${site} }\n`);
+    const [bearings, slopes, skylines] = [shown('bearing'), shown('slope'), shown('skyline')];
+    expect([bearings.length, slopes.length, skylines.length]).toEqual([3, 2, 2]);
+    for (const bearing of bearings) expect((await study(bearing)).mounts[0].readings?.bearing).not.toBeNull();
+    for (const slope of slopes)
+      expect((await study(slope)).mounts[0].readings?.slope?.errorDeg).toBeGreaterThan(0);
+    for (const skyline of skylines) expect((await study('', skyline)).site.skyline).toHaveLength(1);
   });
 
   test('names every key that a study may have', () => {

@@ -101,13 +101,12 @@ export const slopeError = (convert: Convert) =>
     },
     (raw): SlopeError => {
       const grade = typeof raw === 'string' ? GRADE_ERROR.exec(plainText(raw)) : null;
-      const written = asWritten(raw, 'deg');
-      if (grade) return { size: Number(grade[1]), unit: '%', written };
-      return { size: readQuantity(raw, ERROR_RULE, convert), unit: 'deg', written };
+      const size = grade ? Number(grade[1]) : readQuantity(raw, ERROR_RULE, convert);
+      return { size, unit: grade ? '%' : 'deg', written: asWritten(raw, 'deg') };
     },
   );
 
-/** What the user wrote, with the unit that a bare number stands for. */
+/** What the user wrote (a number or text), with the unit that a bare number stands for. */
 export const asWritten = (raw: unknown, unit: string): string => {
   const text = plainText(String(raw));
   return /[^\d.eE+-]/.test(text) ? text : `${text} ${unit}`;

@@ -7,7 +7,7 @@ import { bearing } from '../fields/readings.ts';
 import { text } from '../fields/words.ts';
 import { obstacleOf } from '../to-readings.ts';
 import { northKeys } from './readings.ts';
-import { entryPlace, surveyIssues } from './survey-issues.ts';
+import { entriesOf, surveyIssues } from './survey-issues.ts';
 
 const POINT = 'a bearing and an elevation angle, two numbers of degrees';
 
@@ -30,7 +30,7 @@ const points = () =>
   z
     .array(point())
     .check(({ value, issues }) => {
-      issues.push(...surveyIssues(() => checkedSkyline('', value, 0, entryPlace)));
+      issues.push(...surveyIssues(() => checkedSkyline('', value, 0, entriesOf(value))));
     })
     .register(hints, {
       description: 'Points of the skyline, [bearing, elevation], at least every 15 degrees.',
@@ -51,7 +51,7 @@ const obstacles = (convert: Convert) =>
   z
     .array(obstacle(convert))
     .check(({ value, issues }) => {
-      issues.push(...surveyIssues(() => skylineOfObstacles('', value.map(obstacleOf), 0, entryPlace)));
+      issues.push(...surveyIssues(() => skylineOfObstacles('', value.map(obstacleOf), 0, entriesOf(value))));
     })
     .register(hints, { description: 'What stands before the sky, by its height and distance.' });
 
@@ -78,14 +78,6 @@ const north = () =>
 const one = (convert: Convert) =>
   z
     .strictObject({
-      name: z.optional(
-        text({
-          what: 'a short text',
-          description: 'The point of the array that it was read from. Blank: point 1, point 2 ...',
-          example: 'north-east corner',
-          longest: 60,
-        }),
-      ),
       points: z.optional(points()),
       file: z.optional(
         text({
@@ -97,6 +89,14 @@ const one = (convert: Convert) =>
       obstacles: z.optional(obstacles(convert)),
       bearings: z.optional(north()),
       ...northKeys(),
+      name: z.optional(
+        text({
+          what: 'a short text',
+          description: 'The point of the array that it was read from. Blank: point 1, point 2 ...',
+          example: 'north-east corner',
+          longest: 60,
+        }),
+      ),
     })
     .register(hints, { description: 'A skyline: points, a file or obstacles.' });
 

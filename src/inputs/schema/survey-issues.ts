@@ -18,7 +18,7 @@ export const refuseIn = (path: PropertyKey[], params: Words) => ({
 
 /**
  * What the survey finds wrong with a group or list whose every value is sound. A problem's place is the number of its
- * entry, as `entryPlace` gives it to the survey, or the key that its code stands for.
+ * entry, as `entriesOf` gives it to the survey, or the key that its code stands for.
  */
 export const surveyIssues = (check: () => unknown, keyOfCode: Readonly<Record<string, string>> = {}) => {
   try {
@@ -33,4 +33,6 @@ export const surveyIssues = (check: () => unknown, keyOfCode: Readonly<Record<st
   }
 };
 
-export const entryPlace = (index: number) => ({ field: String(index) });
+/** How the survey is to name the entries of a list; what is wrong with an empty one has the list's own place. */
+export const entriesOf = (list: readonly unknown[]) => (index: number) =>
+  index < list.length ? { field: String(index) } : {};
