@@ -1,5 +1,6 @@
 import type { BearingFacts } from './bearing-facts.ts';
 import { placeWords, trimmed } from './figures.ts';
+import { mindWords } from './mind.ts';
 import { named, printable } from './plain.ts';
 
 /** Where and when, as far as the user told. */
@@ -34,10 +35,6 @@ const headline = (f: BearingFacts): string => {
     : `${line}; the plane faces ${trimmed(f.azimuth_deg)} true, ${f.faces}`;
 };
 
-const MIND =
-  'Iron, cables and running inverters turn the needle. A phone may show true north already: check. The declination is ' +
-  'applied in this sum; do not apply it again.';
-
 /** The sum, its declination and what to mind: at most 100 columns. */
 export const bearingScreen = (f: BearingFacts): string => {
   const lines = [
@@ -55,7 +52,7 @@ export const bearingScreen = (f: BearingFacts): string => {
           ),
         ]),
     ...f.findings.map(({ text, fix }) => named('Warning', printable(fix ? `${text} ${fix}` : text))),
-    named('Mind', MIND),
+    named('Mind', mindWords(f.cautions)),
   ];
   return `${lines.join('\n')}\n`;
 };

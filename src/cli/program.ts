@@ -3,10 +3,12 @@ import { addBearing } from './bearing-command.ts';
 import type { CompareOptions } from './compare.ts';
 import { examples } from './help.ts';
 import type { Io } from './io.ts';
-import { folderName, numberBetween } from './options.ts';
+import { folderName } from './options.ts';
 import { version } from './package-files.ts';
+import { addPlane } from './plane-command.ts';
 import { reportTrouble } from './trouble.ts';
 import type { WeatherOptions } from './weather.ts';
+import { addWeatherOverrides } from './weather-options.ts';
 
 const WRONG_USAGE = 2;
 
@@ -61,26 +63,13 @@ const addStart = (program: Command, io: Io): void => {
 };
 
 const addWeather = (program: Command, io: Io): void => {
-  const over = 'overrules the file';
-  program
-    .command('weather')
+  addWeatherOverrides(program.command('weather'))
     .summary('what a weather file holds and how far to trust it')
     .description(
       'Reads a weather file (EPW, TMY2 or TMY3, gzipped or not) and prints its sums and all findings: clock, closure, gaps, impossible values. A study file (.yaml, .yml, .json) stands for the weather it names, with its place, columns and clock: so a plain table is read.',
     )
     .argument('<file>', 'weather file, or a study that names one')
     .option('--json', 'print the findings as JSON')
-    .addOption(
-      new Option('--label <end|start|middle>', `what the printed times mark of their hour; ${over}`).choices([
-        'end',
-        'start',
-        'middle',
-      ]),
-    )
-    .option('--latitude <deg>', `north positive; ${over}`, numberBetween(-90, 90, 'degrees, north positive'))
-    .option('--longitude <deg>', `east positive; ${over}`, numberBetween(-180, 180, 'degrees, east positive'))
-    .option('--elevation <m>', `above sea level; ${over}`, numberBetween(-500, 9000, 'metres'))
-    .option('--utc-offset <hours>', `of standard time, 5.75 or -7; ${over}`, numberBetween(-12, 14, 'hours'))
     .addHelpText(
       'beforeAll',
       examples(
@@ -127,6 +116,7 @@ const programFor = (io: Io): Command => {
   addCompare(program, io);
   addStart(program, io);
   addWeather(program, io);
+  addPlane(program, io);
   addBearing(program, io);
   addSchema(program, io);
   return program;

@@ -1,17 +1,13 @@
 import { resolve } from 'node:path';
 import type { Study } from '../inputs/index.ts';
-import { type HourLabel, type Place, TrackworthError } from '../shared/index.ts';
+import { type Place, TrackworthError } from '../shared/index.ts';
 import type { RawYear } from '../weather/index.ts';
 import { isStudyName, readStudyInputs, readWeatherFile } from './inputs.ts';
 import type { Io } from './io.ts';
+import type { WeatherOverrides } from './weather-options.ts';
 
-export interface WeatherOptions {
+export interface WeatherOptions extends WeatherOverrides {
   readonly json?: boolean;
-  readonly label?: HourLabel;
-  readonly latitude?: number;
-  readonly longitude?: number;
-  readonly elevation?: number;
-  readonly utcOffset?: number;
 }
 
 interface Read {
