@@ -4,48 +4,111 @@
  *
  *     const study = await readStudy({ file: 'site.yaml', text });
  *     const year = await readWeather({ source: study.weather.file, bytes, place: study.site });
- *     const comparison = compareMounts(study, year);
+ *     const survey = await surveySite(study, year.place, readText); // where the study has readings or a skyline
+ *     const comparison = compareMounts(study, year, survey);
  *
  * The single stages serve whoever wants one of them alone.
  */
 
-// Advice: which mount, how sure, and why
-export { type AdviceInput, type AdviceMount, advise } from './advice/index.ts';
-// Charts: results → Vega-Lite specifications → SVG
-export { type Chart, chartSpecs, prepareFont, renderSvg, type VegaLiteSpec } from './charts/index.ts';
-// Cost: cost per kWh, what a tracker may cost, and the fixed array in its place
-export {
-  type BreakEven,
-  breakEven,
-  type CostOfEnergy,
-  type CostSpec,
-  capitalRecoveryFactor,
-  costOfEnergy,
-  type FinanceSpec,
-  lcoePerKwh,
-  presentCost,
-  presentEnergy,
-  type Renewal,
-  sameEnergy,
-} from './cost/index.ts';
-// Energy: from light on the plane to delivered kWh, stage after stage
-export {
-  type ArraySpec,
-  type ChainSpec,
-  type Delivered,
-  type DriveSpec,
-  deliver,
-  type LossSpec,
-  lightThrough,
-  type ModuleSpec,
-  moduleTemperatureC,
-  planeViews,
-  type Stage,
-} from './energy/index.ts';
 // Inputs: the study file
-export { readStudy, type Study, type StudyMount, studyJsonSchema, studyTemplate } from './inputs/index.ts';
+
+export {
+  type MountReadings,
+  readStudy,
+  type Study,
+  type StudyBearing,
+  type StudyMount,
+  type StudySkyline,
+  studyJsonSchema,
+  studyTemplate,
+} from './inputs/index.ts';
+
+// Weather: a file's bytes → a year of hours, and how far to trust it
+
+export {
+  fillByClosure,
+  type RawYear,
+  readWeather,
+  type TableColumn,
+  type TableColumns,
+  type WeatherFindings,
+  type WeatherInput,
+  weatherFindings,
+} from './weather/index.ts';
+
+// Survey: compass, clinometer and skyline → angles of a plane, each with its error
+
+export {
+  type BearingReading,
+  type CalendarDate,
+  checkedSkyline,
+  type Declination,
+  type DeclinationRequest,
+  declinationAt,
+  facingOf,
+  magneticFromTrue,
+  meanReading,
+  type Obstacle,
+  type PlaneAzimuth,
+  parseBearing,
+  parseCalendarDate,
+  parseDeclination,
+  parseSlope,
+  planeAzimuth,
+  readSkylineFile,
+  type Skyline,
+  type SkylinePoint,
+  type SkylineSurvey,
+  type Slope,
+  skylineOfObstacles,
+  slopeOfRiseRun,
+  slopeWords,
+  sumToMagnetic,
+  sumToTrue,
+  surveySkylines,
+  type Taken,
+  trueFromMagnetic,
+} from './survey/index.ts';
+
+// Sun: where it stands, when it rises, and every hour of a year
+
+export {
+  type RiseSet,
+  relativeAirMass,
+  type SunHours,
+  type SunPosition,
+  sunOverHours,
+  sunPosition,
+  sunriseSunset,
+} from './sun/index.ts';
+
+// Sky: light on tilted planes, and the fixed plane that collects most
+
+export {
+  type OrientationMap,
+  orientationMap,
+  planeIrradiation,
+  type SkyHours,
+  skyOverHours,
+  splitGlobal,
+} from './sky/index.ts';
+
+// Wind: screening only; structure belongs to the local code and a licensed engineer
+
+export {
+  type EdgeGeometry,
+  type Exposure,
+  exposureCoefficient,
+  type HighestEdge,
+  highestEdge,
+  type VelocityPressure,
+  velocityPressure,
+  type WindSpec,
+  windAtHeight,
+} from './wind/index.ts';
 
 // Mounts: where a plane points in every hour, and the shade of its rows
+
 export {
   backtrackTurn,
   type DualAxis,
@@ -60,7 +123,52 @@ export {
   rowShade,
   type SingleAxis,
 } from './mounts/index.ts';
+
+// Energy: from light on the plane to delivered kWh, stage after stage
+
+export {
+  type ArraySpec,
+  type ChainSpec,
+  type Delivered,
+  type DriveSpec,
+  deliver,
+  type LossSpec,
+  lightThrough,
+  type ModuleSpec,
+  moduleTemperatureC,
+  planeViews,
+  type SkylineShade,
+  type Stage,
+  skylineShade,
+} from './energy/index.ts';
+
+// Cost: cost per kWh, what a tracker may cost, and the fixed array in its place
+
+export {
+  type BreakEven,
+  breakEven,
+  type CostOfEnergy,
+  type CostSpec,
+  capitalRecoveryFactor,
+  costOfEnergy,
+  type FinanceSpec,
+  lcoePerKwh,
+  presentCost,
+  presentEnergy,
+  type Renewal,
+  sameEnergy,
+} from './cost/index.ts';
+
+// Advice: which mount, how sure, and why
+
+export { type AdviceInput, type AdviceMount, advise } from './advice/index.ts';
+
+// Charts: results → Vega-Lite specifications → SVG
+
+export { type Chart, chartSpecs, prepareFont, renderSvg, type VegaLiteSpec } from './charts/index.ts';
+
 // Report: results → text
+
 export {
   memoMarkdown,
   monthlyCsv,
@@ -71,7 +179,9 @@ export {
   type ScreenOptions,
   screenTable,
 } from './report/index.ts';
+
 // Study: the whole calculation, and its result
+
 export type {
   AdviceResult,
   Comparison,
@@ -82,7 +192,19 @@ export type {
   Objective,
   SkyModel,
 } from './shared/index.ts';
+export {
+  compareMounts,
+  NO_SURVEY,
+  type PlaneFacts,
+  planeFacts,
+  type ReadyYear,
+  readyYear,
+  type SiteSurvey,
+  surveySite,
+} from './study.ts';
+
 // What all stages share
+
 export {
   describeProblem,
   type Finding,
@@ -95,46 +217,3 @@ export {
   TrackworthError,
   type WeatherFormat,
 } from './shared/index.ts';
-// Sky: light on tilted planes, and the fixed plane that collects most
-export {
-  type OrientationMap,
-  orientationMap,
-  planeIrradiation,
-  type SkyHours,
-  skyOverHours,
-  splitGlobal,
-} from './sky/index.ts';
-export { compareMounts, type ReadyYear, readyYear } from './study.ts';
-// Sun: where it stands, when it rises, and every hour of a year
-export {
-  type RiseSet,
-  relativeAirMass,
-  type SunHours,
-  type SunPosition,
-  sunOverHours,
-  sunPosition,
-  sunriseSunset,
-} from './sun/index.ts';
-// Weather: a file's bytes → a year of hours, and how far to trust it
-export {
-  fillByClosure,
-  type RawYear,
-  readWeather,
-  type TableColumn,
-  type TableColumns,
-  type WeatherFindings,
-  type WeatherInput,
-  weatherFindings,
-} from './weather/index.ts';
-// Wind: screening only; structure belongs to the local code and a licensed engineer
-export {
-  type EdgeGeometry,
-  type Exposure,
-  exposureCoefficient,
-  type HighestEdge,
-  highestEdge,
-  type VelocityPressure,
-  velocityPressure,
-  type WindSpec,
-  windAtHeight,
-} from './wind/index.ts';
