@@ -1,6 +1,7 @@
 import type { Comparison, MountResult } from '../shared/index.ts';
 import { wrap360 } from '../shared/index.ts';
 import { DIAL_RADIUS, dialAxis, dialMap, type LossContour, mapLayers } from './dial-map.ts';
+import { boxLayers, boxRoom, errorBox } from './error-box.ts';
 import { type Chart, frame, type Layer } from './frame.ts';
 import { compass, contourLabels, tiltLabels } from './map-labels.ts';
 import { fixed, forSpec, percentSize, whole } from './numbers.ts';
@@ -28,8 +29,7 @@ export const orientationChart = (comparison: Comparison): Chart => {
     altText,
     spec: frame({
       title,
-      subtitle:
-        'Compass on the rim, tilt from flat in the centre to upright at the rim. Lines: yearly light lost against the best fixed plane, before shade. TOF: the share that is kept.',
+      subtitle: `Compass on the rim, tilt from flat in the centre to upright at the rim. Lines: yearly light lost against the best fixed plane, before shade. TOF: the share that is kept.${planes.some((p) => p.box) ? ' Outlined: what the reading errors allow.' : ''}`,
       altText,
       left: DIAL_LEFT,
       right: DIAL_LEFT,
@@ -54,23 +54,31 @@ const isFixed = (m: MountResult): m is MountResult & { tilt_deg: number; azimuth
 
 const markedPlanes = (comparison: Comparison): MarkedPlane[] => {
   const { tilt_deg, azimuth_deg } = comparison.best_orientation;
-  const plane = (name: string, tiltDeg: number, azimuthDeg: number, tof: number | null, series: number | null) => ({
+  const plane = (name: string, tiltDeg: number, azimuthDeg: number, more: readonly string[]) => ({
     name,
     tiltDeg,
     azimuthDeg,
-    series,
     at: dialPoint(tiltDeg, azimuthDeg),
     details: [
       tiltDeg < 0.5 ? 'lying flat' : `${whole(tiltDeg)}° facing ${whole(wrap360(Math.round(azimuthDeg)))}°`,
-      ...(tof === null ? [] : [`TOF ${fixed(tof, 2)}`]),
+      ...more,
     ],
-  }); // biome-ignore format: one record
+  });
   return [
-    plane('best fixed plane', tilt_deg, azimuth_deg, null, null),
+    { ...plane('best fixed plane', tilt_deg, azimuth_deg, []), box: null, series: null },
     ...comparison.mounts.flatMap((m, i) =>
-      isFixed(m) ? [plane(labelOf(m), m.tilt_deg, m.azimuth_deg, m.orientation_factor, i)] : [],
+      isFixed(m)
+        ? [{ ...plane(labelOf(m), m.tilt_deg, m.azimuth_deg, factorWords(m)), box: errorBox(m), series: i }]
+        : [],
     ),
   ];
+};
+
+/** `TOF 0.94`, and on a line of its own the band of the reading errors: `(0.92 to 0.95)`. */
+const factorWords = ({ orientation_factor: tof, orientation_factor_band: band }: MountResult): string[] => {
+  if (tof === null) return [];
+  const range = band === null ? [] : [`(${fixed(band.low, 2)} to ${fixed(band.high, 2)})`];
+  return [`TOF ${fixed(tof, 2)}`, ...range];
 };
 
 const marks = (planes: readonly MarkedPlane[]): Layer[] =>
@@ -91,8 +99,12 @@ const marks = (planes: readonly MarkedPlane[]): Layer[] =>
         ];
       }
       const { color, shape } = seriesStyle(p.series);
+      // A reading error is often smaller than a mark: then the mark shrinks so that the outline stays in sight.
+      const small = p.box !== null && boxRoom(p.box) < 12;
+      const size = small ? 18 : 90;
       return [
-        { data, mark: { type: 'point', shape, size: 90, filled: true, opacity: 1, color, stroke: PAPER, strokeWidth: 1.5 }, encoding },
+        ...(p.box ? boxLayers(p.name, p.box, color) : []),
+        { data, mark: { type: 'point', shape, size, filled: true, opacity: 1, color, stroke: PAPER, strokeWidth: small ? 0.6 : 1.5 }, encoding },
       ]; // biome-ignore format: one mark
     });
 

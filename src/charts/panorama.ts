@@ -36,7 +36,7 @@ export const panoramaLayers = (panorama: Panorama): Layer[] => {
   const worst = panorama.profiles.find((p) => p.name === panorama.worst) ?? panorama.profiles[0];
   const line = (l: PanoramaLine, mark: Record<string, unknown>): Layer => ({
     data: { values: rowsOf(l) },
-    mark: { type: 'line', strokeCap: 'round', strokeJoin: 'round', clip: true, ...mark },
+    mark: { type: 'line', strokeCap: 'round', strokeJoin: 'round', ...mark },
     encoding: { ...axes, order: { field: 'step', type: 'quantitative' }, detail: { field: 'piece', type: 'nominal' } },
   }); // biome-ignore format: one encoding
   return [
@@ -51,7 +51,7 @@ export const panoramaLayers = (panorama: Panorama): Layer[] => {
 /** An upright edge is two points at one azimuth: stacking, which areas do unasked, would add them up. */
 const hill = (l: PanoramaLine, axes: ReturnType<typeof axesOf>): Layer => ({
   data: { values: rowsOf(l) },
-  mark: { type: 'area', color: HILL, opacity: 0.72, line: false, clip: true },
+  mark: { type: 'area', color: HILL, opacity: 0.72, line: false },
   encoding: {
     ...axes,
     y: { ...axes.y, stack: null },

@@ -23,6 +23,8 @@ export interface MarkedPlane {
   readonly tiltDeg: number;
   readonly azimuthDeg: number;
   readonly at: DialPoint;
+  /** Outline of what the reading errors allow; null without them. */
+  readonly box: DialPoint[][] | null;
   /** Null for the optimum. */
   readonly series: number | null;
 }
@@ -53,8 +55,8 @@ export const placeLabels = (planes: readonly MarkedPlane[]): PlacedLabel[] => {
     const centres = spreadLabels(
       side.map((p) => toPixels(p.at)[1]),
       heights,
-      -24,
-      2 * DIAL_RADIUS + 24,
+      -36,
+      2 * DIAL_RADIUS + 36,
     );
     return side.map((plane, i) => ({
       plane,

@@ -45,6 +45,24 @@ export interface InventedMount {
   shading?: number;
 }
 
+/** Reading errors as given, shade that is longest in winter, TSRF by its definition. */
+const inventedSurvey = (m: InventedMount, tof: number | null, season: number[] | null) => {
+  const shading = m.shading ?? 0;
+  const tsrf = (shade: number) => (tof === null ? null : tof * (1 - shade));
+  return {
+    tilt_error_deg: m.tiltError ?? null,
+    azimuth_error_deg: m.azimuthError ?? null,
+    orientation_factor_band: m.band ?? null,
+    shading_fraction: shading,
+    shading_monthly: SHAPE.map((_, i) => season && shading / season[i]),
+    shading_worst_point: shading * 1.5,
+    tsrf: tsrf(shading),
+    tsrf_worst_point: tsrf(shading * 1.5),
+    readings: [],
+    survey_steps: [],
+  };
+};
+
 export const inventedMount = (m: InventedMount): MountResult => {
   const light = m.light ?? 2000;
   const tracker = m.kind === 'single-axis' || m.kind === 'dual-axis';
@@ -78,16 +96,7 @@ export const inventedMount = (m: InventedMount): MountResult => {
     azimuth_deg: tracker ? null : (m.azimuth ?? 186),
     tilt_basis: tracker ? null : 'given',
     orientation_factor: tracker ? null : (m.tof ?? light / PEAK),
-    tilt_error_deg: m.tiltError ?? null,
-    azimuth_error_deg: m.azimuthError ?? null,
-    orientation_factor_band: m.band ?? null,
-    shading_fraction: m.shading ?? 0,
-    shading_monthly: season.map((s) => (light > 0 ? (m.shading ?? 0) / s : null)),
-    shading_worst_point: (m.shading ?? 0) * 1.5,
-    tsrf: tracker ? null : (m.tof ?? light / PEAK) * (1 - (m.shading ?? 0)),
-    tsrf_worst_point: tracker ? null : (m.tof ?? light / PEAK) * (1 - (m.shading ?? 0) * 1.5),
-    readings: [],
-    survey_steps: [],
+    ...inventedSurvey(m, tracker ? null : (m.tof ?? light / PEAK), light > 0 ? season : null),
     gcr: null,
     rows: 'no rows',
     irradiation_kwh_m2: light,

@@ -77,6 +77,7 @@ const HOSTILE_NAME = `</script><img src=x onerror="alert('1')">|\n=1+1 & ]]> <!-
 export const SKYLINES = {
   'a ridge in the north': () => withSkyline(usual(), 40.1, [profile('array', RIDGE)]),
   'a ridge in the south': () => withSkyline(south(), -40.1, [profile('array', RIDGE)]),
+  'large reading errors': () => withSkyline(inventedComparison(EIGHT.map((m, i) => ({ ...m, shading: 0.01 * i, tiltError: [2, 5, 10, 0, 4, 9, 9, 20][i], azimuthError: [2, 180, 15, 10, 7, 9, 9, 400][i], band: { low: 0.7, high: 1 } }))), 47, [profile('array', RIDGE)]),
   'six points': () => withSkyline(usual(), 40.1, SIX, 'row 6'),
   'a steep wall': () => withSkyline(usual(), 51, [profile('north row', raised(WALL, 0.6, 0)), profile('south row', WALL)], 'south row'),
   'polar day and night': () => withSkyline(usual(), 78, [profile('array', raised(RIDGE, 0.4, 0))]),
