@@ -3,9 +3,16 @@ import { expect, test } from 'vitest';
 import { advise, confidenceOf, rankingBasis, rowsDiffer } from '../../src/advice/index.ts';
 import { mast, mount, roof, study, tracker } from './invented.ts';
 
-const BROKEN = { name: 'height', status: 'broken', detail: 'exceeds 3 m by 0.9 m', excess_m: 0.9 } as const;
+const BROKEN = {
+  name: 'height',
+  bound: 'most',
+  status: 'broken',
+  detail: 'exceeds 3 m by 0.9 m',
+  excess_m: 0.9,
+} as const;
 const UNCHECKED = {
   name: 'height',
+  bound: 'most',
   status: 'not_checked',
   detail: 'not checked: slant is blank',
   excess_m: null,
