@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { BAD_STUDIES, BAD_USAGE, BAD_WEATHER, type BadCase } from './bad-cases.ts';
+import { BAD_SURVEY_USAGE, BAD_SURVEYS } from './bad-survey.ts';
 import { command, inventory, put, simplestStudy, tempFolder } from './support.ts';
 
 /** Control characters other than the line end, and marks that turn the reading direction. */
@@ -33,8 +34,12 @@ describe('a wrong weather file ends with exit code 3, its place and what to do, 
   test.each(BAD_WEATHER)('$title', (bad) => refused(bad)());
 });
 
+describe('wrong readings and skylines end with exit code 3, their place and what to do, and nothing written', () => {
+  test.each(BAD_SURVEYS)('$title', (bad) => refused(bad)());
+});
+
 describe('wrong usage ends with exit code 2 and a way on', () => {
-  test.each(BAD_USAGE)('$title', (bad) => refused(bad)());
+  test.each([...BAD_USAGE, ...BAD_SURVEY_USAGE])('$title', (bad) => refused(bad)());
 });
 
 test('all problems of a study are reported together, in the order of its lines, under one heading', async () => {

@@ -5,7 +5,7 @@ import { run } from '../../src/cli/program.ts';
 import { reportTrouble } from '../../src/cli/trouble.ts';
 import { command, ROOT, tempFolder } from './support.ts';
 
-const COMMANDS = ['compare', 'start', 'weather', 'schema'];
+const COMMANDS = ['compare', 'start', 'weather', 'plane', 'bearing', 'schema'];
 
 test.each([[], ...COMMANDS.map((name) => [name])])(
   'help of %j opens with examples and ends well',
