@@ -9,7 +9,7 @@ export interface ReportExtras {
 }
 
 export interface ChartFile {
-  /** `cost` and `months` stand near the top of the memo; the rest in the appendix. */
+  /** `cost` and `months` stand near the top of the memo, `skyline` beside the shading, the rest in the appendix. */
   readonly name: string;
   /** States the finding. */
   readonly title: string;

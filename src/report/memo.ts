@@ -6,7 +6,9 @@ import { cost, skySpread, trackerOrModules } from './memo/cost.ts';
 import { energy } from './memo/energy.ts';
 import { mountsCompared } from './memo/mounts.ts';
 import { nextSteps } from './memo/next-steps.ts';
+import { orientationAndShading } from './memo/orientation.ts';
 import { overview } from './memo/overview.ts';
+import { readings } from './memo/readings.ts';
 import { blocks } from './memo/section.ts';
 import { siteAndWeather } from './memo/site.ts';
 import { wind } from './memo/wind.ts';
@@ -23,12 +25,15 @@ const pageOne = ({ chartFiles }: ReportExtras) => {
  */
 export const memoMarkdown = (c: Comparison, extras: ReportExtras): string => {
   const first = pageOne(extras);
+  const skyline = extras.chartFiles.filter((chart) => chart.name === 'skyline' && !first.includes(chart));
   const memo = blocks(
     answer(c),
     overview(c, first),
     reasons(c),
     siteAndWeather(c),
+    readings(c),
     mountsCompared(c),
+    orientationAndShading(c, skyline),
     energy(c),
     wind(c),
     cost(c),
@@ -40,7 +45,7 @@ export const memoMarkdown = (c: Comparison, extras: ReportExtras): string => {
     appendix(
       c,
       extras,
-      first.map(({ name }) => name),
+      [...first, ...skyline].map(({ name }) => name),
     ),
   );
   return `${memo}\n`;

@@ -4,7 +4,7 @@ import { currencyOf, hasCapital, INCOMPLETE_MARK, INCOMPLETE_NOTE, lcoeColumns }
 import { limitsInWords } from './limit-words.ts';
 import { formatDaily, formatGain, formatNumber, UNKNOWN } from './numbers.ts';
 import { oneLine } from './plain-text.ts';
-import { LIMIT_WORDS, mountById, nameOf } from './words.ts';
+import { mountById, nameOf } from './words.ts';
 
 interface Column {
   /** Two lines. */
@@ -77,9 +77,7 @@ const withLimits = (
   width: number,
 ): string[] => {
   const at = columnsOf(heads[0]) + GAP.length;
-  const words = c.mounts.map((m) =>
-    limitsInWords(m).replaceAll(LIMIT_WORDS.broken, LIMIT_WORDS.broken.toUpperCase()),
-  );
+  const words = c.mounts.map((m) => limitsInWords(m, true));
   if (width - at < LIMITS_NEED) {
     const text = words.map((limits, i) => `${names[i]}: ${limits}`).join('; ');
     return [...heads, ...rows, ...hanging('  limits', text, 10, width)];

@@ -5,6 +5,7 @@ import { gainSentences } from './gain-words.ts';
 import { formatDaily, formatNumber, formatPlace } from './numbers.ts';
 import { capitalised, oneLine } from './plain-text.ts';
 import { tableLines, tableNotes } from './screen-table.ts';
+import { shadingLine } from './survey-words.ts';
 import { showsWind, windDeferral } from './wind-words.ts';
 import { monthInFull, mountById, nameOf, ratingWords, yearWords } from './words.ts';
 
@@ -127,6 +128,7 @@ export const screenTable = (
 ): string => {
   const lack = costLack(c);
   const findings = findingLines(c, width);
+  const shading = shadingLine(c);
   const lines = [
     ...placeLines(c, width),
     '',
@@ -135,6 +137,7 @@ export const screenTable = (
     '',
     ...tableLines(c, width),
     ...monthLine(c, width),
+    ...(shading === null ? [] : hanging('', shading, 2, width)),
     ...tableNotes(c).flatMap((note) => hanging('', note, 2, width)),
     ...insteadLines(c, width),
     '',

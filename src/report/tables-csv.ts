@@ -10,7 +10,16 @@ const mountRecord = (c: Comparison, rates: readonly string[], m: MountResult): R
   tilt_deg: m.tilt_deg,
   azimuth_deg: m.azimuth_deg,
   tilt_basis: m.tilt_basis,
+  tilt_error_deg: m.tilt_error_deg,
+  azimuth_error_deg: m.azimuth_error_deg,
   orientation_factor_fraction: m.orientation_factor,
+  orientation_factor_low_fraction: m.orientation_factor_band?.low ?? null,
+  orientation_factor_high_fraction: m.orientation_factor_band?.high ?? null,
+  // Without a skyline shading is not counted, which is not 0.
+  shading_fraction: c.skyline && m.shading_fraction,
+  shading_worst_point_fraction: c.skyline && m.shading_worst_point,
+  tsrf_fraction: m.tsrf,
+  tsrf_worst_point_fraction: m.tsrf_worst_point,
   gcr_fraction: m.gcr,
   rows: m.rows,
   dc_kw: m.dc_kw,
@@ -50,8 +59,13 @@ const mountRecord = (c: Comparison, rates: readonly string[], m: MountResult): R
   roof_projection_m: m.wind.roof_projection_m,
   kz_factor: m.wind.kz,
   velocity_pressure_pa: m.wind.velocity_pressure_pa,
-  limits: m.limits.length === 0 ? null : m.limits.map(limitWords).join('; '),
+  limits: listOrNull(m.limits.map((limit) => limitWords(limit))),
+  readings: listOrNull(m.readings),
+  survey_steps: listOrNull(m.survey_steps),
 });
+
+const listOrNull = (texts: readonly string[]): string | null =>
+  texts.length === 0 ? null : texts.join('; ');
 
 /** `data/mounts.csv`: a row a mount, units in the column names; money is in the column `currency`. */
 export const mountsCsv = (c: Comparison): string => {
@@ -72,6 +86,7 @@ export const monthlyCsv = (c: Comparison): string =>
           irradiation_kwh_m2: mount.irradiation_monthly_kwh_m2[m],
           energy_kwh_per_kw: mount.energy_monthly_kwh_per_kw[m],
           energy_kwh_per_kw_day: mount.energy_monthly_kwh_per_kw[m] / MONTH_DAYS[m],
+          shading_fraction: c.skyline && mount.shading_monthly[m],
           tilted_for_month_kwh_per_kw_day: plane?.kwh_per_kw_day ?? null,
           tilted_for_month_tilt_deg: plane?.tilt_deg ?? null,
           tilted_for_month_azimuth_deg: plane?.azimuth_deg ?? null,

@@ -6,7 +6,7 @@ export const showsWind = (c: Comparison): boolean =>
   c.wind_basis !== null ||
   c.mounts.some(
     ({ limits, wind }) =>
-      limits.some(({ status }) => status !== 'not_checked') ||
+      limits.some(({ bound, status }) => bound === 'most' && status !== 'not_checked') ||
       wind.highest_edge_m !== null ||
       wind.roof_projection_m !== null ||
       wind.velocity_pressure_pa !== null,

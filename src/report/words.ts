@@ -2,7 +2,6 @@ import {
   type AdviceResult,
   type Comparison,
   compassWords,
-  type LimitStatus,
   type MountKind,
   type MountResult,
   type SkyModel,
@@ -22,13 +21,6 @@ export const SKY_WORDS: Record<SkyModel, string> = {
   'hay-davies': 'Hay-Davies',
   reindl: 'Reindl',
   isotropic: 'isotropic',
-};
-
-export const LIMIT_WORDS: Record<LimitStatus, string> = {
-  kept: 'within',
-  broken: 'exceeds',
-  within_reading_error: 'within reading error',
-  not_checked: 'not checked',
 };
 
 export const CONFIDENCE_WORDS: Record<NonNullable<AdviceResult['confidence']>, string> = {

@@ -33,6 +33,13 @@ test.each(VARIANTS)('mounts.csv reads back as the numbers of the results: %s', (
       ['break_even_gain_fraction', m.break_even_gain],
       ['highest_edge_m', m.wind.highest_edge_m],
       ['land_m2', m.land_m2],
+      ['azimuth_error_deg', m.azimuth_error_deg],
+      ['orientation_factor_low_fraction', m.orientation_factor_band?.low ?? null],
+      ['orientation_factor_high_fraction', m.orientation_factor_band?.high ?? null],
+      ['shading_fraction', c.skyline ? m.shading_fraction : null],
+      ['shading_worst_point_fraction', c.skyline ? m.shading_worst_point : null],
+      ['tsrf_fraction', m.tsrf],
+      ['tsrf_worst_point_fraction', m.tsrf_worst_point],
     ] as const) {
       if (value === null) expect(rows[i][name]).toBe('');
       else close(rows[i][name], value);
@@ -52,6 +59,8 @@ test.each(VARIANTS)(
       const year = own.reduce((sum, row) => sum + Number(row.energy_kwh_per_kw), 0);
       expect(Math.abs(year - m.energy_kwh_per_kw)).toBeLessThan(1e-5);
       close(own[1].energy_kwh_per_kw_day, m.energy_monthly_kwh_per_kw[1] / 28);
+      expect(own[11].shading_fraction).toBe('');
+      if (c.skyline) close(own[1].shading_fraction, m.shading_monthly[1]!);
       close(own[11].tilted_for_month_kwh_per_kw_day, c.tilted_for_month[11].kwh_per_kw_day);
     }
   },

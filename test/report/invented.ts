@@ -42,8 +42,20 @@ interface Invented {
 
 const REFERENCE_YIELD = 1650.4 * Object.values(STAGES).reduce((a, b) => a * b, 1);
 
+const NOT_SURVEYED = {
+  tilt_error_deg: null,
+  azimuth_error_deg: null,
+  orientation_factor_band: null,
+  shading_fraction: 0,
+  shading_monthly: MONTH_NAMES.map(() => 0),
+  shading_worst_point: 0,
+  readings: [],
+  survey_steps: [],
+};
+
 export const inventedMount = (m: Invented): MountResult => {
   const tracker = m.kind === 'single-axis' || m.kind === 'dual-axis';
+  const factor = tracker ? null : 0.9987654321;
   let left = m.irradiation;
   const stages = Object.entries(m.stages ?? STAGES).map(([name, efficiency]) => {
     left *= efficiency;
@@ -62,17 +74,10 @@ export const inventedMount = (m: Invented): MountResult => {
     tilt_deg: tracker ? null : 34.2,
     azimuth_deg: tracker ? null : 186,
     tilt_basis: tracker ? null : 'best: unshaded optimum of the orientation map',
-    orientation_factor: tracker ? null : 0.9987654321,
-    tilt_error_deg: null,
-    azimuth_error_deg: null,
-    orientation_factor_band: null,
-    shading_fraction: 0,
-    shading_monthly: MONTH_NAMES.map(() => 0),
-    shading_worst_point: 0,
-    tsrf: tracker ? null : 0.9987654321,
-    tsrf_worst_point: tracker ? null : 0.9987654321,
-    readings: [],
-    survey_steps: [],
+    orientation_factor: factor,
+    ...NOT_SURVEYED,
+    tsrf: factor,
+    tsrf_worst_point: factor,
     gcr: m.kind === 'dual-axis' ? null : 0.45,
     rows: m.kind === 'dual-axis' ? 'lone mast' : 'rows at GCR 0.45',
     irradiation_kwh_m2: m.irradiation,
@@ -136,11 +141,23 @@ export const invented = (): Comparison => {
     inventedMount({ id: 'mast', kind: 'dual-axis', label: 'Mast', irradiation: 2090.2, stages: { incidence: 0.989, ...drive, rows: 1 }, capitalPerKw: 3400, lcoe: 0.16322 }),
   ]; // biome-ignore format: a mount a line
   mounts[1].limits = [
-    { name: 'roof projection', bound: 'most', status: 'kept', detail: 'within: 0.135 of 0.254 m', excess_m: null },
+    {
+      name: 'roof projection',
+      bound: 'most',
+      status: 'kept',
+      detail: 'within: 0.135 of 0.254 m',
+      excess_m: null,
+    },
   ];
   mounts[3].limits = [
     { name: 'height', bound: 'most', status: 'broken', detail: 'exceeds 3 m by 0.9 m', excess_m: 0.9 },
-    { name: 'roof projection', bound: 'most', status: 'not_checked', detail: 'not checked: not on a roof', excess_m: null },
+    {
+      name: 'roof projection',
+      bound: 'most',
+      status: 'not_checked',
+      detail: 'not checked: not on a roof',
+      excess_m: null,
+    },
   ];
   return {
     schema: 'trackworth-comparison-1',
@@ -368,6 +385,82 @@ export const inventedSouth = (): Comparison => {
   };
 };
 
+/** The day of an invented reading: user text, and the only date in a memo. */
+export const READ_ON = '2026-05-01';
+
+/** Bearings and slopes read on site, a skyline seen from two points, a programme's minimum factors. */
+export const inventedSurveyed = (): Comparison => {
+  const c = invented();
+  const mounts = c.mounts.map((m, i): MountResult => {
+    const shading = [0.021, 0.034, 0.0624, 0.071][i];
+    const worst = shading * 1.5;
+    const tof = m.orientation_factor;
+    return {
+      ...m,
+      shading_fraction: shading,
+      shading_worst_point: worst,
+      shading_monthly: MONTH_NAMES.map((_, month) => (month === 11 ? null : shading / SEASON[month])),
+      tsrf: tof === null ? null : tof * (1 - shading),
+      tsrf_worst_point: tof === null ? null : tof * (1 - worst),
+      stages: [{ name: 'skyline', efficiency: 1 - shading, kwh_per_kw_after: m.irradiation_kwh_m2 * (1 - shading), source: 'invented' }, ...m.stages.map((s) => ({ ...s, kwh_per_kw_after: s.kwh_per_kw_after * (1 - shading) }))],
+      energy_kwh_per_kw: m.energy_kwh_per_kw * (1 - shading),
+      energy_monthly_kwh_per_kw: m.energy_monthly_kwh_per_kw.map((kwh) => kwh * (1 - shading)),
+    };
+  }); // biome-ignore format: stages on one line
+  mounts[0].limits = [
+    {
+      name: 'TOF',
+      bound: 'least',
+      status: 'kept',
+      detail: '99.9 % where at least 75 % is asked',
+      excess_m: null,
+    },
+    {
+      name: 'TSRF',
+      bound: 'least',
+      status: 'kept',
+      detail: '96.7 % where at least 75 % is asked',
+      excess_m: null,
+    },
+  ];
+  mounts[1] = {
+    ...mounts[1],
+    tilt_deg: 14.04,
+    azimuth_deg: 166,
+    tilt_error_deg: 2,
+    azimuth_error_deg: 5,
+    orientation_factor: 0.712,
+    orientation_factor_band: { low: 0.703, high: 0.7234 },
+    tsrf: 0.712 * (1 - 0.034),
+    tsrf_worst_point: 0.712 * (1 - 0.051),
+    tilt_basis: 'given',
+    readings: [`bearing 150 magnetic, taken facing, dated ${READ_ON}, error 5 deg`, 'slope 3:12'],
+    survey_steps: ['150 + 16 E = 166 true', 'faces south-south-east', '3:12 = 25 % = 14 degrees, +- 2'],
+    limits: [
+      { name: 'roof projection', bound: 'most', status: 'kept', detail: 'within: 0.135 of 0.254 m', excess_m: null },
+      { name: 'TOF', bound: 'least', status: 'broken', detail: '71.2 % where at least 75 % is asked, 70.3 % to 72.3 % within the reading errors', excess_m: null },
+      { name: 'TSRF', bound: 'least', status: 'within_reading_error', detail: '67.6 % where at least 68 % is asked, 66.7 % to 68.6 % within the reading errors', excess_m: null },
+    ],
+  }; // biome-ignore format: a limit a line
+  const points = [[0, 4], [100, 17], [180, 3], [262, 22.25], [360, 4]]; // biome-ignore format: points
+  const profile = (name: string, factor: number) => ({
+    name,
+    azimuths_deg: points.map(([azimuth]) => azimuth),
+    elevations_deg: points.map(([, elevation]) => elevation * factor),
+    sky_blocked: 0.031 * factor,
+  });
+  return {
+    ...c,
+    mounts,
+    declinations: [`16.02 E by an invented model at 40.1 N 104.92 W on ${READ_ON}, 0.11 degrees a year toward west, +- 0.4`],
+    skyline: {
+      profiles: [profile('west row', 1), profile('east row', 1.5)],
+      worst_point: 'east row',
+      sun_paths: [{ name: '21 December', azimuths_deg: [150, 180, 210], elevations_deg: [20, 26, 20] }],
+    },
+  }; // biome-ignore format: a long line
+};
+
 /** One fixed mount, which is its own reference. */
 export const inventedAlone = (): Comparison => {
   const c = invented();
@@ -391,7 +484,7 @@ export const HOSTILE =
 
 /** Every text that a user or a file may choose, hostile. */
 export const inventedHostile = (): Comparison => {
-  const c = invented();
+  const c = inventedSurveyed();
   const h = HOSTILE;
   return {
     ...c,
@@ -407,7 +500,15 @@ export const inventedHostile = (): Comparison => {
       ...m,
       label: `${m.id} ${h}`,
       limits: m.limits.map((l) => ({ ...l, detail: h })),
+      readings: m.readings.map((r) => `${r}${h}`),
+      survey_steps: m.survey_steps.map((s) => `${s}${h}`),
     })),
+    declinations: [h],
+    skyline: {
+      ...c.skyline!,
+      worst_point: h,
+      profiles: c.skyline!.profiles.map((p, i) => ({ ...p, name: i === 0 ? h : `${h}${i}` })),
+    },
     comparisons: {
       ...c.comparisons,
       same_energy: c.comparisons.same_energy.map((s) => ({ ...s, text: `32 modules on ${h}` })),
@@ -434,6 +535,7 @@ export const VARIANTS: readonly (readonly [string, () => Comparison])[] = [
   ['blocked', inventedBlocked],
   ['south of the equator', inventedSouth],
   ['one mount', inventedAlone],
+  ['surveyed', inventedSurveyed],
   ['hostile text', inventedHostile],
 ];
 

@@ -9,7 +9,9 @@ import {
   inventedBare,
   inventedBlocked,
   inventedHostile,
+  inventedSurveyed,
   inventedWithoutRate,
+  READ_ON,
   VARIANTS,
 } from './invented.ts';
 
@@ -41,13 +43,13 @@ test.each(VARIANTS)('nothing unknown prints as null, NaN, undefined or an empty 
 });
 
 test.each(VARIANTS)(
-  'headings are those of the memo, none comes from a study, and no date is printed: %s',
+  'headings are those of the memo, none comes from a study, and no date is printed but those of readings: %s',
   (_, make) => {
     const text = memo(make);
     const headings = text.split('\n').filter((line) => /^#{1,6} /.test(line));
     expect(headings[0]).toMatch(/^# /);
     expect(headings.slice(1).every((line) => /^#{2,3} [A-Z][A-Za-z ,?]+$/.test(line))).toBe(true);
-    expect(text).not.toMatch(/\b20\d\d-\d\d-\d\d\b/);
+    expect(text.replaceAll(READ_ON, '')).not.toMatch(/\b20\d\d-\d\d-\d\d\b/);
     expect(text.endsWith('\n') && !text.endsWith('\n\n')).toBe(true);
   },
 );
@@ -193,6 +195,97 @@ test('hostile text is inert everywhere', () => {
   expect(bare).not.toMatch(/[<>`]/);
   expect(bare.match(/\[[^\]]*\]/g)).toHaveLength(EXTRAS.chartFiles.length);
   expect(bare).not.toMatch(/https?:\/\/|[^\P{Cc}\n]|\u202e/u);
+});
+
+test('readings stand beside the angles that follow, and the declination is said to be applied once', () => {
+  const text = memo(inventedSurveyed);
+  const [head, , roof, ...more] = tablesOf(text).find(([first]) => first[1] === 'As read')!;
+  expect(head).toEqual(['Mount', 'As read', 'How the angles follow', 'Tilt', 'True azimuth']);
+  expect(more).toEqual([]);
+  expect(roof[1]).toBe('bearing 150 magnetic, taken facing, dated 2026-05-01, error 5 deg; slope 3:12');
+  expect(roof[2]).toContain('150 + 16 E = 166 true');
+  expect(roof.slice(3)).toEqual(['14.0° ± 2.0°', '166.0° ± 5.0° (south-south-east)']);
+  expect(text).toContain('16.02 E by an invented model');
+  expect(text.split('Declination is applied once')).toHaveLength(2);
+  expect(text).toContain(
+    'Barn roof: ±2.0° of tilt and ±5.0° of azimuth leave TOF between 70.3 % and 72.3 %; as read it is 71.2 %.',
+  );
+  // Without readings nothing is said of them, and without a magnetic one no declination is claimed.
+  expect(memo(invented)).not.toMatch(/Readings on site|Declination/);
+  const c = inventedSurveyed();
+  const trueOnly = memoMarkdown({ ...c, declinations: [] }, EXTRAS);
+  expect(trueOnly).toContain('No magnetic bearing was read: no declination was applied.');
+  expect(trueOnly).not.toContain('Declination is applied once');
+  const unsure = c.mounts.map((m) => ({ ...m, tilt_error_deg: null, azimuth_error_deg: null, orientation_factor_band: null }));
+  expect(memoMarkdown({ ...c, mounts: unsure }, EXTRAS)).toContain('Barn roof: no reading error is given, so how far its TOF may be out is not known.');
+}); // biome-ignore format: sentences
+
+test('factors and shading stand in one table, each month in another, and TSRF is TOF times what is left', () => {
+  const c = inventedSurveyed();
+  const tables = tablesOf(memo(inventedSurveyed));
+  const factors = tables.find(([head]) => head[1] === 'TOF')!;
+  expect(factors[3]).toEqual(['Barn roof', '71.2 % (70.3 to 72.3 %)', '3.4 %', '5.1 %', '68.8 %', '67.6 %']);
+  expect(factors[4]).toEqual(['Tracker', '—', '6.2 %', '9.4 %', '—', '—']);
+  const percent = (cell: string) => Number.parseFloat(cell) / 100;
+  for (const row of factors.slice(2, 4)) {
+    // Both are rounded to a tenth of a per cent.
+    expect(Math.abs(percent(row[4]) - percent(row[1]) * (1 - percent(row[2])))).toBeLessThan(0.0016);
+    expect(Math.abs(percent(row[5]) - percent(row[1]) * (1 - percent(row[3])))).toBeLessThan(0.0016);
+  }
+  const months = tables.find(([head]) => head[0] === 'Shading')!;
+  expect(months).toHaveLength(14);
+  expect(months[2]).toEqual(['Jan', ...c.mounts.map((m) => `${(100 * m.shading_monthly[0]!).toFixed(1)} %`)]);
+  expect(months[13]).toEqual(['Dec', 'no light', 'no light', 'no light', 'no light']);
+  const points = tables.find(([head]) => head[0] === 'Skyline seen from')!;
+  expect(points[3]).toEqual(['east row (worst point)', '33.4°', '262.0° (west)', '4.7 %']);
+});
+
+test('an open horizon is told as such, not as shading of 0', () => {
+  const text = memo(invented);
+  const section = text.slice(text.indexOf('## Orientation and shading'), text.indexOf('## Energy'));
+  expect(section).toContain('no skyline: the horizon is taken as open');
+  expect(section).not.toMatch(/Shading, year|\b0\.0\u00a0%/);
+  const c = invented();
+  const trackers = { ...inventedAlone(), reference_id: 'tracker', mounts: [c.mounts[2]], advice: { ...inventedAlone().advice, choice: null } };
+  expect(memoMarkdown(trackers, EXTRAS)).not.toContain('Orientation and shading');
+}); // biome-ignore format: a fixture on a line
+
+test('what a programme asks is below or within, never exceeded, and no matter of wind', () => {
+  const text = memo(inventedSurveyed);
+  expect(text).toContain('Barn roof: TOF below by 3.8 points: 71.2 % where at least 75 % is asked, 70.3 %');
+  expect(text).toContain('Barn roof: TSRF too near to tell: 67.6 % where at least 68 % is asked');
+  expect(text).toContain('Ground rack: TOF within: 99.9 % where at least 75 % is asked.');
+  expect(text).toContain('its TSRF held against the worst point');
+  expect(text).not.toMatch(/(?:TOF|TSRF)[^.|]*exceed/);
+  const wind = text.slice(text.indexOf('## Wind'), text.indexOf('## Costs'));
+  expect(wind).toContain('height exceeds 3 m');
+  expect(wind).not.toMatch(/TOF|TSRF/);
+  // A programme's minimum alone shows no figure of wind, so it calls for no engineer.
+  const bare = inventedBare();
+  const mounts = bare.mounts.map((m, i) => ({ ...m, limits: inventedSurveyed().mounts[i].limits.filter(({ bound }) => bound === 'least') }));
+  expect(memoMarkdown({ ...bare, mounts }, EXTRAS)).toContain('Not checked: the study gives no wind');
+}); // biome-ignore format: a fixture on a line
+
+test('cautions of the survey follow what was read', () => {
+  const cautions = (c: ReturnType<typeof invented>) => {
+    const text = memoMarkdown(c, EXTRAS);
+    return text.slice(text.indexOf('## Cautions'), text.indexOf('## More charts'));
+  };
+  expect(cautions(invented())).not.toMatch(/Compass|Skyline|Slope/);
+  for (const part of ['Falls: reading a compass', 'Compass: keep away', 'Metal roof', 'Phone compass', 'Slope: the run', 'Skyline: take'])
+    expect(cautions(inventedSurveyed())).toContain(part);
+  const c = inventedSurveyed();
+  const open = { ...c, skyline: null, mounts: c.mounts.map((m) => ({ ...m, readings: m.readings.map((r) => r.replace('3:12', '14 deg')) })) };
+  expect(cautions(open)).not.toMatch(/Skyline: take|Slope: the run/);
+  expect(cautions({ ...invented(), skyline: c.skyline })).not.toContain('Compass');
+}); // biome-ignore format: a list
+
+test('the chart of the skyline stands beside the shading, once', () => {
+  const skyline = { name: 'skyline', title: 'Finding of skyline', altText: 'x', file: 'charts/skyline.svg' };
+  const text = memoMarkdown(inventedSurveyed(), { ...EXTRAS, chartFiles: [...EXTRAS.chartFiles, skyline] });
+  expect(text.split('charts/skyline.svg')).toHaveLength(2);
+  expect(text.indexOf('charts/skyline.svg')).toBeGreaterThan(text.indexOf('## Orientation and shading'));
+  expect(text.indexOf('charts/skyline.svg')).toBeLessThan(text.indexOf('## Energy'));
 });
 
 test('inputs are listed with their checksums, and the version is named', () => {

@@ -9,6 +9,7 @@ import {
   inventedBlocked,
   inventedHostile,
   inventedSouth,
+  inventedSurveyed,
   inventedWithoutRate,
   VARIANTS,
 } from './invented.ts';
@@ -93,6 +94,20 @@ test('limits are in words, and a broken one shouts', () => {
   expect(text).toContain('roof projection within');
   expect(text).toContain('height EXCEEDS by 0.90 m');
   expect(text).toContain('licensed engineer');
+});
+
+test('a programme is missed below its minimum, kept within it, or too near to tell', () => {
+  const flat = screen(inventedSurveyed).replace(/\s+/g, ' ');
+  expect(flat).toContain('TOF BELOW by 3.8 points, TSRF too near to tell');
+  expect(flat).toContain('TOF within, TSRF within');
+  expect(flat).not.toMatch(/(?:TOF|TSRF) EXCEEDS/);
+});
+
+test('shading has a line where there is a skyline, and none under an open horizon', () => {
+  expect(screen(inventedSurveyed)).toContain(
+    "skyline takes, of a year's light: Ground rack 2.1 %, Barn roof 3.4 %, Tracker 6.2 %, Mast 7.1 %",
+  );
+  expect(screen(invented)).not.toContain('skyline');
 });
 
 test('without costs the cost columns go and the lack is named; without limits no wind figure is shown', () => {

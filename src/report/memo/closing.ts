@@ -2,6 +2,7 @@ import type { Comparison } from '../../shared/index.ts';
 import type { ReportExtras } from '../extras.ts';
 import { md, mdTable } from '../markdown.ts';
 import { oneLine } from '../plain-text.ts';
+import { cautionsOfSurvey } from '../survey-words.ts';
 import { figure } from './overview.ts';
 import { blocks, section } from './section.ts';
 import { sentences } from './sentences.ts';
@@ -29,7 +30,8 @@ export const notCountedAndDoubts = (c: Comparison): string =>
   );
 
 /** For whoever builds and keeps it. */
-export const cautions = (c: Comparison): string => section('Cautions', sentences(c.advice.cautions));
+export const cautions = (c: Comparison): string =>
+  section('Cautions', sentences([...new Set([...c.advice.cautions, ...cautionsOfSurvey(c)])]));
 
 /** Everything that a reviewer needs to repeat the work. */
 export const appendix = (

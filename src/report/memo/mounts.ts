@@ -1,6 +1,6 @@
 import type { Comparison, MountResult } from '../../shared/index.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
-import { formatNumber, formatPercent, UNKNOWN } from '../numbers.ts';
+import { formatNumber, UNKNOWN } from '../numbers.ts';
 import { facingWords, isTracker, KIND_WORDS, mountById, nameOf } from '../words.ts';
 import { blocks, section } from './section.ts';
 
@@ -36,18 +36,16 @@ export const mountsCompared = (c: Comparison): string =>
         landWords(m.land_m2),
       ]),
     ),
-    'Light on the front of each plane over the year, kWh/m², before shade and every loss. The factor (TOF) is that light over ' +
-      'the light on the best fixed plane; trackers have none.',
+    'Light on the front of each plane over the year, kWh/m², before shade and every loss.',
     mdTable(
-      ['Mount', 'Beam', 'Sky', 'Ground', 'All', 'Factor (TOF)'],
-      ['left', 'right', 'right', 'right', 'right', 'right'],
+      ['Mount', 'Beam', 'Sky', 'Ground', 'All'],
+      ['left', 'right', 'right', 'right', 'right'],
       c.mounts.map((m) => [
         md(nameOf(c, m)),
         formatNumber(m.beam_kwh_m2),
         formatNumber(m.sky_diffuse_kwh_m2),
         formatNumber(m.ground_reflected_kwh_m2),
         formatNumber(m.irradiation_kwh_m2),
-        formatPercent(m.orientation_factor),
       ]),
     ),
     excluded(c),

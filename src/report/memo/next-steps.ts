@@ -19,7 +19,7 @@ export const nextSteps = (c: Comparison): string => {
     'Next steps',
     mdList(
       [
-        serious > 0 ? 'Settle the warnings about the weather file above, then compare again.' : '',
+        serious > 0 ? 'Settle the warnings about weather file and readings above, then compare again.' : '',
         unpriced ? `Get quotes for ${unpriced}.` : '',
         partlyPriced ? `Complete the costs of ${partlyPriced}.` : '',
         c.not_counted.length > 0

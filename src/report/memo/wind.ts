@@ -1,5 +1,5 @@
 import type { Comparison } from '../../shared/index.ts';
-import { limitWords, worstFirst } from '../limit-words.ts';
+import { limitsOf, limitWords } from '../limit-words.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
 import { formatNumber, formatUpTo, UNKNOWN } from '../numbers.ts';
 import { showsWind, windDeferral } from '../wind-words.ts';
@@ -29,7 +29,7 @@ const heights = (c: Comparison): string =>
 
 const limits = (c: Comparison): string => {
   const items = c.mounts.flatMap((m) =>
-    worstFirst(m.limits).map(
+    limitsOf(m, 'most').map(
       (limit) =>
         `${md(nameOf(c, m))}: ${md(limit.detail ? `${limit.name} ${limit.detail}` : limitWords(limit))}.`,
     ),
@@ -48,7 +48,7 @@ export const wind = (c: Comparison): string =>
         limits(c),
         legend(c),
       )
-    : section('Wind and height', 'Not checked: the study gives no wind, heights or limits.');
+    : section('Wind and height', 'Not checked: the study gives no wind, heights or limits of height.');
 
 const legend = (c: Comparison): string =>
   c.mounts.some(({ wind: w }) =>
