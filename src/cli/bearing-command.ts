@@ -2,6 +2,7 @@ import { type Command, Option } from 'commander';
 import type { BearingOptions } from './bearing-request.ts';
 import { examples } from './help.ts';
 import type { Io } from './io.ts';
+import { numberBetween } from './options.ts';
 
 /** The ways of taking a bearing, named here so that help does not load the survey. */
 export const takenOption = (): Option =>
@@ -19,6 +20,11 @@ export const addBearing = (program: Command, io: Io): void => {
     )
     .argument('<deg>', 'bearing, degrees clockwise from north')
     .option('--at <lat,lon>', 'place: degrees, north and east positive; south or west as --at=-33.9,18.4')
+    .option(
+      '--elevation <m>',
+      'of the place above sea level; it moves a declination by hundredths of a degree',
+      numberBetween(-500, 9000, 'metres'),
+    )
     .option('--dated <date>', 'day of the reading, year-month-day')
     .addOption(
       new Option('--to <north>', 'which bearing is wanted').choices(['true', 'magnetic']).default('true'),

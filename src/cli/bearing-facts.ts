@@ -65,6 +65,7 @@ export const bearingFacts = (asked: BearingRequest, applied: Applied) => {
     model: model ? model.model : null,
     latitude_deg: asked.place ? asked.place.latitudeDeg : null,
     longitude_deg: asked.place ? asked.place.longitudeDeg : null,
+    elevation_m: asked.place ? asked.elevationM : null,
     dated: asked.date ? dateText(asked.date) : null,
     /** True azimuth that the plane faces; null where `--taken` does not say how the bearing was taken. */
     azimuth_deg: facing ? facing.azimuthDeg : null,

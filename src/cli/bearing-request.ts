@@ -12,6 +12,7 @@ import { missingDate, OptionReader } from './option-problems.ts';
 
 export interface BearingOptions {
   readonly at?: string;
+  readonly elevation?: number;
   readonly dated?: string;
   readonly declination?: string;
   readonly to: 'true' | 'magnetic';
@@ -34,6 +35,8 @@ export interface BearingRequest {
   readonly taken: Taken | null;
   readonly downslope: Downslope | null;
   readonly place: LatLon | null;
+  /** Above sea level; 0 where not given. */
+  readonly elevationM: number;
   readonly date: CalendarDate | null;
   /** Entered by hand, east positive. */
   readonly byHandDeg: number | null;
@@ -105,6 +108,7 @@ export const bearingRequest = (typed: string, options: BearingOptions): BearingR
     taken: options.taken ?? null,
     downslope: reader.read('--downslope', options.downslope, parseDownslope),
     place: reader.read('--at', options.at, parseLatLon),
+    elevationM: options.elevation ?? 0,
     date: reader.read('--dated', options.dated, parseCalendarDate),
     byHandDeg: reader.read('--declination', options.declination, parseDeclination),
   };

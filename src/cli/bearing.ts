@@ -33,8 +33,8 @@ const asUsage = async <T>(work: () => T | Promise<T>): Promise<T> => {
   }
 };
 
-const modelled = async ({ place, date }: BearingRequest): Promise<Declination | null> =>
-  place && date ? declinationAt({ ...place, date }) : null;
+const modelled = async ({ place, elevationM, date }: BearingRequest): Promise<Declination | null> =>
+  place && date ? declinationAt({ ...place, elevationM, date }) : null;
 
 /** By hand where given, held against the model where place and date allow; else by the model. */
 const declinationOf = async (asked: BearingRequest): Promise<Applied> => {

@@ -13,11 +13,12 @@ const plusMinus = (errorDeg: number | null): string =>
 const group = (name: string, lines: readonly string[]): string[] =>
   lines.map((line, i) => named(i === 0 ? name : '', line));
 
-const azimuth = (p: PlaneReport): string[] => [
-  `${trimmed(p.azimuth_deg)} degrees true, ${p.faces}${plusMinus(p.azimuth_error_deg)}`,
-  // The slope's own step is on the line of the tilt.
-  ...p.survey_steps.filter((step) => !step.startsWith(p.slope)),
-];
+/** How the azimuth follows from the readings; the slope's own step is on the line of the tilt. */
+const azimuth = (p: PlaneReport): string[] => {
+  const steps = p.survey_steps.filter((step) => !step.startsWith(p.slope));
+  const lines = steps.length > 0 ? steps : [`${trimmed(p.azimuth_deg)} true, faces ${p.faces}`];
+  return lines.with(-1, `${lines.at(-1)}${plusMinus(p.azimuth_error_deg)}`);
+};
 
 const tof = ({ orientation_factor: factor, orientation_factor_band: band }: PlaneReport): string =>
   `${percent(factor)} of the light on the best plane of the site, unshaded${
