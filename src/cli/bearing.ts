@@ -49,7 +49,11 @@ const declinationOf = async (asked: BearingRequest): Promise<Applied> => {
     throw error;
   });
   const odd = model && compareDeclinations(byHandDeg, model);
-  return { declinationDeg: byHandDeg, model: null, findings: odd ? [odd] : [] };
+  return {
+    declinationDeg: byHandDeg,
+    model: null,
+    findings: [...(model?.findings ?? []), ...(odd ? [odd] : [])],
+  };
 };
 
 /** A compass bearing to true, or a true one to magnetic, with its sum. */

@@ -28,6 +28,8 @@ export interface PlaneOptions extends PlaneReadings {
 
 /** The mount's id in the study that stands for the options. */
 export const PLANE = 'plane';
+/** The name of the study that is no file: one that no file has. */
+const NO_FILE = '';
 
 const skylinesOf = ({ skyline, true: isTrue, dated, declination }: PlaneReadings) =>
   skyline?.map((file) => ({
@@ -115,7 +117,7 @@ const eachOnce = (problems: readonly Problem[]): Problem[] => [
  */
 export const ofOptions = (error: unknown): never => {
   if (!(error instanceof TrackworthError)) throw error;
-  const inFile = error.problems.filter(({ file }) => file !== undefined && file !== PLANE);
+  const inFile = error.problems.filter(({ file }) => file !== undefined && file !== NO_FILE);
   const own = error.problems.filter((problem) => !inFile.includes(problem));
   throw new TrackworthError(inFile.length > 0 ? 'input' : 'usage', [...eachOnce(own.map(said)), ...inFile], {
     cause: error,
@@ -149,5 +151,5 @@ export const studyOfReadings = async (readings: PlaneReadings): Promise<Study> =
   const lacking = missing(readings);
   if (lacking.length > 0) throw new TrackworthError('usage', lacking);
   const { readStudy } = await import('../inputs/index.ts');
-  return readStudy({ file: PLANE, text: studyText(readings) }).catch(ofOptions);
+  return readStudy({ file: NO_FILE, text: studyText(readings) }).catch(ofOptions);
 };

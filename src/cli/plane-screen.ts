@@ -1,4 +1,4 @@
-import { MONTH_NAMES } from '../shared/index.ts';
+import { MONTH_NAMES, type Severity } from '../shared/index.ts';
 import { trimmed } from './figures.ts';
 import { mindWords } from './mind.ts';
 import { INDENT, named, printable } from './plain.ts';
@@ -67,10 +67,16 @@ const LIMIT_WORDS = {
 
 /** How one plane is turned to the light: at most 100 columns. */
 export const planeScreen = (p: PlaneReport): string => {
-  const serious = p.findings.filter(({ severity }) => severity !== 'note');
+  const found = (severity: Severity, name: string) =>
+    p.findings
+      .filter((finding) => finding.severity === severity)
+      .map(({ text, fix }) => named(name, printable(fix ? `${text} ${fix}` : text)));
+  const blocks = found('block', 'BLOCKS');
   const lines = [
     `${p.slope}, faces ${p.faces} (${trimmed(p.azimuth_deg, 1)} degrees true)   typical year ${printable(p.weather)}`,
     '',
+    // Nothing below holds before this is settled.
+    ...(blocks.length > 0 ? [...blocks, ''] : []),
     named('TOF', tof(p)),
     named('Shading', shading(p)),
     named('TSRF', tsrf(p)),
@@ -89,9 +95,7 @@ export const planeScreen = (p: PlaneReport): string => {
     ...group('Azimuth', azimuth(p)),
     ...group('Declination', p.declinations),
     ...mistakes(p),
-    ...serious.map(({ severity, text, fix }) =>
-      named(severity === 'block' ? 'BLOCKS' : 'Warning', printable(fix ? `${text} ${fix}` : text)),
-    ),
+    ...found('warning', 'Warning'),
     ...(p.cautions.length > 0 ? [named('Mind', mindWords(p.cautions))] : []),
   ];
   return `${lines.join('\n')}\n`;

@@ -63,7 +63,8 @@ export const surveyOf = async ({ study, raw, pathOf, placeOf }: ToSurvey, cwd: s
         return files.has(problem.file) ? { ...problem, file: pathOf(problem.file) } : problem;
       return placeOf && problem.field ? { ...problem, ...(await placeOf(problem.field)) } : problem;
     });
-    throw new TrackworthError('input', await Promise.all(placed), { cause: error });
+    const inLineOrder = (await Promise.all(placed)).toSorted((a, b) => (a.line ?? 0) - (b.line ?? 0));
+    throw new TrackworthError('input', inLineOrder, { cause: error });
   });
   const read = [...files];
   return {

@@ -238,3 +238,23 @@ test('a study in another folder finds its skyline, and an output folder that hol
   expect(code).toBe(4);
   expect(err).toContain('hills.csv');
 });
+
+test('a clock that is off is told before any figure', async () => {
+  const out = await run(site(), ...OPTIONS, '--utc-offset', '-6');
+  expect(out).toMatch(/^BLOCKS .*clock/m);
+  expect(out.indexOf('BLOCKS')).toBeLessThan(out.indexOf('TOF'));
+});
+
+test('a rack that is turned to the best light needs no readings', async () => {
+  const p = await plane(site(), '--study', 'shed/study.yaml', '--mount', 'rack');
+  expect(p.orientation_factor).toBeCloseTo(1, 4);
+  expect([p.readings, p.survey_steps, p.orientation_factor_band, p.declination_forgotten]).toEqual([
+    [],
+    [],
+    null,
+    null,
+  ]);
+  expect(await run(site(), '--study', 'shed/study.yaml', '--mount', 'rack')).toMatch(
+    /^Azimuth +186\.\d+ true, faces south$/m,
+  );
+});
