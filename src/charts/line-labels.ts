@@ -18,7 +18,7 @@ export interface Box {
   readonly halfHeight: number;
 }
 
-const GAP = 4;
+const GAP = 3;
 /** Further apart than this, nothing is gained. */
 const CLEAR = 12;
 /** A label gives up so many pixels of air rather than move one pixel further along its line. */
@@ -39,7 +39,7 @@ export const placeOnLines = (
   const placed: Box[] = [];
   for (const label of labels) {
     const halfWidth = textWidth(label.text, fontSize) / 2;
-    const halfHeight = fontSize / 2 + 1;
+    const halfHeight = fontSize / 2 + 2;
     const obstacles = others.filter((line) => line !== label.line).flat();
     const candidates = label.line.flatMap(([x]) => {
       const centre = Math.min(bounds.right - halfWidth, Math.max(bounds.left + halfWidth, x));

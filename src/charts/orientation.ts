@@ -101,10 +101,10 @@ const marks = (planes: readonly MarkedPlane[]): Layer[] =>
       const { color, shape } = seriesStyle(p.series);
       // A reading error is often smaller than a mark: then the mark shrinks so that the outline stays in sight.
       const small = p.box !== null && boxRoom(p.box) < 12;
-      const size = small ? 18 : 90;
+      const size = small ? 8 : 90;
       return [
         ...(p.box ? boxLayers(p.name, p.box, color) : []),
-        { data, mark: { type: 'point', shape, size, filled: true, opacity: 1, color, stroke: PAPER, strokeWidth: small ? 0.6 : 1.5 }, encoding },
+        { data, mark: { type: 'point', shape, size, filled: true, opacity: 1, color, stroke: PAPER, strokeWidth: small ? 0 : 1.5 }, encoding },
       ]; // biome-ignore format: one mark
     });
 

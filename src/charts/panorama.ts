@@ -107,7 +107,7 @@ const elevationTicks = (top: number): number[] => {
   return Array.from({ length: Math.floor(top / step) + 1 }, (_, i) => i * step);
 };
 
-const WORST_ROOM = 160;
+const WORST_ROOM = 210;
 /** Pixels between the points along which a label may stand. */
 const SAMPLE_PX = 6;
 
@@ -122,13 +122,14 @@ const labels = (panorama: Panorama, worst: PanoramaLine, top: number): Layer[] =
     const line = sampled(l);
     return { text, line, near: highest(line, (p) => -p[1]) };
   };
+  const several = panorama.profiles.length > 1;
+  const worstName = shorten(`worst point: ${oneLine(worst.name) || 'unnamed'}`, WORST_ROOM, LABEL_SIZE);
+  // The longest name first, while there is most room.
   const wanted = [
+    ...(several ? [labelOfLine(worst, worstName)] : []),
     ...panorama.paths.filter((p) => p.pieces.length > 0).map((p) => labelOfLine(p, oneLine(p.name))),
-    ...(panorama.profiles.length > 1
-      ? [labelOfLine(worst, shorten(`worst point: ${oneLine(worst.name) || 'unnamed'}`, WORST_ROOM, LABEL_SIZE))]
-      : []),
-  ]; // biome-ignore format: a list
-  const rest = panorama.profiles.filter((p) => p !== worst || panorama.profiles.length === 1).map(sampled);
+  ];
+  const rest = panorama.profiles.filter((p) => p !== worst || !several).map(sampled);
   const boxes = placeOnLines(wanted, [...wanted.map((w) => w.line), ...rest], LABEL_SIZE, {
     left: 2,
     right: width - 2,

@@ -80,14 +80,16 @@ const headline = ({ mounts }: Comparison): string => {
   const [high, low] = [percentSize(most.shading_fraction), percentSize(least.shading_fraction)];
   if (high === low)
     return `The skyline takes ${high} of the light of ${lit.length > 1 ? 'every mount' : named(most)}`;
-  return `The skyline takes most from ${named(most)}, ${high} of its light, and least from ${named(least)}, ${low}`;
+  return `The skyline takes most from ${named(most)}, ${high} of its light, least from ${named(least)}, ${low}`;
 };
 
 /** What the worst of several points loses. */
 const worstSentence = ({ mounts }: Comparison, { profiles, worst_point }: SkylineResult): string => {
   const lit = mounts.filter((m) => m.irradiation_kwh_m2 > 0);
   if (profiles.length < 2 || lit.length === 0) return '';
-  const most = highest(lit, (m) => m.shading_worst_point);
+  // The point is worst by the sky that it sees; a tracker may lose more elsewhere.
+  const most = highest(lit, (m) => m.shading_worst_point - m.shading_fraction);
+  if (most.shading_worst_point - most.shading_fraction < NOTHING) return '';
   return ` At ${pointName(worst_point)}, the worst of ${profiles.length} points, it takes ${percentSize(most.shading_worst_point)} from ${named(most)}.`;
 };
 

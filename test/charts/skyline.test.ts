@@ -87,7 +87,7 @@ test('names stand on their lines, clear of other lines and of each other where t
   const bounds = { left: 0, right: 590, top: 0, bottom: 290 };
   const boxes = placeOnLines(lines.map((l) => ({ text: '21 March', line: l, near: l[30] })), lines, 12, bounds); // biome-ignore format: short
   expect(boxes.map((b) => b.x)).toEqual([300, 300]);
-  for (const [i, b] of boxes.entries()) expect(lines[i][0][1] - (b.y + b.halfHeight)).toBe(4);
+  for (const [i, b] of boxes.entries()) expect(lines[i][0][1] - (b.y + b.halfHeight)).toBe(3);
   // A line close above drives the name below its own.
   const crowded = [flat(100), flat(88)];
   const [below] = placeOnLines(
@@ -96,7 +96,7 @@ test('names stand on their lines, clear of other lines and of each other where t
     12,
     bounds,
   );
-  expect(below.y - below.halfHeight).toBe(104);
+  expect(below.y - below.halfHeight).toBe(103);
 });
 
 test('the box of the reading errors is a sector, cut at flat and upright, a ring where any azimuth will do', () => {

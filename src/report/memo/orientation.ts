@@ -53,7 +53,8 @@ const howToRead = (c: Comparison): string =>
     : 'Shading is the share of the light on the front over the year that the skyline takes: of the sun, of the bright ring round it ' +
       'and of the sky. TSRF is TOF times what the shading leaves.' +
       (hasSeveralPoints(c)
-        ? ' Where no point is named, shading is the mean over the points of the array.'
+        ? ' Where no point is named, shading is the mean over the points of the array; the worst point is the one whose skyline takes most of an ' +
+          'even sky, and a tracker may lose more elsewhere.'
         : '')) +
   (c.mounts.some((m) => m.orientation_factor === null)
     ? ` ${UNKNOWN}: a tracker has no one orientation, so neither factor applies to it.`
