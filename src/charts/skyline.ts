@@ -87,10 +87,9 @@ const headline = ({ mounts }: Comparison): string => {
 const worstSentence = ({ mounts }: Comparison, { profiles, worst_point }: SkylineResult): string => {
   const lit = mounts.filter((m) => m.irradiation_kwh_m2 > 0);
   if (profiles.length < 2 || lit.length === 0) return '';
-  // The point is worst by the sky that it sees; a tracker may lose more elsewhere.
   const most = highest(lit, (m) => m.shading_worst_point - m.shading_fraction);
   if (most.shading_worst_point - most.shading_fraction < NOTHING) return '';
-  return ` At ${pointName(worst_point)}, the worst of ${profiles.length} points, it takes ${percentSize(most.shading_worst_point)} from ${named(most)}.`;
+  return ` At ${pointName(most.worst_point ?? worst_point)}, the worst of ${profiles.length} points for it, it takes ${percentSize(most.shading_worst_point)} from ${named(most)}.`;
 };
 
 const figures = ({ mounts }: Comparison, { profiles, sun_paths }: SkylineResult): string => {

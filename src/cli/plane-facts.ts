@@ -27,7 +27,7 @@ const worstMonth = ({ peak_sun_hours_per_day: { months } }: PlaneFacts) => {
 /** What `trackworth plane` tells, key for key what its `--json` prints: fields may be added, never renamed. */
 export const planeReport = (study: Study, raw: RawYear, mountId: string, survey: SiteSurvey) => {
   const facts = planeFacts(study, raw, mountId, survey);
-  const { profiles = [], worst = null } = survey.skyline ?? {};
+  const { profiles = [] } = survey.skyline ?? {};
   return {
     schema: 'trackworth-plane-1',
     mount: mountId,
@@ -39,7 +39,6 @@ export const planeReport = (study: Study, raw: RawYear, mountId: string, survey:
     worst_month: worstMonth(facts),
     /** Points of the array with a skyline of their own; 0 where the horizon is open. */
     skyline_points: profiles.length,
-    worst_point: profiles.length > 1 && worst ? worst.name : null,
     cautions: cautionsOf(study, mountId),
   };
 };

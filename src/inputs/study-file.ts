@@ -25,7 +25,7 @@ export interface StudyBearing extends North {
 export interface MountReadings {
   readonly bearing: StudyBearing | null;
   /** Tilt and its reading error, and the reading as written (`3:12`, `rise 4 ft, run 12 ft`). */
-  readonly slope: (Slope & { readonly written: string }) | null;
+  readonly slope: (Slope & { readonly written: string; readonly riseAndRun: boolean }) | null;
 }
 
 /** One skyline, seen from one point of the array. Exactly one of `file`, `points` and `obstacles` is given. */

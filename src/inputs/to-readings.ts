@@ -37,7 +37,8 @@ const slopeOf = (raw: RawSlope): MountReadings['slope'] => {
   if (reading) {
     const { tiltDeg, written } = reading;
     const errorDeg = error?.unit === '%' ? tiltErrorOfGrade(tiltDeg, error.size) : (error?.size ?? null);
-    return { tiltDeg, errorDeg, written: withError(written, error) };
+    // `3:12` is a rise over a run as well, however it is written.
+    return { tiltDeg, errorDeg, written: withError(written, error), riseAndRun: /[:/]/.test(written) };
   }
   if (!rise || !run) return null;
   const metres = (length: WrittenLength | undefined) => length?.lengthM ?? null;
@@ -51,7 +52,7 @@ const slopeOf = (raw: RawSlope): MountReadings['slope'] => {
     `rise ${withError(rise.written, rise_error)}`,
     `run ${withError(run.written, run_error)}`,
   ].join(', ');
-  return { ...slopeOfRiseRun(lengths), written };
+  return { ...slopeOfRiseRun(lengths), written, riseAndRun: true };
 };
 
 /** What was read on site for one mount; null where nothing was. */

@@ -21,15 +21,11 @@ export const worstFirst = (limits: readonly Limit[]): Limit[] =>
 export const limitsOf = (mount: MountResult, bound: Limit['bound']): Limit[] =>
   worstFirst(mount.limits.filter((limit) => limit.bound === bound));
 
-/** The detail of a programme's limit holds both figures, as printed everywhere: `71.2 % where at least 75 % is asked`. */
-const SHORTFALL = /^(\d+(?:\.\d+)?) % where at least (\d+(?:\.\d+)?) % /;
-
 /** ` by 0.90 m`, ` by 3.8 points`; nothing where the results do not say by how much. */
-const byHowMuch = ({ bound, excess_m, detail }: Limit): string => {
-  if (bound === 'most') return excess_m === null ? '' : ` by ${formatNumber(excess_m, 2)} m`;
-  const found = SHORTFALL.exec(detail);
-  if (!found) return '';
-  const points = formatNumber(Number(found[2]) - Number(found[1]), 1);
+const byHowMuch = ({ bound, value, asked }: Limit): string => {
+  if (value === null || asked === null) return '';
+  if (bound === 'most') return ` by ${formatNumber(value - asked, 2)} m`;
+  const points = formatNumber(100 * (asked - value), 1);
   return points === '0.0' ? ' by under 0.1 points' : ` by ${points} points`;
 };
 

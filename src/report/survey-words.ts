@@ -16,18 +16,15 @@ export const angleWords = (deg: number | null, errorDeg: number | null): string 
 /** True where the array is seen from several points, of which one is worst. */
 export const hasSeveralPoints = (c: Comparison): boolean => (c.skyline?.profiles.length ?? 0) > 1;
 
-const SLOPE_BY_RISE_AND_RUN = /^slope\b.*(?:\brise\b|\brun\b|\d\s*(?::|\/|in)\s*\d)/;
-
 /** What to mind where angles were read on site. That declination is applied already stands beside the readings, once. */
 export const cautionsOfSurvey = (c: Comparison): string[] => {
   const read = surveyed(c);
-  const compass =
-    c.declinations.length > 0 || read.some((m) => m.readings.some((r) => r.startsWith('bearing')));
+  const compass = c.declinations.length > 0 || read.some((m) => m.measured_with.includes('compass'));
   if (read.length === 0 && !compass && c.skyline === null) return [];
   return surveyCautions({
     compass,
     roof: read.some((m) => m.kind === 'roof-plane'),
-    riseAndRun: read.some((m) => m.readings.some((r) => SLOPE_BY_RISE_AND_RUN.test(r))),
+    riseAndRun: read.some((m) => m.measured_with.includes('rise and run')),
     skyline: c.skyline !== null,
   }).filter((text) => text !== SURVEY_CAUTIONS.declinationOnce);
 };

@@ -74,9 +74,12 @@ export interface OrientationMapResult {
   irradiation_kwh_m2: number[][];
 }
 
+export type MeasuredWith = 'compass' | 'map bearing' | 'rise and run' | 'angle';
+
 export interface SkylineResult {
   /** One for each point of the array, straight lines between the points given; true azimuths 0..360. */
   profiles: { name: string; azimuths_deg: number[]; elevations_deg: number[]; sky_blocked: number }[];
+  /** The point that sees least of the sky. */
   worst_point: string;
   /** The sun's paths on the solstices and an equinox: true azimuth and elevation, every ten minutes while it is up. */
   sun_paths: { name: string; azimuths_deg: number[]; elevations_deg: number[] }[];
@@ -102,11 +105,14 @@ export interface MountResult {
   shading_fraction: number;
   /** The same by month; null in a month without light. */
   shading_monthly: (number | null)[];
-  /** The same at the worst of several points of the array. */
+  /** The same at the point of the array where this mount loses most, and that point's name where there are several. */
   shading_worst_point: number;
+  worst_point: string | null;
   /** TOF times (1 - shading), and the same at the worst point of the array; null for trackers. */
   tsrf: number | null;
   tsrf_worst_point: number | null;
+  /** How the angles were read on site; empty where the study gives them outright. */
+  measured_with: MeasuredWith[];
   /** The readings as written, and how the angles follow from them. */
   readings: string[];
   survey_steps: string[];
@@ -158,6 +164,10 @@ export interface MountResult {
     bound: 'most' | 'least';
     status: LimitStatus;
     detail: string;
+    /** What the mount has and what the limit is: metres for lengths, fractions for factors; null where not checked. */
+    value: number | null;
+    asked: number | null;
+    /** `value` less `asked` for lengths; null for factors. */
     excess_m: number | null;
   }[];
 }

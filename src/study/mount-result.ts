@@ -63,19 +63,22 @@ export type Orientation = Pick<
   | 'shading_fraction'
   | 'shading_monthly'
   | 'shading_worst_point'
+  | 'worst_point'
   | 'tsrf'
   | 'tsrf_worst_point'
+  | 'measured_with'
   | 'readings'
   | 'survey_steps'
 >;
 
 /** How well a plane is turned to the light, what the skyline takes, and how that was read. */
 export const orientationOf = (run: MountRun, { study, sun, sky, map }: Setting): Orientation => {
-  const { geometry, survey, shadingAtWorst } = run;
+  const { geometry, survey, worstPoint } = run;
   const { irradiationKwhM2, irradiationMonthlyKwhM2, pastSkylineMonthlyKwhM2 } =
     run.delivered[study.sky.model];
   const past = pastSkylineMonthlyKwhM2.reduce((sum, month) => sum + month, 0);
   const shading = shadingOf(irradiationKwhM2, past);
+  const atWorst = worstPoint?.shading ?? shading;
   const [tiltErrorDeg, azimuthErrorDeg] = [survey?.tiltErrorDeg ?? null, survey?.azimuthErrorDeg ?? null];
   const fixed = 'tiltDeg' in geometry ? geometry : null;
   const maximum = map.best.irradiationKwhM2;
@@ -90,9 +93,11 @@ export const orientationOf = (run: MountRun, { study, sun, sky, map }: Setting):
     shading_monthly: irradiationMonthlyKwhM2.map((open, m) =>
       open > 0 ? shadingOf(open, pastSkylineMonthlyKwhM2[m]) : null,
     ),
-    shading_worst_point: shadingAtWorst,
+    shading_worst_point: atWorst,
+    worst_point: worstPoint?.name ?? null,
     tsrf: factor === null ? null : factor * (1 - shading),
-    tsrf_worst_point: factor === null ? null : factor * (1 - shadingAtWorst),
+    tsrf_worst_point: factor === null ? null : factor * (1 - atWorst),
+    measured_with: [...(survey?.measuredWith ?? [])],
     readings: [...(survey?.readings ?? [])],
     survey_steps: [...(survey?.steps ?? [])],
   };

@@ -35,8 +35,8 @@ export interface MountRun {
   readonly chain: ChainSpec;
   readonly arrayHeightM: number;
   readonly survey: MountSurvey | null;
-  /** Share of the open light that the skyline takes at the worst point of the array. */
-  readonly shadingAtWorst: number;
+  /** Where the array loses most to the skyline, if it was read from several points, and the share of open light lost there. */
+  readonly worstPoint: { readonly name: string; readonly shading: number } | null;
   readonly delivered: Readonly<Record<SkyModel, Delivered>>;
 }
 
@@ -86,18 +86,23 @@ const runMount = (
   for (const model of ALL_MODELS) delivered[model] = deliver(setting.skies[model], views, chain, stuck);
   const gcr = 'rows' in geometry ? (geometry.rows?.gcr ?? null) : null;
   const survey = setting.survey.mounts.get(mount.id) ?? null;
-  const shadingAtWorst = worstShading(setting, views, pointing);
-  return { mount, geometry, gcr, views, stuck, chain, arrayHeightM, survey, shadingAtWorst, delivered };
+  const worstPoint = worstPointOf(setting, views, pointing);
+  return { mount, geometry, gcr, views, stuck, chain, arrayHeightM, survey, worstPoint, delivered };
 };
 
-const worstShading = (
-  { sun, sky, worstShade, shade }: Setting,
-  views: PlaneViews,
+const worstPointOf = (
+  { sun, sky, pointShades }: Setting,
+  open: PlaneViews,
   pointing: Pointing,
-): number => {
-  if (!worstShade) return 0;
-  const atWorst = worstShade === shade ? views : planeViews(sun, pointing, worstShade);
-  return shadingOf(yearlySum(lightThrough(sky, views.open)), yearlySum(lightThrough(sky, atWorst.skyline)));
+): MountRun['worstPoint'] => {
+  const openLight = yearlySum(lightThrough(sky, open.open));
+  let worst: MountRun['worstPoint'] = null;
+  for (const { name, shade } of pointShades) {
+    const past = yearlySum(lightThrough(sky, planeViews(sun, pointing, shade).skyline));
+    const shading = shadingOf(openLight, past);
+    if (!worst || shading > worst.shading) worst = { name, shading };
+  }
+  return worst;
 };
 
 /** Share of the open light that does not come past the skyline. */

@@ -54,6 +54,8 @@ const atLeast = (
     bound: 'least',
     status,
     detail: `${percent(value)} where at least ${percent(least)} is asked${range}`,
+    value,
+    asked: least,
     excess_m: null,
   };
 };

@@ -19,6 +19,8 @@ export interface PlaneFacts {
   readonly orientation_factor_band: { readonly low: number; readonly high: number } | null;
   readonly shading_fraction: number;
   readonly shading_worst_point: number;
+  /** Where the skyline was read from several points of the array: the one where the plane loses most. */
+  readonly worst_point: string | null;
   /** TOF times (1 - shading). */
   readonly tsrf: number;
   readonly tsrf_worst_point: number;
@@ -68,6 +70,7 @@ export const planeFacts = (
     orientation_factor_band: o.orientation_factor_band,
     shading_fraction: o.shading_fraction,
     shading_worst_point: o.shading_worst_point,
+    worst_point: o.worst_point,
     tsrf: o.tsrf as number,
     tsrf_worst_point: o.tsrf_worst_point as number,
     peak_sun_hours_per_day: {

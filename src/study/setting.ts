@@ -33,8 +33,8 @@ export interface Setting {
   readonly survey: SiteSurvey;
   /** What the skyline takes, all points of the array together; null: open. */
   readonly shade: SkylineShade | null;
-  /** The same at the worst point alone; the very same object where there is one point. */
-  readonly worstShade: SkylineShade | null;
+  /** The same for each point of the array alone, by name; none where there is only one. */
+  readonly pointShades: readonly { readonly name: string; readonly shade: SkylineShade }[];
   /** A level plane: where a dead tracker lies. Level rows neither shade nor mask each other, so it serves them all. */
   readonly flat: PlaneViews;
 }
@@ -62,8 +62,9 @@ export const settingOf = (study: Study, raw: RawYear, survey: SiteSurvey): Setti
   const sky = skies[study.sky.model];
   const map = orientationMap(sun, sky, year.place.latitudeDeg);
   const shade = survey.skyline && skylineShade(sun, survey.skyline.profiles);
-  const several = survey.skyline && survey.skyline.profiles.length > 1;
-  const worstShade = survey.skyline && several ? skylineShade(sun, [survey.skyline.worst]) : shade;
+  const profiles = survey.skyline?.profiles ?? [];
+  const pointShades =
+    profiles.length < 2 ? [] : profiles.map((p) => ({ name: p.name, shade: skylineShade(sun, [p]) }));
   const flat = planeViews(sun, pointFixed(sun, 0, 180, null), shade);
   return {
     study,
@@ -76,7 +77,7 @@ export const settingOf = (study: Study, raw: RawYear, survey: SiteSurvey): Setti
     array: arrayOf(study.array),
     survey,
     shade,
-    worstShade,
+    pointShades,
     flat,
   };
 };

@@ -1,5 +1,11 @@
 import type { MountReadings, Study, StudyBearing, StudyMount, StudySkyline } from '../inputs/index.ts';
-import { compassWords, type Finding, type Problem, TrackworthError } from '../shared/index.ts';
+import {
+  compassWords,
+  type Finding,
+  type MeasuredWith,
+  type Problem,
+  TrackworthError,
+} from '../shared/index.ts';
 import {
   checkedSkyline,
   type DeclinationMistakes,
@@ -25,6 +31,7 @@ export interface MountSurvey {
   /** Reading errors, either way, degrees; null where not given. */
   readonly azimuthErrorDeg: number | null;
   readonly tiltErrorDeg: number | null;
+  readonly measuredWith: readonly MeasuredWith[];
   /** The raw readings as the user wrote them, one line each. */
   readonly readings: readonly string[];
   /** How the angles follow from them, each with its sum written out. */
@@ -129,6 +136,10 @@ const surveyMount = async (
       azimuthDeg: plane ? plane.azimuthDeg : null,
       azimuthErrorDeg: plane ? plane.errorDeg : null,
       tiltErrorDeg: slope ? slope.errorDeg : null,
+      measuredWith: [
+        ...(bearing ? [bearing.north === 'magnetic' ? ('compass' as const) : ('map bearing' as const)] : []),
+        ...(slope ? [slope.riseAndRun ? ('rise and run' as const) : ('angle' as const)] : []),
+      ],
       readings: [...(bearing ? [bearingWritten(bearing)] : []), ...(slope ? [`slope ${slope.written}`] : [])],
       steps: [
         ...(plane ? plane.steps : []),

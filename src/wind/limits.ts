@@ -43,7 +43,15 @@ export const checkLimits = (
   const valueM = roof ? edge.aboveRoofM : edge.aboveGroundM;
   const limitM = (roof ? limits?.roofProjectionM : limits?.heightM) ?? null;
   const notChecked = (why: string): LimitResult[] => [
-    { name, bound: 'most', status: 'not_checked', detail: `not checked: ${why}`, excess_m: null },
+    {
+      name,
+      bound: 'most',
+      status: 'not_checked',
+      value: null,
+      asked: null,
+      detail: `not checked: ${why}`,
+      excess_m: null,
+    },
   ];
   if (limitM === null) {
     return notChecked(`the study gives no wind.limits.${roof ? 'roof_projection' : 'height'}`);
@@ -60,6 +68,8 @@ export const checkLimits = (
       bound: 'most',
       status,
       detail: detailOf(status, valueM, limitM, readingErrorM),
+      value: valueM,
+      asked: limitM,
       excess_m: valueM - limitM,
     },
   ];

@@ -8,6 +8,8 @@ const BROKEN = {
   bound: 'most',
   status: 'broken',
   detail: 'exceeds 3 m by 0.9 m',
+  value: 3.9,
+  asked: 3,
   excess_m: 0.9,
 } as const;
 const UNCHECKED = {
@@ -15,6 +17,8 @@ const UNCHECKED = {
   bound: 'most',
   status: 'not_checked',
   detail: 'not checked: slant is blank',
+  value: null,
+  asked: null,
   excess_m: null,
 } as const;
 const ground = mount({ id: 'ground', cost: 0.109 });

@@ -118,7 +118,7 @@ test('the title of the skyline tells who loses most and least, with the worst of
   expect(chart('one angle all round', 'skyline').title).toBe('The skyline takes 2.1\u00A0% of the light of ground');
   expect(chart('open and dark', 'skyline').title).toBe('There is no light for the skyline to take');
   // The fixture's worst point loses half as much again: 7.1 * 1.5 = 10.65.
-  expect(chart('six points', 'skyline').finding).toContain('At row 6, the worst of 6 points, it takes 11\u00A0% from Dual-axis mast.');
+  expect(chart('six points', 'skyline').finding).toContain('At row 6, the worst of 6 points for it, it takes 11\u00A0% from Dual-axis mast.');
   // Where no mount loses more there than over the whole array, nothing is claimed of it.
   const even = SKYLINES['six points']();
   const mounts = even.mounts.map((m) => ({ ...m, shading_worst_point: m.shading_fraction * 0.97 }));

@@ -56,6 +56,8 @@ const inventedSurvey = (m: InventedMount, tof: number | null, season: number[] |
     shading_fraction: shading,
     shading_monthly: SHAPE.map((_, i) => season && shading / season[i]),
     shading_worst_point: shading * 1.5,
+    worst_point: null,
+    measured_with: [],
     tsrf: tsrf(shading),
     tsrf_worst_point: tsrf(shading * 1.5),
     readings: [],

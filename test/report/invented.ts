@@ -49,6 +49,8 @@ const NOT_SURVEYED = {
   shading_fraction: 0,
   shading_monthly: MONTH_NAMES.map(() => 0),
   shading_worst_point: 0,
+  worst_point: null,
+  measured_with: [],
   readings: [],
   survey_steps: [],
 };
@@ -125,6 +127,8 @@ export const inventedMount = (m: Invented): MountResult => {
         bound: 'most',
         status: 'not_checked',
         detail: 'not checked: slant and lower_edge are blank',
+        value: null,
+        asked: null,
         excess_m: null,
       },
     ],
@@ -146,16 +150,28 @@ export const invented = (): Comparison => {
       bound: 'most',
       status: 'kept',
       detail: 'within: 0.135 of 0.254 m',
+      value: 0.135,
+      asked: 0.254,
       excess_m: null,
     },
   ];
   mounts[3].limits = [
-    { name: 'height', bound: 'most', status: 'broken', detail: 'exceeds 3 m by 0.9 m', excess_m: 0.9 },
+    {
+      name: 'height',
+      bound: 'most',
+      status: 'broken',
+      detail: 'exceeds 3 m by 0.9 m',
+      value: 3.9,
+      asked: 3,
+      excess_m: 0.9,
+    },
     {
       name: 'roof projection',
       bound: 'most',
       status: 'not_checked',
       detail: 'not checked: not on a roof',
+      value: null,
+      asked: null,
       excess_m: null,
     },
   ];
@@ -399,6 +415,7 @@ export const inventedSurveyed = (): Comparison => {
       ...m,
       shading_fraction: shading,
       shading_worst_point: worst,
+      worst_point: 'east row',
       shading_monthly: MONTH_NAMES.map((_, month) => (month === 11 ? null : shading / SEASON[month])),
       tsrf: tof === null ? null : tof * (1 - shading),
       tsrf_worst_point: tof === null ? null : tof * (1 - worst),
@@ -413,6 +430,8 @@ export const inventedSurveyed = (): Comparison => {
       bound: 'least',
       status: 'kept',
       detail: '99.9 % where at least 75 % is asked',
+      value: 0.999,
+      asked: 0.75,
       excess_m: null,
     },
     {
@@ -420,6 +439,8 @@ export const inventedSurveyed = (): Comparison => {
       bound: 'least',
       status: 'kept',
       detail: '96.7 % where at least 75 % is asked',
+      value: 0.967,
+      asked: 0.75,
       excess_m: null,
     },
   ];
@@ -434,12 +455,13 @@ export const inventedSurveyed = (): Comparison => {
     tsrf: 0.712 * (1 - 0.034),
     tsrf_worst_point: 0.712 * (1 - 0.051),
     tilt_basis: 'given',
+    measured_with: ['compass', 'rise and run'],
     readings: [`bearing 150 magnetic, taken facing, dated ${READ_ON}, error 5 deg`, 'slope 3:12'],
     survey_steps: ['150 + 16 E = 166 true', 'faces south-south-east', '3:12 = 25 % = 14 degrees, +- 2'],
     limits: [
-      { name: 'roof projection', bound: 'most', status: 'kept', detail: 'within: 0.135 of 0.254 m', excess_m: null },
-      { name: 'TOF', bound: 'least', status: 'broken', detail: '71.2 % where at least 75 % is asked, 70.3 % to 72.3 % within the reading errors', excess_m: null },
-      { name: 'TSRF', bound: 'least', status: 'within_reading_error', detail: '67.6 % where at least 68 % is asked, 66.7 % to 68.6 % within the reading errors', excess_m: null },
+      { name: 'roof projection', bound: 'most', status: 'kept', detail: 'within: 0.135 of 0.254 m', value: 0.135, asked: 0.254, excess_m: null },
+      { name: 'TOF', bound: 'least', status: 'broken', detail: '71.2 % where at least 75 % is asked, 70.3 % to 72.3 % within the reading errors', value: 0.712, asked: 0.75, excess_m: null },
+      { name: 'TSRF', bound: 'least', status: 'within_reading_error', detail: '67.6 % where at least 68 % is asked, 66.7 % to 68.6 % within the reading errors', value: 0.676, asked: 0.68, excess_m: null },
     ],
   }; // biome-ignore format: a limit a line
   const points = [[0, 4], [100, 17], [180, 3], [262, 22.25], [360, 4]]; // biome-ignore format: points

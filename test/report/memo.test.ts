@@ -224,8 +224,15 @@ test('factors and shading stand in one table, each month in another, and TSRF is
   const c = inventedSurveyed();
   const tables = tablesOf(memo(inventedSurveyed));
   const factors = tables.find(([head]) => head[1] === 'TOF')!;
-  expect(factors[3]).toEqual(['Barn roof', '71.2 % (70.3 to 72.3 %)', '3.4 %', '5.1 %', '68.8 %', '67.6 %']);
-  expect(factors[4]).toEqual(['Tracker', '—', '6.2 %', '9.4 %', '—', '—']);
+  expect(factors[3]).toEqual([
+    'Barn roof',
+    '71.2 % (70.3 to 72.3 %)',
+    '3.4 %',
+    '5.1 % at east row',
+    '68.8 %',
+    '67.6 %',
+  ]);
+  expect(factors[4]).toEqual(['Tracker', '—', '6.2 %', '9.4 % at east row', '—', '—']);
   const percent = (cell: string) => Number.parseFloat(cell) / 100;
   for (const row of factors.slice(2, 4)) {
     // Both are rounded to a tenth of a per cent.
@@ -237,7 +244,7 @@ test('factors and shading stand in one table, each month in another, and TSRF is
   expect(months[2]).toEqual(['Jan', ...c.mounts.map((m) => `${(100 * m.shading_monthly[0]!).toFixed(1)} %`)]);
   expect(months[13]).toEqual(['Dec', 'no light', 'no light', 'no light', 'no light']);
   const points = tables.find(([head]) => head[0] === 'Skyline seen from')!;
-  expect(points[3]).toEqual(['east row (worst point)', '33.4°', '262.0° (west)', '4.7 %']);
+  expect(points[3]).toEqual(['east row (least sky)', '33.4°', '262.0° (west)', '4.7 %']);
 });
 
 test('an open horizon is told as such, not as shading of 0', () => {
@@ -275,7 +282,7 @@ test('cautions of the survey follow what was read', () => {
   for (const part of ['Falls: reading a compass', 'Compass: keep away', 'Metal roof', 'Phone compass', 'Slope: the run', 'Skyline: take'])
     expect(cautions(inventedSurveyed())).toContain(part);
   const c = inventedSurveyed();
-  const open = { ...c, skyline: null, mounts: c.mounts.map((m) => ({ ...m, readings: m.readings.map((r) => r.replace('3:12', '14 deg')) })) };
+  const open = { ...c, skyline: null, mounts: c.mounts.map((m) => ({ ...m, measured_with: m.measured_with.filter((w) => w !== 'rise and run') })) };
   expect(cautions(open)).not.toMatch(/Skyline: take|Slope: the run/);
   expect(cautions({ ...invented(), skyline: c.skyline })).not.toContain('Compass');
 }); // biome-ignore format: a list

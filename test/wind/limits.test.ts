@@ -23,13 +23,29 @@ const limits = { heightM: 3, roofProjectionM: 0.254 };
 
 test('a height within its limit is kept, and the detail gives both in metres', () => {
   expect(checkLimits('ground-rack', ground(2.35), limits)).toEqual([
-    { name: 'height', status: 'kept', detail: 'within: 2.35 of 3 m', excess_m: expect.closeTo(-0.65, 12) },
+    {
+      name: 'height',
+      bound: 'most',
+      status: 'kept',
+      detail: 'within: 2.35 of 3 m',
+      value: 2.35,
+      asked: 3,
+      excess_m: expect.closeTo(-0.65, 12),
+    },
   ]);
 });
 
 test('a height over its limit is broken, and the detail says by how much', () => {
   expect(checkLimits('tracker', ground(3.9), limits)).toEqual([
-    { name: 'height', status: 'broken', detail: 'exceeds 3 m by 0.9 m', excess_m: expect.closeTo(0.9, 12) },
+    {
+      name: 'height',
+      bound: 'most',
+      status: 'broken',
+      detail: 'exceeds 3 m by 0.9 m',
+      value: 3.9,
+      asked: 3,
+      excess_m: expect.closeTo(0.9, 12),
+    },
   ]);
   expect(checkLimits('tracker', ground(3.001), limits)[0].detail).toBe('exceeds 3 m by 0.001 m');
 });
@@ -38,8 +54,11 @@ test('a roof array is held to its projection, not to the height of a building', 
   expect(checkLimits('roof', roof(0.135), limits)).toEqual([
     {
       name: 'roof projection',
+      bound: 'most',
       status: 'kept',
       detail: 'within: 0.14 of 0.25 m',
+      value: 0.135,
+      asked: 0.254,
       excess_m: expect.closeTo(-0.119, 12),
     },
   ]);

@@ -28,7 +28,12 @@ const factorColumns = (c: Comparison): Column[] => {
   const columns: (Column | null)[] = [
     ['TOF', factorWords],
     c.skyline && ['Shading, year', (m) => formatPercent(m.shading_fraction)],
-    several ? ['Shading at the worst point', (m) => formatPercent(m.shading_worst_point)] : null,
+    several
+      ? [
+          'Shading at the worst point',
+          (m) => `${formatPercent(m.shading_worst_point)} at ${md(m.worst_point ?? '') || 'unnamed point'}`,
+        ]
+      : null,
     ['TSRF', (m) => formatPercent(m.tsrf)],
     several ? ['TSRF at the worst point', (m) => formatPercent(m.tsrf_worst_point)] : null,
   ];
@@ -53,8 +58,7 @@ const howToRead = (c: Comparison): string =>
     : 'Shading is the share of the light on the front over the year that the skyline takes: of the sun, of the bright ring round it ' +
       'and of the sky. TSRF is TOF times what the shading leaves.' +
       (hasSeveralPoints(c)
-        ? ' Where no point is named, shading is the mean over the points of the array; the worst point is the one whose skyline takes most of an ' +
-          'even sky, and a tracker may lose more elsewhere.'
+        ? ' Where no point is named, shading is the mean over the points of the array; the worst point is the one where the mount loses most.'
         : '')) +
   (c.mounts.some((m) => m.orientation_factor === null)
     ? ` ${UNKNOWN}: a tracker has no one orientation, so neither factor applies to it.`
@@ -82,7 +86,7 @@ const pointTable = ({ profiles, worst_point }: SkylineResult): string =>
     profiles.map((p) => {
       const highest = p.elevations_deg.indexOf(Math.max(...p.elevations_deg));
       const azimuth = p.azimuths_deg[highest];
-      const worst = profiles.length > 1 && p.name === worst_point ? ' (worst point)' : '';
+      const worst = profiles.length > 1 && p.name === worst_point ? ' (least sky)' : '';
       return [
         (md(p.name) || 'unnamed point') + worst,
         `${formatNumber(p.elevations_deg[highest], 1)}°`,
