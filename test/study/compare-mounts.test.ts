@@ -124,7 +124,11 @@ mounts: [ { id: ground, kind: fixed-tilt }, { id: tracker, kind: single-axis } ]
   test('accepted as it is recommends, and keeps the finding as a warning', async () => {
     const c = await compare(study(', accept_clock: true'), movedBy(raw, 1));
     expect(c.advice.choice).not.toBeNull();
-    expect(c.weather.findings.find((f) => f.code === 'clock-shift')?.severity).toBe('warning');
+    const finding = c.weather.findings.find((f) => f.code === 'clock-shift');
+    expect(finding?.severity).toBe('warning');
+    expect(finding?.text).toMatch(/The study accepts the clock as it is\.$/);
+    // what the study has done already is not asked of it again
+    expect(finding?.fix).not.toMatch(/accept_clock: true/);
   });
 });
 
