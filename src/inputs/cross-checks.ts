@@ -45,6 +45,22 @@ const drives = (mounts: readonly unknown[]): Fault[] =>
     ];
   });
 
+/** On sloping ground the axis follows the ground, so its tilt is not a second key. */
+const axisAndGround = (mounts: readonly unknown[]): Fault[] =>
+  mounts.flatMap((mount, i): Fault[] =>
+    rawAt(mount, ['ground']) === undefined || rawAt(mount, ['axis', 'tilt']) === undefined
+      ? []
+      : [
+          {
+            code: 'given-twice',
+            path: ['mounts', i, 'axis', 'tilt'],
+            expected: 'one of axis.tilt and ground',
+            found: 'both',
+            fix: 'Remove axis.tilt: it follows from the ground and the azimuth of the axis.',
+          },
+        ],
+  );
+
 const asWhole = (raw: unknown): number => {
   const value = typeof raw === 'string' ? Number.parseFloat(raw) : raw;
   return typeof value === 'number' ? value : Number.NaN;
@@ -137,6 +153,7 @@ export const crossFaults = (raw: unknown, at: (path: Path) => Position): Fault[]
   return [
     ...twins(mounts, at),
     ...drives(mounts),
+    ...axisAndGround(mounts),
     ...lateRenewals(raw, mounts),
     ...reference(raw, mounts),
     ...lightColumns(raw),

@@ -76,8 +76,11 @@ mounts:
 #    cost: { capital_per_kw: 1700, upkeep_per_kw: 15 } # blank: mounts are ranked by energy
   - id: tracker
     kind: single-axis
-#    axis: { azimuth: 180, tilt: 0 } # the direction towards which a tilted axis falls. Blank: level, north-south
+#    axis: { azimuth: 180 } # a tilted axis falls that way: axis: { azimuth: 180, tilt: 5 }. Blank: level, north-south
+#    ground: { slope: 6 %, falls_toward: 200 } # which axis and rows follow, in place of axis tilt. Blank: level
+#    slope_limits: { along: 15 %, across: 10 % } # the steepest ground that the maker allows. Blank: not checked
     swing: 60         # greatest turn either way from flat, degrees (default 60)
+#    cloudy: track     # or flat: lie flat while the sky is overcast. Blank: track
     rows: { gcr: 0.40, low_sun: backtrack } # or shade: stay on the sun and take the shade of the next row
 #    slant: 2.4 m
 #    axis_height: 1.5 m # above ground

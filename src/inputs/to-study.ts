@@ -1,6 +1,12 @@
 import type { CostSpec } from '../cost/index.ts';
 import type { ArraySpec, DriveSpec } from '../energy/index.ts';
-import type { MountGeometry, MountLengths, RowSpec } from '../mounts/index.ts';
+import {
+  axisTiltOnSlope,
+  type MountGeometry,
+  type MountLengths,
+  type RowSpec,
+  type SingleAxis,
+} from '../mounts/index.ts';
 import type { TableColumn, TableColumns } from '../weather/index.ts';
 import type { WindSpec } from '../wind/index.ts';
 import type { RawMount } from './schema/mounts.ts';
@@ -25,6 +31,19 @@ const known = (angleDeg: number | undefined): number => {
   return angleDeg;
 };
 
+type RawSingleAxis = Extract<RawMount, { kind: 'single-axis' }>;
+
+/** What the ground says of a tracker on it: the tilt of its axis is never given beside it (checked before). */
+const onGround = ({ axis, ground, slope_limits }: RawSingleAxis): Partial<SingleAxis> => ({
+  ...(ground && {
+    axisTiltDeg: axisTiltOnSlope(ground.slope, ground.falls_toward, axis?.azimuth ?? 180),
+    ground: { slopeDeg: ground.slope, fallsTowardDeg: ground.falls_toward },
+  }),
+  ...(slope_limits && {
+    slopeLimits: { alongDeg: slope_limits.along ?? null, acrossDeg: slope_limits.across ?? null },
+  }),
+});
+
 const geometryOf = (mount: RawMount, readings: MountReadings | null): MountGeometry => {
   switch (mount.kind) {
     case 'roof-plane':
@@ -47,6 +66,8 @@ const geometryOf = (mount: RawMount, readings: MountReadings | null): MountGeome
         axisTiltDeg: mount.axis?.tilt ?? 0,
         swingDeg: mount.swing ?? DEFAULT_SWING_DEG,
         rows: rowsOf(mount.rows, 'backtrack'),
+        ...(mount.cloudy === 'flat' && { cloudy: mount.cloudy }),
+        ...onGround(mount),
       };
     case 'dual-axis':
       return { kind: mount.kind, rows: rowsOf(mount.rows, 'shade') };

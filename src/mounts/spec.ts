@@ -35,15 +35,34 @@ export interface FixedTilt {
   readonly rows: RowSpec | null;
 }
 
+/** Even ground on a slope. */
+export interface GroundSlope {
+  /** Steepness of the steepest way down, 0..90. */
+  readonly slopeDeg: number;
+  /** Azimuth of that way, 0..360 clockwise from true north. */
+  readonly fallsTowardDeg: number;
+}
+
+/** The steepest ground that a tracker's maker allows, 0..90 each way; null: not checked. */
+export interface SlopeLimits {
+  readonly alongDeg: number | null;
+  readonly acrossDeg: number | null;
+}
+
 export interface SingleAxis {
   readonly kind: 'single-axis';
   /** The direction towards which a tilted axis falls; 180 for a level north-south axis. */
   readonly axisAzimuthDeg: number;
-  /** Of the axis, 0..90. */
+  /** Of the axis, -90..90; below 0 it rises towards its azimuth. On sloping ground that of `axisTiltOnSlope`. */
   readonly axisTiltDeg: number;
   /** Greatest turn either way from lying flat, 0..90. */
   readonly swingDeg: number;
   readonly rows: RowSpec | null;
+  /** The ground that axis and rows follow; absent: level from row to row. */
+  readonly ground?: GroundSlope;
+  readonly slopeLimits?: SlopeLimits;
+  /** Lies flat under an overcast sky; absent: keeps to the sun behind the cloud. */
+  readonly cloudy?: 'flat';
 }
 
 export interface DualAxis {

@@ -164,10 +164,10 @@ export interface MountResult {
     bound: 'most' | 'least';
     status: LimitStatus;
     detail: string;
-    /** What the mount has and what the limit is: metres for lengths, fractions for factors; null where not checked. */
+    /** What the mount has and what the limit is: metres for lengths, fractions for factors and grades; null where not checked. */
     value: number | null;
     asked: number | null;
-    /** `value` less `asked` for lengths; null for factors. */
+    /** `value` less `asked` for lengths; null for factors and grades. */
     excess_m: number | null;
   }[];
 }

@@ -1,7 +1,7 @@
 import { breakEven, costOfEnergy, mountCost } from '../cost/index.ts';
 import { lightBySource } from '../energy/index.ts';
 import type { Study } from '../inputs/index.ts';
-import { isTracker, type MountGeometry } from '../mounts/index.ts';
+import { crossAxisTiltOf, isTracker, type MountGeometry, type SingleAxis } from '../mounts/index.ts';
 import {
   type ArraySummary,
   MONTH_DAYS,
@@ -9,10 +9,16 @@ import {
   type MountResult,
   type SkyModel,
 } from '../shared/index.ts';
-import { type EdgeGeometry, screenWind, steepestChordTiltDeg } from '../wind/index.ts';
+import {
+  type EdgeGeometry,
+  screenWind,
+  steepestChordAboveSlopeDeg,
+  steepestChordTiltDeg,
+} from '../wind/index.ts';
 import { type MountRun, shadingOf } from './mount-run.ts';
 import { factorBand, programmeLimits } from './orientation.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
+import { slopeLimits } from './slope-limits.ts';
 
 /** Energy per kW of DC rating in the month that gives least a day. */
 export const worstMonth = (monthlyKwhPerKw: readonly number[]): MountResult['worst_month'] => {
@@ -26,6 +32,11 @@ const rowsInWords = ({ geometry, gcr }: MountRun): string => {
   return gcr === null ? 'no rows' : `rows at GCR ${gcr}`;
 };
 
+const steepestChordOf = (mount: SingleAxis): number =>
+  mount.ground
+    ? steepestChordAboveSlopeDeg(mount.swingDeg, crossAxisTiltOf(mount), mount.ground.slopeDeg)
+    : steepestChordTiltDeg(mount.swingDeg, mount.axisTiltDeg);
+
 /** Shapes a mount's lengths for the wind screen. */
 export const edgeGeometry = ({ mount, geometry }: MountRun, study: Study): EdgeGeometry => {
   const shape = {
@@ -36,8 +47,7 @@ export const edgeGeometry = ({ mount, geometry }: MountRun, study: Study): EdgeG
     },
     'single-axis': {
       arrangement: 'tracker',
-      steepestTiltDeg:
-        geometry.kind === 'single-axis' ? steepestChordTiltDeg(geometry.swingDeg, geometry.axisTiltDeg) : 0,
+      steepestTiltDeg: geometry.kind === 'single-axis' ? steepestChordOf(geometry) : 0,
     },
     'dual-axis': { arrangement: 'tracker', steepestTiltDeg: 90 },
   } as const;
@@ -181,7 +191,7 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
         ? null
         : cost.capitalPerKw - referenceCapital,
     wind: screened.wind,
-    limits: [...screened.limits, ...limitsOfProgramme(orientation, setting)],
+    limits: [...screened.limits, ...slopeLimits(geometry), ...limitsOfProgramme(orientation, setting)],
   };
 };
 
@@ -206,7 +216,9 @@ const STAGE_SOURCES: Record<
   rows: ({ geometry }) =>
     geometry.kind === 'dual-axis'
       ? 'shadows of a square field of masts; plain geometry, diffuse by assumption'
-      : 'beam by profile angle, sky and ground by crossed strings (Hottel & Sarofim 1967)',
+      : geometry.kind === 'single-axis' && geometry.ground
+        ? 'beam on sloping ground by Anderson & Mikofski 2020, eq. 32; sky and ground by crossed strings (Hottel & Sarofim 1967)'
+        : 'beam by profile angle, sky and ground by crossed strings (Hottel & Sarofim 1967)',
   incidence: () => 'Martin & Ruiz 2001, a_r 0.16',
   heat: ({ chain }) => chain.heatLoss.source,
   dirt: () => 'given',

@@ -6,8 +6,10 @@ import {
   lightThrough,
   OPEN_RACK,
   onRoof,
+  otherwiseIn,
   type PlaneViews,
   planeViews,
+  type SkylineShade,
 } from '../energy/index.ts';
 import type { StudyMount } from '../inputs/index.ts';
 import {
@@ -15,12 +17,14 @@ import {
   isTracker,
   type Pointing,
   pointMount,
+  pointSingleAxis,
   type ResolvedGeometry,
   resolveAngles,
 } from '../mounts/index.ts';
 import { type SkyModel, sinDeg, yearlySum } from '../shared/index.ts';
 import { bestAzimuthAtTilt, bestTiltFacing } from '../sky/index.ts';
 import { powerLawFactor } from '../wind/index.ts';
+import { overcastHours } from './overcast.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
 import type { MountSurvey } from './site-survey.ts';
 
@@ -30,7 +34,7 @@ export interface MountRun {
   readonly geometry: ResolvedGeometry;
   readonly gcr: number | null;
   readonly views: PlaneViews;
-  /** Trackers: the plane where a dead one lies. */
+  /** Trackers: the plane where a dead one lies, flat between its rows. */
   readonly stuck: PlaneViews | null;
   readonly chain: ChainSpec;
   readonly arrayHeightM: number;
@@ -78,27 +82,49 @@ const runMount = (
   pointing: Pointing,
   setting: Setting,
 ): MountRun => {
-  const views = planeViews(setting.sun, pointing, setting.shade);
-  const stuck = isTracker(geometry) ? setting.flat : null;
+  const viewsPast = lyingFlatWhenCloudy(geometry, pointing, setting);
+  const views = viewsPast(setting.shade);
+  const stuck = stuckViews(geometry, setting);
   const arrayHeightM = arrayHeight(mount, geometry, setting.study.site.roofHeightM);
   const chain = chainOf(setting, mount, arrayHeightM);
   const delivered = {} as Record<SkyModel, Delivered>;
   for (const model of ALL_MODELS) delivered[model] = deliver(setting.skies[model], views, chain, stuck);
   const gcr = 'rows' in geometry ? (geometry.rows?.gcr ?? null) : null;
   const survey = setting.survey.mounts.get(mount.id) ?? null;
-  const worstPoint = worstPointOf(setting, views, pointing);
+  const worstPoint = worstPointOf(setting, views, viewsPast);
   return { mount, geometry, gcr, views, stuck, chain, arrayHeightM, survey, worstPoint, delivered };
 };
 
-const worstPointOf = (
-  { sun, sky, pointShades }: Setting,
-  open: PlaneViews,
+/** Where a dead tracker lies: level, or flat along a tilted axis. */
+const stuckViews = (geometry: ResolvedGeometry, { sun, shade, flat }: Setting): PlaneViews | null => {
+  if (!isTracker(geometry)) return null;
+  return geometry.kind === 'single-axis' && (geometry.axisTiltDeg !== 0 || geometry.ground)
+    ? planeViews(sun, pointSingleAxis(sun, { ...geometry, swingDeg: 0 }), shade)
+    : flat;
+};
+
+/** What a mount's plane sees past a skyline, with the overcast hours of a `cloudy: flat` tracker spent lying flat. */
+const lyingFlatWhenCloudy = (
+  geometry: ResolvedGeometry,
   pointing: Pointing,
+  { sun, year }: Setting,
+): ((shade: SkylineShade | null) => PlaneViews) => {
+  const tracking = (shade: SkylineShade | null) => planeViews(sun, pointing, shade);
+  if (geometry.kind !== 'single-axis' || geometry.cloudy !== 'flat') return tracking;
+  const overcast = overcastHours(year);
+  const flat = pointSingleAxis(sun, { ...geometry, swingDeg: 0 });
+  return (shade) => otherwiseIn(overcast, tracking(shade), planeViews(sun, flat, shade));
+};
+
+const worstPointOf = (
+  { sky, pointShades }: Setting,
+  open: PlaneViews,
+  viewsPast: (shade: SkylineShade) => PlaneViews,
 ): MountRun['worstPoint'] => {
   const openLight = yearlySum(lightThrough(sky, open.open));
   let worst: MountRun['worstPoint'] = null;
   for (const { name, shade } of pointShades) {
-    const past = yearlySum(lightThrough(sky, planeViews(sun, pointing, shade).skyline));
+    const past = yearlySum(lightThrough(sky, viewsPast(shade).skyline));
     const shading = shadingOf(openLight, past);
     if (!worst || shading > worst.shading) worst = { name, shading };
   }

@@ -86,6 +86,26 @@ describe('text that is no YAML', () => {
   });
 });
 
+describe('the ground under a tracker', () => {
+  const TRACKER = (keys: string) => MOUNT(`kind: single-axis, ${keys}`);
+  test.each([
+    ['ground: ¦{ slope: 6 % }', 'ground.falls_toward', 'missing-key', 'nothing'],
+    ['ground: ¦{ falls_toward: 200 }', 'ground.slope', 'missing-key', 'nothing'],
+    ['ground: { slope: ¦70, falls_toward: 200 }', 'ground.slope', 'wrong-value', '70'],
+    ['ground: { slope: ¦400 %, falls_toward: 200 }', 'ground.slope', 'wrong-value', '"400 %"'],
+    ['ground: { slope: ¦-3, falls_toward: 200 }', 'ground.slope', 'wrong-value', '-3'],
+    ['ground: { slope: 6 %, falls_toward: ¦south }', 'ground.falls_toward', 'wrong-value', '"south"'],
+    ['ground: ¦6 %', 'ground', 'wrong-type', '"6 %"'],
+    ['ground: { slope: 6 %, falls_toward: 200 }, axis: { tilt: ¦5 }', 'axis.tilt', 'given-twice', 'both'],
+    ['slope_limits: { across: ¦steep }', 'slope_limits.across', 'wrong-value', '"steep"'],
+    ['slope_limits: { ¦cross: 10 % }', 'slope_limits.cross', 'unknown-key', 'cross'],
+  ])('%s', async (keys, field, code, found) => {
+    const problem = await onlyProblem(TRACKER(keys));
+    expect(problem).toMatchObject({ field: `mounts.m.${field}`, code });
+    expect(problem.found).toContain(found);
+  });
+});
+
 describe('values out of their range or form', () => {
   test.each([
     ['site: { latitude: ¦95 }', 'site.latitude', '95', 'from -90 to 90'],

@@ -297,6 +297,26 @@ mounts:
   expect(mounts[2].drive).toStrictEqual({ working: null, stuck: null, ownUse: 0.002 });
 });
 
+test('the tilt of an axis on sloping ground follows from the ground', async () => {
+  const { mounts } = await read(`weather: { file: a.epw }
+mounts:
+  - id: t
+    kind: single-axis
+    axis: { azimuth: 195 }
+    ground: { slope: 10 deg, falls_toward: 180 }
+    slope_limits: { along: 15 %, across: 5.7 }
+`);
+  expect(mounts[0].geometry).toStrictEqual({
+    kind: 'single-axis',
+    axisAzimuthDeg: 195,
+    axisTiltDeg: expect.closeTo(9.666, 3), // Anderson & Mikofski 2020, NREL/TP-5K00-76626, eq. 18
+    swingDeg: 60,
+    rows: null,
+    ground: { slopeDeg: 10, fallsTowardDeg: 180 },
+    slopeLimits: { alongDeg: expect.closeTo(8.5308, 4), acrossDeg: 5.7 }, // atan 0.15
+  });
+});
+
 test('anchors and aliases may share a group between mounts', async () => {
   const { mounts } = await read(`weather: { file: a.epw }
 mounts:

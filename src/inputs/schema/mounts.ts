@@ -1,10 +1,11 @@
 import * as z from 'zod/mini';
 import type { Convert } from '../convert.ts';
-import { azimuth, azimuthOrBest, swing, tilt, tiltOrBest } from '../fields/angles.ts';
+import { azimuth, azimuthOrBest, steepness, swing, tilt, tiltOrBest } from '../fields/angles.ts';
 import { hints } from '../fields/field.ts';
+import { choice } from '../fields/words.ts';
 import { mountParts } from './mount-parts.ts';
 import type { Present } from './present.ts';
-import { once } from './present.ts';
+import { once, wherePresent } from './present.ts';
 
 type Parts = ReturnType<typeof mountParts>;
 
@@ -59,13 +60,41 @@ const axis = (convert: Convert) =>
     })
     .register(hints, { description: 'The axis. Blank: level, north-south.' });
 
-const singleAxis = (convert: Convert, { common, trackerRows, slant, axisHeight, drive }: Parts) =>
+const ground = (convert: Convert) =>
+  z
+    .strictObject({
+      slope: steepness(convert, 'Steepness of the ground, straight down: a grade (6 %), degrees, a slope.'),
+      falls_toward: azimuth(convert, 'The way straight down: degrees clockwise from true north.'),
+    })
+    .register(hints, {
+      description:
+        'The ground that axis and rows follow; tilt of the axis and slope across it are worked out. Blank: level.',
+    });
+
+const slopeLimits = (convert: Convert) =>
+  z
+    .strictObject({
+      along: z.optional(steepness(convert, 'Steepest ground along the axis. Blank: not checked.')),
+      across: z.optional(steepness(convert, 'Steepest ground straight across the axis. Blank: not checked.')),
+    })
+    .register(hints, { description: "The maker's limits of the ground's slope. Blank: not checked." });
+
+const singleAxis = (
+  convert: Convert,
+  { common, trackerRows, slant, axisHeight, drive }: Parts,
+  has: Present,
+) =>
   z
     .strictObject({
       kind: z.literal('single-axis'),
       ...common,
       axis: z.optional(axis(convert)),
+      ground: wherePresent(has('ground'), () => z.optional(ground(convert))),
+      slope_limits: wherePresent(has('slope_limits'), () => z.optional(slopeLimits(convert))),
       swing: z.optional(swing(convert, 'Greatest turn either way from flat, degrees. Blank: 60.')),
+      cloudy: z.optional(
+        choice(['track', 'flat'], 'Under an overcast sky: keep to the sun (also if blank), or lie flat.'),
+      ),
       rows: trackerRows,
       slant,
       axis_height: axisHeight,
@@ -84,7 +113,7 @@ export const mountSchemas = (convert: Convert, has: Present) => {
   return {
     'roof-plane': once(() => roofPlane(convert, parts())),
     'fixed-tilt': once(() => fixedTilt(convert, parts())),
-    'single-axis': once(() => singleAxis(convert, parts())),
+    'single-axis': once(() => singleAxis(convert, parts(), has)),
     'dual-axis': once(() => dualAxis(parts())),
   };
 };
