@@ -2,6 +2,7 @@ import type { CostSpec } from '../cost/index.ts';
 import type { ArraySpec, DriveSpec } from '../energy/index.ts';
 import {
   axisTiltOnSlope,
+  type DualAxis,
   type MountGeometry,
   type MountLengths,
   type RowSpec,
@@ -44,6 +45,17 @@ const onGround = ({ axis, ground, slope_limits }: RawSingleAxis): Partial<Single
   }),
 });
 
+type RawMast = Extract<RawMount, { kind: 'dual-axis' | 'turntable' }>;
+
+/** Where a mast can face; what is blank is left out. */
+const reachOf = (mount: RawMast): Pick<DualAxis, 'turns' | 'elevation'> => ({
+  ...(mount.turns && { turns: { fromDeg: mount.turns.from, toDeg: mount.turns.to } }),
+  ...('elevation' in mount &&
+    mount.elevation && {
+      elevation: { lowestDeg: mount.elevation.lowest ?? 0, highestDeg: mount.elevation.highest ?? 90 },
+    }),
+});
+
 const geometryOf = (mount: RawMount, readings: MountReadings | null): MountGeometry => {
   switch (mount.kind) {
     case 'roof-plane':
@@ -70,7 +82,14 @@ const geometryOf = (mount: RawMount, readings: MountReadings | null): MountGeome
         ...onGround(mount),
       };
     case 'dual-axis':
-      return { kind: mount.kind, rows: rowsOf(mount.rows, 'shade') };
+      return { kind: mount.kind, rows: rowsOf(mount.rows, 'shade'), ...reachOf(mount) };
+    case 'turntable':
+      return {
+        kind: mount.kind,
+        planeTiltDeg: mount.tilt ?? 'best',
+        rows: rowsOf(mount.rows, 'shade'),
+        ...reachOf(mount),
+      };
   }
 };
 
@@ -83,7 +102,7 @@ const lengthsOf = (mount: RawMount): MountLengths => ({
 
 /** Every tracker has a drive, even where the study says nothing of it. */
 const driveOf = (mount: RawMount): DriveSpec | null =>
-  mount.kind === 'single-axis' || mount.kind === 'dual-axis'
+  mount.kind === 'single-axis' || mount.kind === 'dual-axis' || mount.kind === 'turntable'
     ? {
         working: mount.drive?.working ?? null,
         stuck: mount.drive?.stuck ?? null,

@@ -65,9 +65,35 @@ export interface SingleAxis {
   readonly cloudy?: 'flat';
 }
 
+/** Azimuths that a mast can face: clockwise from one to the other, each 0..360; from 300 to 60 passes north. */
+export interface TurnRange {
+  readonly fromDeg: number;
+  readonly toDeg: number;
+}
+
+/** How high a plane's normal can point, 0 (upright plane) to 90 (lying flat). */
+export interface ElevationRange {
+  readonly lowestDeg: number;
+  readonly highestDeg: number;
+}
+
 export interface DualAxis {
   readonly kind: 'dual-axis';
   readonly rows: RowSpec | null;
+  /** Absent: all round. */
+  readonly turns?: TurnRange;
+  /** Absent: from upright to flat. */
+  readonly elevation?: ElevationRange;
 }
 
-export type MountGeometry = RoofPlane | FixedTilt | SingleAxis | DualAxis;
+/** A plane that turns about an upright axis and keeps its tilt. */
+export interface Turntable {
+  readonly kind: 'turntable';
+  /** Held all year, 0..90; `best`: where it collects most in the year, turning. */
+  readonly planeTiltDeg: number | 'best';
+  readonly rows: RowSpec | null;
+  /** Absent: all round. */
+  readonly turns?: TurnRange;
+}
+
+export type MountGeometry = RoofPlane | FixedTilt | SingleAxis | DualAxis | Turntable;

@@ -47,6 +47,26 @@ const groundLine = ({ mount, geometry }: MountRun): Assumption[] => {
   ];
 };
 
+const reachLine = ({ mount, geometry, gcr }: MountRun): Assumption[] => {
+  if (geometry.kind !== 'dual-axis' && geometry.kind !== 'turntable') return [];
+  const elevation = geometry.kind === 'dual-axis' ? geometry.elevation : undefined;
+  const { turns } = geometry;
+  if (!turns && !elevation) return [];
+  const parts = [
+    ...(turns ? [`azimuth ${turns.fromDeg} to ${turns.toDeg}`] : []),
+    ...(elevation ? [`elevation ${elevation.lowestDeg} to ${elevation.highestDeg}`] : []),
+  ];
+  const shade =
+    turns && gcr !== null ? '; neighbours are taken to shade as if all faced the azimuth of the sun' : '';
+  return [
+    {
+      what: `reach of ${mount.id}`,
+      value: `faces ${parts.join(' and ')} degrees, as near to the sun as that allows${shade}`,
+      source: 'the study; least angle of incidence, Duffie & Beckman, eq. 1.6.3',
+    },
+  ];
+};
+
 const cloudyLine = ({ runs, year }: Counted): Assumption[] => {
   const flat = runs.filter(({ geometry }) => geometry.kind === 'single-axis' && geometry.cloudy === 'flat');
   if (flat.length === 0) return [];
@@ -128,7 +148,12 @@ export const assumptionsOf = (c: Counted): Assumption[] => {
       source: 'the study; band after Perez et al. 1986, from memory; the ground before it is taken as lit',
     });
   if (trackers.length > 0)
-    list.push(trackersLine(trackers), ...trackers.flatMap(groundLine), ...cloudyLine(c));
+    list.push(
+      trackersLine(trackers),
+      ...trackers.flatMap(groundLine),
+      ...trackers.flatMap(reachLine),
+      ...cloudyLine(c),
+    );
   if (study.array.given === false)
     list.push({ what: 'array', value: '1 kW of DC rating', source: 'the study gives no array' });
   if (study.finance.years !== null)

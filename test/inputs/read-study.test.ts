@@ -317,6 +317,32 @@ mounts:
   });
 });
 
+test('the reach of masts and the tilt of turntables arrive, and what is blank is left out', async () => {
+  const { mounts } = await read(`weather: { file: a.epw }
+mounts:
+  - { id: m, kind: dual-axis, turns: { from: 300, to: 60 deg }, elevation: { lowest: 15 } }
+  - { id: t, kind: turntable, tilt: 100 %, turns: { from: 60, to: 300 }, drive: { working: 90 %, stuck: equator } }
+  - { id: b, kind: turntable, rows: { gcr: 0.2 } }
+`);
+  expect(mounts.map(({ geometry }) => geometry)).toStrictEqual([
+    {
+      kind: 'dual-axis',
+      rows: null,
+      turns: { fromDeg: 300, toDeg: 60 },
+      elevation: { lowestDeg: 15, highestDeg: 90 },
+    },
+    {
+      kind: 'turntable',
+      planeTiltDeg: expect.closeTo(45, 9),
+      rows: null,
+      turns: { fromDeg: 60, toDeg: 300 },
+    },
+    { kind: 'turntable', planeTiltDeg: 'best', rows: { gcr: 0.2, lowSun: 'shade' } },
+  ]);
+  expect(mounts[1].drive).toStrictEqual({ working: 0.9, stuck: 'equator', ownUse: null });
+  expect(mounts[2].drive).toStrictEqual({ working: null, stuck: null, ownUse: null });
+});
+
 test('anchors and aliases may share a group between mounts', async () => {
   const { mounts } = await read(`weather: { file: a.epw }
 mounts:

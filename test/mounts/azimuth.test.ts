@@ -55,4 +55,9 @@ test('azimuth and tilt of a single-axis tracker give its angle of incidence, wha
 test('so do those of fixed planes and masts', () => {
   expect(worstMismatch({ kind: 'roof-plane', tiltDeg: 14, azimuthDeg: 166 })).toBeLessThan(1e-9);
   expect(worstMismatch({ kind: 'dual-axis', rows: null })).toBeLessThan(1e-6);
+  const limits = { turns: { fromDeg: 100, toDeg: 250 }, elevation: { lowestDeg: 20, highestDeg: 60 } };
+  expect(worstMismatch({ kind: 'dual-axis', rows: null, ...limits })).toBeLessThan(1e-9);
+  expect(worstMismatch({ kind: 'turntable', planeTiltDeg: 35, rows: null })).toBeLessThan(1e-9);
+  const north = { turns: { fromDeg: 300, toDeg: 60 } };
+  expect(worstMismatch({ kind: 'turntable', planeTiltDeg: 35, rows: null, ...north })).toBeLessThan(1e-9);
 });

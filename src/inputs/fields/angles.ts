@@ -22,6 +22,12 @@ const STEEPNESS: AngleRule = {
   example: '6 %',
   fix: 'Write a grade such as 6 %, an angle such as 3.4 deg, or a slope such as 1:12; 60 degrees is the most.',
 };
+const FACED: AngleRule = {
+  what: 'a height of the sun',
+  unit: 'deg',
+  range: { min: 0, max: 90 },
+  example: '15 deg',
+};
 const AZIMUTH: AngleRule = {
   what: 'a direction',
   unit: 'deg',
@@ -92,6 +98,9 @@ export const azimuthOrBest = (convert: Convert, description: string) =>
   field(wordsOrBest(AZIMUTH, description), (raw) =>
     orWord(raw, 'best', () => readQuantity(raw, AZIMUTH, convert)),
   );
+
+/** Elevation of the sun that a mast can face. */
+export const faced = (convert: Convert, description: string) => quantity(convert, { ...FACED, description });
 
 /** Greatest turn of a tracker either way from flat. */
 export const swing = (convert: Convert, description: string) => quantity(convert, { ...SWING, description });

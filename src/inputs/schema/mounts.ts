@@ -1,6 +1,6 @@
 import * as z from 'zod/mini';
 import type { Convert } from '../convert.ts';
-import { azimuth, azimuthOrBest, steepness, swing, tilt, tiltOrBest } from '../fields/angles.ts';
+import { azimuth, azimuthOrBest, faced, steepness, swing, tilt, tiltOrBest } from '../fields/angles.ts';
 import { hints } from '../fields/field.ts';
 import { choice } from '../fields/words.ts';
 import { mountParts } from './mount-parts.ts';
@@ -102,10 +102,62 @@ const singleAxis = (
     })
     .register(hints, { description: 'A tracker that turns about one axis.' });
 
-const dualAxis = ({ common, rows, slant, axisHeight, drive }: Parts) =>
+const turns = (convert: Convert) =>
   z
-    .strictObject({ kind: z.literal('dual-axis'), ...common, rows, slant, axis_height: axisHeight, drive })
+    .strictObject({
+      from: azimuth(convert, 'First azimuth that it can face: degrees clockwise from true north.'),
+      to: azimuth(convert, 'Last azimuth that it can face, clockwise from the first.'),
+    })
+    .register(hints, { description: 'The azimuths that it can face, clockwise. Blank: all round.' });
+
+const elevation = (convert: Convert) =>
+  z
+    .strictObject({
+      lowest: z.optional(
+        faced(convert, 'Lowest sun that it can face, degrees above the horizon. Blank: 0, standing upright.'),
+      ),
+      highest: z.optional(
+        faced(convert, 'Highest sun that it can face, degrees above the horizon. Blank: 90, lying flat.'),
+      ),
+    })
+    .register(hints, { description: 'How high it can face: 90 less its tilt. Blank: from upright to flat.' });
+
+const dualAxis = (convert: Convert, { common, rows, slant, axisHeight, drive }: Parts, has: Present) =>
+  z
+    .strictObject({
+      kind: z.literal('dual-axis'),
+      ...common,
+      turns: wherePresent(has('turns'), () => z.optional(turns(convert))),
+      elevation: wherePresent(has('elevation'), () => z.optional(elevation(convert))),
+      rows,
+      slant,
+      axis_height: axisHeight,
+      drive,
+    })
     .register(hints, { description: 'A tracker that faces the sun. Without rows it is a lone mast.' });
+
+const turntable = (
+  convert: Convert,
+  { common, rows, slant, axisHeight, turntableDrive }: Parts,
+  has: Present,
+) =>
+  z
+    .strictObject({
+      kind: z.literal('turntable'),
+      ...common,
+      tilt: z.optional(
+        tiltOrBest(
+          convert,
+          'Held all year: degrees from horizontal, a slope (3:12), a grade (25 %), or best (also if blank).',
+        ),
+      ),
+      turns: wherePresent(has('turns'), () => z.optional(turns(convert))),
+      rows,
+      slant,
+      axis_height: axisHeight,
+      drive: turntableDrive,
+    })
+    .register(hints, { description: 'A tracker that turns about an upright axis and keeps its tilt.' });
 
 /** One schema for each kind of mount, made at its first use; its keys are the kind's own. `has` looks into all mounts. */
 export const mountSchemas = (convert: Convert, has: Present) => {
@@ -114,7 +166,8 @@ export const mountSchemas = (convert: Convert, has: Present) => {
     'roof-plane': once(() => roofPlane(convert, parts())),
     'fixed-tilt': once(() => fixedTilt(convert, parts())),
     'single-axis': once(() => singleAxis(convert, parts(), has)),
-    'dual-axis': once(() => dualAxis(parts())),
+    'dual-axis': once(() => dualAxis(convert, parts(), has)),
+    turntable: once(() => turntable(convert, parts(), has)),
   };
 };
 
