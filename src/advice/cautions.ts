@@ -28,5 +28,5 @@ export const cautionsFor = (kinds: readonly MountKind[]): string[] => [
   ...(kinds.includes('roof-plane') ? [ROOF] : []),
   ...(kinds.some((kind) => kind !== 'roof-plane') ? [GROUND] : []),
   ...ALWAYS,
-  ...(kinds.some((kind) => kind === 'single-axis' || kind === 'dual-axis') ? TRACKERS : []),
+  ...(kinds.some((kind) => kind !== 'roof-plane' && kind !== 'fixed-tilt') ? TRACKERS : []),
 ];

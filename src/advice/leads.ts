@@ -37,7 +37,8 @@ export const confidenceOf = (lead: number, doubt: number): Confidence =>
   lead > 2 * doubt ? 'clear' : lead > doubt ? 'likely' : 'too_close';
 
 const onGround = (m: AdviceMount): boolean => m.kind !== 'roof-plane';
-export const isLoneMast = (m: AdviceMount): boolean => m.kind === 'dual-axis' && m.gcr === null;
+export const isLoneMast = (m: AdviceMount): boolean =>
+  (m.kind === 'dual-axis' || m.kind === 'turntable') && m.gcr === null;
 
 /** Between ground mounts only one of which has rows; a lone mast never has any. */
 export const rowsDiffer = (a: AdviceMount, b: AdviceMount): boolean =>

@@ -6,9 +6,11 @@ const KIND_WORDS: Record<MountKind, string> = {
   'fixed-tilt': 'fixed rack',
   'single-axis': 'single-axis tracker',
   'dual-axis': 'dual-axis tracker',
+  turntable: 'turntable',
 };
 
-export const isTracker = (m: AdviceMount): boolean => m.kind === 'single-axis' || m.kind === 'dual-axis';
+export const isTracker = (m: AdviceMount): boolean =>
+  m.kind === 'single-axis' || m.kind === 'dual-axis' || m.kind === 'turntable';
 
 /** How sentences call a mount: its label, or its id where it has none. */
 export const nameOf = (m: AdviceMount): string => m.label || m.id;

@@ -94,6 +94,24 @@ export const planeViews = (
   return { open, skyline, rows, glass };
 };
 
+/** The views of a plane that in some hours (1 in `hours`) stands as another does. Both are of one mount, with rows or without. */
+export const otherwiseIn = (hours: Uint8Array, views: PlaneViews, other: PlaneViews): PlaneViews => {
+  const columns = (a: Views, b: Views): Views => {
+    const choose = (key: keyof Views) => a[key].map((value, h) => (hours[h] ? b[key][h] : value));
+    return {
+      beam: choose('beam'),
+      sky: choose('sky'),
+      steep: choose('steep'),
+      horizon: choose('horizon'),
+      ground: choose('ground'),
+    };
+  };
+  const open = columns(views.open, other.open);
+  const skyline = views.skyline === views.open ? open : columns(views.skyline, other.skyline);
+  const rows = views.rows === views.skyline ? skyline : columns(views.rows, other.rows);
+  return { open, skyline, rows, glass: columns(views.glass, other.glass) };
+};
+
 /** Takes off what the skyline hides: the sun sample by sample, the sky by the plane's angles in the middle of the hour. */
 const behindSkyline = (
   sun: SunHours,

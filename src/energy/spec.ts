@@ -10,8 +10,8 @@ export interface LossSpec {
 export interface DriveSpec {
   /** Share of the time that the tracker works, 0..1. */
   readonly working: number | null;
-  /** What a tracker that does not work does; null with `working` blank. */
-  readonly stuck: 'flat' | null;
+  /** How a tracker stands that does not work; a turntable faces the equator. Null with `working` blank. */
+  readonly stuck: 'flat' | 'equator' | null;
   /** Share of the yield that the drive itself uses. */
   readonly ownUse: number | null;
 }

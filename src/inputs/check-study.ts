@@ -23,7 +23,7 @@ export interface CheckedStudy {
 /** For a mount of no known kind: every key of every kind, so that its other faults still show. */
 const anyKind = (kinds: MountSchemas) => {
   const merged: Record<string, z.ZodMiniType> = {};
-  for (const kind of ['roof-plane', 'dual-axis', 'fixed-tilt', 'single-axis'] as const)
+  for (const kind of ['roof-plane', 'turntable', 'dual-axis', 'fixed-tilt', 'single-axis'] as const)
     for (const [key, schema] of Object.entries(kinds[kind]().shape))
       merged[key] = z.optional(schema as z.ZodMiniType);
   return z.strictObject({ ...merged, kind: z.optional(z.unknown()), id: kinds['roof-plane']().shape.id });

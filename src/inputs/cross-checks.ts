@@ -40,10 +40,59 @@ const drives = (mounts: readonly unknown[]): Fault[] =>
         path: ['mounts', i, 'drive', missing],
         expected: 'working and stuck together',
         found: `${missing === 'stuck' ? 'working' : 'stuck'} alone`,
-        fix: missing === 'stuck' ? 'Add stuck: flat.' : 'Add for example working: 97 %, or remove stuck.',
+        fix:
+          missing === 'stuck'
+            ? `Add stuck: ${rawAt(mount, ['kind']) === 'turntable' ? 'equator' : 'flat'}.`
+            : 'Add for example working: 97 %, or remove stuck.',
       },
     ];
   });
+
+/** An angle written in degrees; NaN in other units, which are converted elsewhere. */
+const asDegrees = (raw: unknown): number =>
+  typeof raw === 'string' && !/^[^a-z]*(?:deg\w*)?$/i.test(raw.trim()) ? Number.NaN : asWhole(raw);
+
+/** Limits that leave a mast no turn, or no elevation. */
+const reach = (mounts: readonly unknown[]): Fault[] =>
+  mounts.flatMap((mount, i): Fault[] => {
+    const at = (...path: string[]) => asDegrees(rawAt(mount, path));
+    const [from, to] = [at('turns', 'from'), at('turns', 'to')];
+    const [lowest, highest] = [at('elevation', 'lowest'), at('elevation', 'highest')];
+    const faults: Fault[] = [];
+    if (Math.abs(from - to) % 360 === 0)
+      faults.push({
+        code: 'no-turn',
+        path: ['mounts', i, 'turns', 'to'],
+        expected: 'another azimuth than that of from',
+        found: String(to),
+        fix: 'Leave turns blank where it turns all round.',
+      });
+    if (lowest > highest)
+      faults.push({
+        code: 'limits-crossed',
+        path: ['mounts', i, 'elevation', 'lowest'],
+        expected: `at most the highest, ${highest}`,
+        found: String(lowest),
+        fix: 'An upright plane faces a sun at 0 degrees, a flat one at 90: lowest is the steeper limit.',
+      });
+    return faults;
+  });
+
+/** On sloping ground the axis follows the ground, so its tilt is not a second key. */
+const axisAndGround = (mounts: readonly unknown[]): Fault[] =>
+  mounts.flatMap((mount, i): Fault[] =>
+    rawAt(mount, ['ground']) === undefined || rawAt(mount, ['axis', 'tilt']) === undefined
+      ? []
+      : [
+          {
+            code: 'given-twice',
+            path: ['mounts', i, 'axis', 'tilt'],
+            expected: 'one of axis.tilt and ground',
+            found: 'both',
+            fix: 'Remove axis.tilt: it follows from the ground and the azimuth of the axis.',
+          },
+        ],
+  );
 
 const asWhole = (raw: unknown): number => {
   const value = typeof raw === 'string' ? Number.parseFloat(raw) : raw;
@@ -95,9 +144,9 @@ const reference = (raw: unknown, mounts: readonly unknown[]): Fault[] => {
           },
         ];
   }
-  if (kind !== 'single-axis' && kind !== 'dual-axis') return [];
+  if (kind !== 'single-axis' && kind !== 'dual-axis' && kind !== 'turntable') return [];
   const fixed = mounts.filter((mount) =>
-    ['roof-plane', 'fixed-tilt'].includes(String(rawAt(mount, ['kind']))),
+    ['roof-plane', 'fixed-tilt'].includes(rawAt(mount, ['kind']) as string),
   );
   const fix =
     fixed.length === 0
@@ -108,7 +157,7 @@ const reference = (raw: unknown, mounts: readonly unknown[]): Fault[] => {
       code: 'reference-moves',
       path,
       expected: 'the id of a fixed mount',
-      found: `${id}, a ${kind} tracker`,
+      found: kind === 'turntable' ? `${id}, a turntable` : `${id}, a ${kind} tracker`,
       fix,
     },
   ];
@@ -137,6 +186,8 @@ export const crossFaults = (raw: unknown, at: (path: Path) => Position): Fault[]
   return [
     ...twins(mounts, at),
     ...drives(mounts),
+    ...axisAndGround(mounts),
+    ...reach(mounts),
     ...lateRenewals(raw, mounts),
     ...reference(raw, mounts),
     ...lightColumns(raw),

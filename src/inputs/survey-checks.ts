@@ -171,7 +171,7 @@ export const surveyFaults = (raw: unknown, mounts: readonly unknown[]): Fault[] 
   const several = Array.isArray(skyline) ? skyline : [];
   return [
     ...mounts.flatMap((mount, i) =>
-      isGroup(mount) && mount.kind !== 'single-axis' && mount.kind !== 'dual-axis'
+      isGroup(mount) && !['single-axis', 'dual-axis', 'turntable'].includes(mount.kind as string)
         ? mountFaults(mount, ['mounts', i])
         : [],
     ),

@@ -56,6 +56,7 @@ array:
 # The mounts to compare, each with an id of its own (lower-case letters, digits, - and _) and a kind:
 #   roof-plane   parallel to a roof         fixed-tilt   a rack on the ground that does not move
 #   single-axis  a tracker about one axis   dual-axis    a tracker that faces the sun
+#   turntable    a tracker about an upright axis, at a tilt that it keeps
 # Azimuth is clockwise from true north: 180 faces south. Tilt is in degrees, or a slope (3:12), or a grade (25 %).
 # A roof or a rack read on site has bearing in place of azimuth, and slope in place of tilt, each with its error:
 # bearing: { magnetic: 150, taken: facing, dated: 2026-05-01, error: 5 } # declination is applied here, once
@@ -76,8 +77,11 @@ mounts:
 #    cost: { capital_per_kw: 1700, upkeep_per_kw: 15 } # blank: mounts are ranked by energy
   - id: tracker
     kind: single-axis
-#    axis: { azimuth: 180, tilt: 0 } # the direction towards which a tilted axis falls. Blank: level, north-south
+#    axis: { azimuth: 180 } # a tilted axis falls that way: axis: { azimuth: 180, tilt: 5 }. Blank: level, north-south
+#    ground: { slope: 6 %, falls_toward: 200 } # which axis and rows follow, in place of axis tilt. Blank: level
+#    slope_limits: { along: 15 %, across: 10 % } # the steepest ground that the maker allows. Blank: not checked
     swing: 60         # greatest turn either way from flat, degrees (default 60)
+#    cloudy: track     # or flat: lie flat while the sky is overcast. Blank: track
     rows: { gcr: 0.40, low_sun: backtrack } # or shade: stay on the sun and take the shade of the next row
 #    slant: 2.4 m
 #    axis_height: 1.5 m # above ground
@@ -98,7 +102,13 @@ mounts:
 #    cost: { capital_per_kw: 1600, upkeep_per_kw: 12 }
 #  - id: mast
 #    kind: dual-axis  # without rows it is a lone mast
+#    turns: { from: 60, to: 300 } # azimuths that it can face, clockwise. Blank: all round
+#    elevation: { lowest: 15, highest: 85 } # of the sun that it can face: 90 less its tilt. Blank: 0 to 90
 #    cost: { capital_per_kw: 3100, upkeep_per_kw: 30 }
+#  - id: table
+#    kind: turntable  # takes turns too; its drive may be stuck: equator
+#    tilt: best       # or degrees; best is where it collects most, turning (default)
+#    cost: { capital_per_kw: 2500, upkeep_per_kw: 25 }
 
 # Losses that all mounts share. Blank: not counted.
 #losses:

@@ -1,6 +1,13 @@
 import type { CostSpec } from '../cost/index.ts';
 import type { ArraySpec, DriveSpec } from '../energy/index.ts';
-import type { MountGeometry, MountLengths, RowSpec } from '../mounts/index.ts';
+import {
+  axisTiltOnSlope,
+  type DualAxis,
+  type MountGeometry,
+  type MountLengths,
+  type RowSpec,
+  type SingleAxis,
+} from '../mounts/index.ts';
 import type { TableColumn, TableColumns } from '../weather/index.ts';
 import type { WindSpec } from '../wind/index.ts';
 import type { RawMount } from './schema/mounts.ts';
@@ -25,6 +32,30 @@ const known = (angleDeg: number | undefined): number => {
   return angleDeg;
 };
 
+type RawSingleAxis = Extract<RawMount, { kind: 'single-axis' }>;
+
+/** What the ground says of a tracker on it: the tilt of its axis is never given beside it (checked before). */
+const onGround = ({ axis, ground, slope_limits }: RawSingleAxis): Partial<SingleAxis> => ({
+  ...(ground && {
+    axisTiltDeg: axisTiltOnSlope(ground.slope, ground.falls_toward, axis?.azimuth ?? 180),
+    ground: { slopeDeg: ground.slope, fallsTowardDeg: ground.falls_toward },
+  }),
+  ...(slope_limits && {
+    slopeLimits: { alongDeg: slope_limits.along ?? null, acrossDeg: slope_limits.across ?? null },
+  }),
+});
+
+type RawMast = Extract<RawMount, { kind: 'dual-axis' | 'turntable' }>;
+
+/** Where a mast can face; what is blank is left out. */
+const reachOf = (mount: RawMast): Pick<DualAxis, 'turns' | 'elevation'> => ({
+  ...(mount.turns && { turns: { fromDeg: mount.turns.from, toDeg: mount.turns.to } }),
+  ...('elevation' in mount &&
+    mount.elevation && {
+      elevation: { lowestDeg: mount.elevation.lowest ?? 0, highestDeg: mount.elevation.highest ?? 90 },
+    }),
+});
+
 const geometryOf = (mount: RawMount, readings: MountReadings | null): MountGeometry => {
   switch (mount.kind) {
     case 'roof-plane':
@@ -47,9 +78,18 @@ const geometryOf = (mount: RawMount, readings: MountReadings | null): MountGeome
         axisTiltDeg: mount.axis?.tilt ?? 0,
         swingDeg: mount.swing ?? DEFAULT_SWING_DEG,
         rows: rowsOf(mount.rows, 'backtrack'),
+        ...(mount.cloudy === 'flat' && { cloudy: mount.cloudy }),
+        ...onGround(mount),
       };
     case 'dual-axis':
-      return { kind: mount.kind, rows: rowsOf(mount.rows, 'shade') };
+      return { kind: mount.kind, rows: rowsOf(mount.rows, 'shade'), ...reachOf(mount) };
+    case 'turntable':
+      return {
+        kind: mount.kind,
+        planeTiltDeg: mount.tilt ?? 'best',
+        rows: rowsOf(mount.rows, 'shade'),
+        ...reachOf(mount),
+      };
   }
 };
 
@@ -62,7 +102,7 @@ const lengthsOf = (mount: RawMount): MountLengths => ({
 
 /** Every tracker has a drive, even where the study says nothing of it. */
 const driveOf = (mount: RawMount): DriveSpec | null =>
-  mount.kind === 'single-axis' || mount.kind === 'dual-axis'
+  mount.kind === 'single-axis' || mount.kind === 'dual-axis' || mount.kind === 'turntable'
     ? {
         working: mount.drive?.working ?? null,
         stuck: mount.drive?.stuck ?? null,

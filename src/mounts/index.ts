@@ -1,5 +1,6 @@
 export * from './dual-axis.ts';
 export * from './fixed.ts';
+export * from './mast.ts';
 export * from './mast-field.ts';
 export * from './point-mount.ts';
 export * from './pointing.ts';
@@ -8,3 +9,4 @@ export * from './row-view.ts';
 export * from './single-axis.ts';
 export * from './slope.ts';
 export type * from './spec.ts';
+export * from './turntable.ts';

@@ -2,19 +2,28 @@
 const LOWEST_UP = 0.01;
 
 /**
- * Share of a square collector on a mast that is shaded by its neighbours, 0..1, when all face the sun and stand on a
- * level square grid aligned with north. Plain geometry, exact for collectors that have room to turn (GCR up to 0.5).
+ * Share of a square collector on a mast that is shaded by its neighbours, 0..1, when all face alike and stand on a
+ * level square grid aligned with north. Plain geometry, exact for collectors that have room to turn (GCR up to 0.5) and
+ * face the sun, or face its azimuth at another elevation: the shadow of one ahead then lies lower by its distance
+ * times up / cos(incidence). Where they cannot turn to the sun's azimuth the same is taken (assumption).
  *
  * Seen from the sun, a collector nearer it hangs lower by its distance times the sine of the sun's height and aside by
  * its distance across; of the unit square it covers the lower part, from one side edge inwards. So taking neighbours
  * from the nearest on, what is still lit at the bottom is one gap, `left..right`, until it closes.
  * @param up direction cosines of the sun, above 0
  * @param gcr area of a collector over the ground of one mast
+ * @param cosIncidence of the sun on the collectors, above 0
  */
-export const mastFieldShade = (east: number, north: number, up: number, gcr: number): number => {
+export const mastFieldShade = (
+  east: number,
+  north: number,
+  up: number,
+  gcr: number,
+  cosIncidence = 1,
+): number => {
   const pitch = 1 / Math.sqrt(gcr);
   const level = Math.sqrt(east * east + north * north); // Math.hypot takes ten times as long
-  const sine = Math.max(up, LOWEST_UP);
+  const sine = Math.max(up, LOWEST_UP) / cosIncidence;
   // Neighbours stand `pitch` off or further and shade only while less than 1 aside.
   if (level === 0 || sine * sine * (pitch * pitch - 1) >= 1) return 0;
   // The grid looks alike from eight sides: turn the sun to where `ahead` is the greater component.

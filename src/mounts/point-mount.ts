@@ -3,10 +3,16 @@ import { pointDualAxis } from './dual-axis.ts';
 import { pointFixed } from './fixed.ts';
 import type { Pointing } from './pointing.ts';
 import { pointSingleAxis } from './single-axis.ts';
-import type { DualAxis, FixedTilt, MountGeometry, RoofPlane, SingleAxis } from './spec.ts';
+import type { DualAxis, FixedTilt, MountGeometry, RoofPlane, SingleAxis, Turntable } from './spec.ts';
+import { pointTurntable, type TiltedTurntable } from './turntable.ts';
 
 /** The same geometry with `best` and `surveyed` replaced by the angles that they stand for. */
-export type ResolvedGeometry = SingleAxis | DualAxis | ResolvedPlane<RoofPlane> | ResolvedPlane<FixedTilt>;
+export type ResolvedGeometry =
+  | SingleAxis
+  | DualAxis
+  | TiltedTurntable
+  | ResolvedPlane<RoofPlane>
+  | ResolvedPlane<FixedTilt>;
 type ResolvedPlane<G extends RoofPlane | FixedTilt> = G & { tiltDeg: number; azimuthDeg: number };
 
 /** What `best` stands for: both angles free, or one of them with the other given. */
@@ -15,6 +21,8 @@ export interface BestAngles {
   readonly azimuthDeg: number;
   readonly tiltFacing: (azimuthDeg: number) => number;
   readonly azimuthAtTilt: (tiltDeg: number) => number;
+  /** The tilt at which a turntable collects most. */
+  readonly tiltTurning: (mount: Turntable) => number;
 }
 
 /**
@@ -27,6 +35,10 @@ export const resolveAngles = (
   surveyedAzimuthDeg: number | null,
 ): ResolvedGeometry => {
   if (geometry.kind === 'single-axis' || geometry.kind === 'dual-axis') return geometry;
+  if (geometry.kind === 'turntable') {
+    const { planeTiltDeg } = geometry;
+    return { ...geometry, planeTiltDeg: planeTiltDeg === 'best' ? best.tiltTurning(geometry) : planeTiltDeg };
+  }
   const given = geometry.azimuthDeg === 'surveyed' ? surveyedAzimuthDeg : geometry.azimuthDeg;
   if (given === null)
     throw new Error(
@@ -64,8 +76,10 @@ export const pointMount = (
       return pointSingleAxis(sun, mount, used);
     case 'dual-axis':
       return pointDualAxis(sun, mount, used);
+    case 'turntable':
+      return pointTurntable(sun, mount, used);
   }
 };
 
 export const isTracker = (mount: { readonly kind: MountGeometry['kind'] }): boolean =>
-  mount.kind === 'single-axis' || mount.kind === 'dual-axis';
+  mount.kind === 'single-axis' || mount.kind === 'dual-axis' || mount.kind === 'turntable';

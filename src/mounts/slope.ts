@@ -1,4 +1,5 @@
 import { asinDeg, atan2Deg, cosDeg, sinDeg, tanDeg } from '../shared/index.ts';
+import type { GroundSlope, SingleAxis } from './spec.ts';
 
 /**
  * Tilt of a tracker axis laid on sloping ground, degrees, positive where the axis falls towards its azimuth.
@@ -16,3 +17,19 @@ export const axisTiltOnSlope = (slopeDeg: number, fallsTowardDeg: number, axisAz
  */
 export const crossAxisTilt = (slopeDeg: number, fallsTowardDeg: number, axisAzimuthDeg: number): number =>
   asinDeg(sinDeg(slopeDeg) * sinDeg(fallsTowardDeg - axisAzimuthDeg));
+
+/** {@link crossAxisTilt} of a tracker's own ground; 0 where that is level. */
+export const crossAxisTiltOf = ({ ground, axisAzimuthDeg }: SingleAxis): number =>
+  ground ? crossAxisTilt(ground.slopeDeg, ground.fallsTowardDeg, axisAzimuthDeg) : 0;
+
+/**
+ * Grade of the ground along a tracker's axis and straight across it, rise over level run, 0 and up: what a maker's
+ * limits are for. Plain geometry of an even slope.
+ */
+export const gradesByAxis = (
+  { slopeDeg, fallsTowardDeg }: GroundSlope,
+  axisAzimuthDeg: number,
+): { along: number; across: number } => ({
+  along: Math.abs(tanDeg(slopeDeg) * cosDeg(fallsTowardDeg - axisAzimuthDeg)),
+  across: Math.abs(tanDeg(slopeDeg) * sinDeg(fallsTowardDeg - axisAzimuthDeg)),
+});

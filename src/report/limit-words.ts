@@ -17,15 +17,19 @@ const BROKEN_WORDS: Record<Limit['bound'], string> = { most: 'exceeds', least: '
 export const worstFirst = (limits: readonly Limit[]): Limit[] =>
   WORST_FIRST.flatMap((status) => limits.filter((limit) => limit.status === status));
 
-/** Limits of one bound: lengths and heights may be at most, a programme's factors must be at least. */
+/** Limits of one bound: lengths, heights and grades may be at most, a programme's factors must be at least. */
 export const limitsOf = (mount: MountResult, bound: Limit['bound']): Limit[] =>
   worstFirst(mount.limits.filter((limit) => limit.bound === bound));
 
+/** True for a limit of the ground's slope: a share, where the other things that may be at most so much are lengths. */
+export const isGrade = ({ bound, name }: Limit): boolean => bound === 'most' && name.startsWith('slope ');
+
 /** ` by 0.90 m`, ` by 3.8 points`; nothing where the results do not say by how much. */
-const byHowMuch = ({ bound, value, asked }: Limit): string => {
+const byHowMuch = (limit: Limit): string => {
+  const { bound, value, asked } = limit;
   if (value === null || asked === null) return '';
-  if (bound === 'most') return ` by ${formatNumber(value - asked, 2)} m`;
-  const points = formatNumber(100 * (asked - value), 1);
+  if (bound === 'most' && !isGrade(limit)) return ` by ${formatNumber(value - asked, 2)} m`;
+  const points = formatNumber(100 * Math.abs(value - asked), 1);
   return points === '0.0' ? ' by under 0.1 points' : ` by ${points} points`;
 };
 

@@ -14,6 +14,7 @@ export const KIND_WORDS: Record<MountKind, string> = {
   'fixed-tilt': 'fixed rack',
   'single-axis': 'single-axis tracker',
   'dual-axis': 'dual-axis tracker',
+  turntable: 'turntable',
 };
 
 export const SKY_WORDS: Record<SkyModel, string> = {
@@ -49,7 +50,7 @@ export const monthInFull = (month: string): string => FULL_MONTH[month] ?? month
 export const yearWords = (format: string): string => (format === 'table' ? 'hourly year' : 'typical year');
 
 export const isTracker = (mount: MountResult): boolean =>
-  mount.kind === 'single-axis' || mount.kind === 'dual-axis';
+  mount.kind === 'single-axis' || mount.kind === 'dual-axis' || mount.kind === 'turntable';
 
 /** The mount with this id; the contract promises that it is there. */
 export const mountById = (c: Comparison, id: string): MountResult => {

@@ -5,7 +5,7 @@
  */
 import type { Finding } from './hourly-year.ts';
 
-export type MountKind = 'roof-plane' | 'fixed-tilt' | 'single-axis' | 'dual-axis';
+export type MountKind = 'roof-plane' | 'fixed-tilt' | 'single-axis' | 'dual-axis' | 'turntable';
 export type LimitStatus = 'kept' | 'broken' | 'within_reading_error' | 'not_checked';
 export type Confidence = 'clear' | 'likely' | 'too_close';
 export type SkyModel = 'perez' | 'hay-davies' | 'reindl' | 'isotropic';
@@ -89,10 +89,11 @@ export interface MountResult {
   id: string;
   kind: MountKind;
   label: string;
-  /** Null for trackers. */
+  /** Null for trackers, but for a turntable, which keeps its tilt. */
   tilt_deg: number | null;
+  /** Null for all trackers. */
   azimuth_deg: number | null;
-  /** `given`, or `best: unshaded optimum of the orientation map`; null for trackers. */
+  /** `given`, or `best: unshaded optimum of the orientation map`; null for trackers without a held tilt. */
   tilt_basis: string | null;
   /** TOF: irradiation over the map's maximum, 0..1; null for trackers. */
   orientation_factor: number | null;
@@ -164,10 +165,10 @@ export interface MountResult {
     bound: 'most' | 'least';
     status: LimitStatus;
     detail: string;
-    /** What the mount has and what the limit is: metres for lengths, fractions for factors; null where not checked. */
+    /** What the mount has and what the limit is: metres for lengths, fractions for factors and grades; null where not checked. */
     value: number | null;
     asked: number | null;
-    /** `value` less `asked` for lengths; null for factors. */
+    /** `value` less `asked` for lengths; null for factors and grades. */
     excess_m: number | null;
   }[];
 }

@@ -1,9 +1,10 @@
-import { isTracker } from '../mounts/index.ts';
+import { crossAxisTiltOf, isTracker } from '../mounts/index.ts';
 import type { Assumption } from '../shared/index.ts';
 import { SAMPLES_PER_HOUR, SOLAR_CONSTANT_WM2 } from '../sun/index.ts';
 import { HORIZON_BAND_DEG } from '../survey/index.ts';
 import { type MountRun, USUAL_HEAT_PER_K } from './mount-run.ts';
 import type { Counted } from './not-counted.ts';
+import { OVERCAST_DIFFUSE, overcastHours } from './overcast.ts';
 
 const SKY_SOURCES = {
   perez: 'Perez et al. 1990, Solar Energy 44, 271',
@@ -19,6 +20,65 @@ const arrayHeights = ({ runs }: Counted): Assumption => ({
   value: runs.map((run) => `${run.mount.id} ${Number(run.arrayHeightM.toFixed(2))} m`).join(', '),
   source: 'from the lengths given, else 2 m on the ground and 4 m on a roof (assumption)',
 });
+
+const trackersLine = (trackers: readonly MountRun[]): Assumption => {
+  const level = trackers.filter(({ geometry }) => !('ground' in geometry));
+  const value =
+    level.length === trackers.length
+      ? 'point exactly; level ground'
+      : level.length === 0
+        ? 'point exactly'
+        : `point exactly; level ground for ${ids(level)}`;
+  return { what: 'trackers', value, source: 'assumption' };
+};
+
+const groundLine = ({ mount, geometry }: MountRun): Assumption[] => {
+  if (geometry.kind !== 'single-axis' || !geometry.ground) return [];
+  const { slopeDeg, fallsTowardDeg } = geometry.ground;
+  const degrees = (x: number) => Number(x.toFixed(2)) + 0;
+  return [
+    {
+      what: `ground of ${mount.id}`,
+      value:
+        `even, falling ${degrees(slopeDeg)} degrees towards ${degrees(fallsTowardDeg)}: axis tilt ${degrees(geometry.axisTiltDeg)}, ` +
+        `cross-axis slope ${degrees(crossAxisTiltOf(geometry))} degrees; its rise takes no even sky, and hides no sun from a lone row`,
+      source: 'Anderson & Mikofski 2020, NREL/TP-5K00-76626, eqs. 18 and 26; the rest assumption',
+    },
+  ];
+};
+
+const reachLine = ({ mount, geometry, gcr }: MountRun): Assumption[] => {
+  if (geometry.kind !== 'dual-axis' && geometry.kind !== 'turntable') return [];
+  const elevation = geometry.kind === 'dual-axis' ? geometry.elevation : undefined;
+  const { turns } = geometry;
+  if (!turns && !elevation) return [];
+  const parts = [
+    ...(turns ? [`azimuth ${turns.fromDeg} to ${turns.toDeg}`] : []),
+    ...(elevation ? [`elevation ${elevation.lowestDeg} to ${elevation.highestDeg}`] : []),
+  ];
+  const shade =
+    turns && gcr !== null ? '; neighbours are taken to shade as if all faced the azimuth of the sun' : '';
+  return [
+    {
+      what: `reach of ${mount.id}`,
+      value: `faces ${parts.join(' and ')} degrees, as near to the sun as that allows${shade}`,
+      source: 'the study; least angle of incidence, Duffie & Beckman, eq. 1.6.3',
+    },
+  ];
+};
+
+const cloudyLine = ({ runs, year }: Counted): Assumption[] => {
+  const flat = runs.filter(({ geometry }) => geometry.kind === 'single-axis' && geometry.cloudy === 'flat');
+  if (flat.length === 0) return [];
+  const hours = overcastHours(year).reduce((sum, hour) => sum + hour, 0);
+  return [
+    {
+      what: `overcast sky for ${ids(flat)}`,
+      value: `flat in the ${hours} hours whose diffuse light is at least ${100 * OVERCAST_DIFFUSE} % of the global`,
+      source: 'assumption; the drive knows the whole hour and loses no time',
+    },
+  ];
+};
 
 /** Every model, default and convention that the figures rest on, each with its source. */
 export const assumptionsOf = (c: Counted): Assumption[] => {
@@ -88,7 +148,12 @@ export const assumptionsOf = (c: Counted): Assumption[] => {
       source: 'the study; band after Perez et al. 1986, from memory; the ground before it is taken as lit',
     });
   if (trackers.length > 0)
-    list.push({ what: 'trackers', value: 'point exactly; level ground', source: 'assumption' });
+    list.push(
+      trackersLine(trackers),
+      ...trackers.flatMap(groundLine),
+      ...trackers.flatMap(reachLine),
+      ...cloudyLine(c),
+    );
   if (study.array.given === false)
     list.push({ what: 'array', value: '1 kW of DC rating', source: 'the study gives no array' });
   if (study.finance.years !== null)

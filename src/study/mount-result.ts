@@ -1,7 +1,13 @@
 import { breakEven, costOfEnergy, mountCost } from '../cost/index.ts';
 import { lightBySource } from '../energy/index.ts';
 import type { Study } from '../inputs/index.ts';
-import { isTracker, type MountGeometry } from '../mounts/index.ts';
+import {
+  crossAxisTiltOf,
+  isTracker,
+  type MountGeometry,
+  type ResolvedGeometry,
+  type SingleAxis,
+} from '../mounts/index.ts';
 import {
   type ArraySummary,
   MONTH_DAYS,
@@ -9,10 +15,16 @@ import {
   type MountResult,
   type SkyModel,
 } from '../shared/index.ts';
-import { type EdgeGeometry, screenWind, steepestChordTiltDeg } from '../wind/index.ts';
+import {
+  type EdgeGeometry,
+  screenWind,
+  steepestChordAboveSlopeDeg,
+  steepestChordTiltDeg,
+} from '../wind/index.ts';
 import { type MountRun, shadingOf } from './mount-run.ts';
 import { factorBand, programmeLimits } from './orientation.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
+import { slopeLimits } from './slope-limits.ts';
 
 /** Energy per kW of DC rating in the month that gives least a day. */
 export const worstMonth = (monthlyKwhPerKw: readonly number[]): MountResult['worst_month'] => {
@@ -23,8 +35,15 @@ export const worstMonth = (monthlyKwhPerKw: readonly number[]): MountResult['wor
 
 const rowsInWords = ({ geometry, gcr }: MountRun): string => {
   if (geometry.kind === 'dual-axis') return gcr === null ? 'lone mast' : `field of masts at GCR ${gcr}`;
+  if (geometry.kind === 'turntable')
+    return `${gcr === null ? 'alone' : `field at GCR ${gcr},`} at ${Number(geometry.planeTiltDeg.toFixed(1))}° tilt`;
   return gcr === null ? 'no rows' : `rows at GCR ${gcr}`;
 };
+
+const steepestChordOf = (mount: SingleAxis): number =>
+  mount.ground
+    ? steepestChordAboveSlopeDeg(mount.swingDeg, crossAxisTiltOf(mount), mount.ground.slopeDeg)
+    : steepestChordTiltDeg(mount.swingDeg, mount.axisTiltDeg);
 
 /** Shapes a mount's lengths for the wind screen. */
 export const edgeGeometry = ({ mount, geometry }: MountRun, study: Study): EdgeGeometry => {
@@ -36,10 +55,16 @@ export const edgeGeometry = ({ mount, geometry }: MountRun, study: Study): EdgeG
     },
     'single-axis': {
       arrangement: 'tracker',
-      steepestTiltDeg:
-        geometry.kind === 'single-axis' ? steepestChordTiltDeg(geometry.swingDeg, geometry.axisTiltDeg) : 0,
+      steepestTiltDeg: geometry.kind === 'single-axis' ? steepestChordOf(geometry) : 0,
     },
-    'dual-axis': { arrangement: 'tracker', steepestTiltDeg: 90 },
+    'dual-axis': {
+      arrangement: 'tracker',
+      steepestTiltDeg: 90 - (geometry.kind === 'dual-axis' ? (geometry.elevation?.lowestDeg ?? 0) : 0),
+    },
+    turntable: {
+      arrangement: 'tracker',
+      steepestTiltDeg: geometry.kind === 'turntable' ? geometry.planeTiltDeg : 0,
+    },
   } as const;
   return {
     ...shape[geometry.kind],
@@ -139,7 +164,7 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
     id: mount.id,
     kind: geometry.kind,
     label: mount.label,
-    tilt_deg: 'tiltDeg' in geometry ? geometry.tiltDeg : null,
+    tilt_deg: heldTiltDeg(geometry),
     azimuth_deg: 'azimuthDeg' in geometry ? geometry.azimuthDeg : null,
     tilt_basis: tiltBasis(mount.geometry),
     ...orientation,
@@ -181,13 +206,20 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
         ? null
         : cost.capitalPerKw - referenceCapital,
     wind: screened.wind,
-    limits: [...screened.limits, ...limitsOfProgramme(orientation, setting)],
+    limits: [...screened.limits, ...slopeLimits(geometry), ...limitsOfProgramme(orientation, setting)],
   };
 };
 
-/** Whose angles a fixed plane has; null for trackers. */
+const heldTiltDeg = (geometry: ResolvedGeometry): number | null => {
+  if (geometry.kind === 'turntable') return geometry.planeTiltDeg;
+  return 'tiltDeg' in geometry ? geometry.tiltDeg : null;
+};
+
+/** Whose angles a plane has; null for trackers without a held tilt. */
 const tiltBasis = (asked: MountGeometry): string | null => {
   if (asked.kind === 'single-axis' || asked.kind === 'dual-axis') return null;
+  if (asked.kind === 'turntable')
+    return asked.planeTiltDeg === 'best' ? 'best: most unshaded light of the year, turning' : 'given';
   const [tilt, azimuth] = [asked.tiltDeg === 'best', asked.azimuthDeg === 'best'];
   const optimum = 'best: unshaded optimum of the orientation map';
   if (tilt && azimuth) return optimum;
@@ -204,9 +236,11 @@ const STAGE_SOURCES: Record<
   skyline: () =>
     'sun hour by hour against the skyline, even sky by its view, horizon band of 6.5 degrees (Perez et al. 1986)',
   rows: ({ geometry }) =>
-    geometry.kind === 'dual-axis'
+    geometry.kind === 'dual-axis' || geometry.kind === 'turntable'
       ? 'shadows of a square field of masts; plain geometry, diffuse by assumption'
-      : 'beam by profile angle, sky and ground by crossed strings (Hottel & Sarofim 1967)',
+      : geometry.kind === 'single-axis' && geometry.ground
+        ? 'beam on sloping ground by Anderson & Mikofski 2020, eq. 32; sky and ground by crossed strings (Hottel & Sarofim 1967)'
+        : 'beam by profile angle, sky and ground by crossed strings (Hottel & Sarofim 1967)',
   incidence: () => 'Martin & Ruiz 2001, a_r 0.16',
   heat: ({ chain }) => chain.heatLoss.source,
   dirt: () => 'given',
@@ -215,5 +249,6 @@ const STAGE_SOURCES: Record<
   conversion: () => 'given',
   'inverter ceiling': () => "the inverter's AC rating, hour by hour",
   drive: () => 'given',
-  downtime: () => 'given share of time working; stuck flat else',
+  downtime: ({ mount }) =>
+    `given share of time working; stuck ${mount.drive?.stuck === 'equator' ? 'facing the equator' : 'flat'} else`,
 };

@@ -6,21 +6,32 @@ import {
   lightThrough,
   OPEN_RACK,
   onRoof,
+  otherwiseIn,
   type PlaneViews,
   planeViews,
+  type SkylineShade,
 } from '../energy/index.ts';
 import type { StudyMount } from '../inputs/index.ts';
 import {
   type BestAngles,
+  type DualAxis,
+  type ElevationRange,
   isTracker,
+  nearestAzimuth,
   type Pointing,
   pointMount,
+  pointSingleAxis,
+  pointStoppedTurntable,
+  pointTurntable,
   type ResolvedGeometry,
   resolveAngles,
+  type TiltedTurntable,
+  type Turntable,
 } from '../mounts/index.ts';
-import { type SkyModel, sinDeg, yearlySum } from '../shared/index.ts';
+import { goldenMaximum, type SkyModel, sinDeg, yearlySum } from '../shared/index.ts';
 import { bestAzimuthAtTilt, bestTiltFacing } from '../sky/index.ts';
 import { powerLawFactor } from '../wind/index.ts';
+import { overcastHours } from './overcast.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
 import type { MountSurvey } from './site-survey.ts';
 
@@ -30,7 +41,7 @@ export interface MountRun {
   readonly geometry: ResolvedGeometry;
   readonly gcr: number | null;
   readonly views: PlaneViews;
-  /** Trackers: the plane where a dead one lies. */
+  /** Trackers: the plane where a dead one lies, among its rows. */
   readonly stuck: PlaneViews | null;
   readonly chain: ChainSpec;
   readonly arrayHeightM: number;
@@ -78,27 +89,75 @@ const runMount = (
   pointing: Pointing,
   setting: Setting,
 ): MountRun => {
-  const views = planeViews(setting.sun, pointing, setting.shade);
-  const stuck = isTracker(geometry) ? setting.flat : null;
+  const viewsPast = lyingFlatWhenCloudy(geometry, pointing, setting);
+  const views = viewsPast(setting.shade);
+  const stuck = stuckViews(geometry, setting);
   const arrayHeightM = arrayHeight(mount, geometry, setting.study.site.roofHeightM);
   const chain = chainOf(setting, mount, arrayHeightM);
   const delivered = {} as Record<SkyModel, Delivered>;
   for (const model of ALL_MODELS) delivered[model] = deliver(setting.skies[model], views, chain, stuck);
   const gcr = 'rows' in geometry ? (geometry.rows?.gcr ?? null) : null;
   const survey = setting.survey.mounts.get(mount.id) ?? null;
-  const worstPoint = worstPointOf(setting, views, pointing);
+  const worstPoint = worstPointOf(setting, views, viewsPast);
   return { mount, geometry, gcr, views, stuck, chain, arrayHeightM, survey, worstPoint, delivered };
 };
 
-const worstPointOf = (
-  { sun, sky, pointShades }: Setting,
-  open: PlaneViews,
+const asFlatAsItGoes = ({ rows }: DualAxis, { highestDeg }: ElevationRange): TiltedTurntable => ({
+  kind: 'turntable',
+  planeTiltDeg: 90 - highestDeg,
+  rows,
+});
+
+/**
+ * Where a dead tracker lies: level, or flat along a tilted axis; a mast that cannot lie flat as flat as it goes, and a
+ * turntable at its tilt, both facing the equator or as near to it as they turn.
+ */
+const stuckViews = (geometry: ResolvedGeometry, { sun, shade, flat, year }: Setting): PlaneViews | null => {
+  if (!isTracker(geometry)) return null;
+  const equatorDeg = year.place.latitudeDeg < 0 ? 0 : 180;
+  if (geometry.kind === 'turntable')
+    return planeViews(
+      sun,
+      pointStoppedTurntable(sun, geometry, nearestAzimuth(geometry.turns ?? null, equatorDeg)),
+      shade,
+    );
+  if (geometry.kind === 'dual-axis' && geometry.elevation && geometry.elevation.highestDeg < 90)
+    return planeViews(
+      sun,
+      pointStoppedTurntable(
+        sun,
+        asFlatAsItGoes(geometry, geometry.elevation),
+        nearestAzimuth(geometry.turns ?? null, equatorDeg),
+      ),
+      shade,
+    );
+  return geometry.kind === 'single-axis' && (geometry.axisTiltDeg !== 0 || geometry.ground)
+    ? planeViews(sun, pointSingleAxis(sun, { ...geometry, swingDeg: 0 }), shade)
+    : flat;
+};
+
+/** What a mount's plane sees past a skyline, with the overcast hours of a `cloudy: flat` tracker spent lying flat. */
+const lyingFlatWhenCloudy = (
+  geometry: ResolvedGeometry,
   pointing: Pointing,
+  { sun, year }: Setting,
+): ((shade: SkylineShade | null) => PlaneViews) => {
+  const tracking = (shade: SkylineShade | null) => planeViews(sun, pointing, shade);
+  if (geometry.kind !== 'single-axis' || geometry.cloudy !== 'flat') return tracking;
+  const overcast = overcastHours(year);
+  const flat = pointSingleAxis(sun, { ...geometry, swingDeg: 0 });
+  return (shade) => otherwiseIn(overcast, tracking(shade), planeViews(sun, flat, shade));
+};
+
+const worstPointOf = (
+  { sky, pointShades }: Setting,
+  open: PlaneViews,
+  viewsPast: (shade: SkylineShade) => PlaneViews,
 ): MountRun['worstPoint'] => {
   const openLight = yearlySum(lightThrough(sky, open.open));
   let worst: MountRun['worstPoint'] = null;
   for (const { name, shade } of pointShades) {
-    const past = yearlySum(lightThrough(sky, planeViews(sun, pointing, shade).skyline));
+    const past = yearlySum(lightThrough(sky, viewsPast(shade).skyline));
     const shading = shadingOf(openLight, past);
     if (!worst || shading > worst.shading) worst = { name, shading };
   }
@@ -109,6 +168,17 @@ const worstPointOf = (
 export const shadingOf = (open: number, pastSkyline: number): number =>
   open > 0 ? Math.max(0, 1 - pastSkyline / open) : 0;
 
+/** The tilt at which a turntable collects most unshaded light in the year, to a tenth of a degree. */
+const bestTiltTurning = ({ sun, sky }: Setting, mount: Turntable): number => {
+  let [pointing, views]: [Pointing | null, PlaneViews | null] = [null, null];
+  const light = (planeTiltDeg: number): number => {
+    pointing = pointTurntable(sun, { ...mount, planeTiltDeg, rows: null }, pointing);
+    views = planeViews(sun, pointing, null, views);
+    return yearlySum(lightThrough(sky, views.open));
+  };
+  return goldenMaximum(light, 0, 90, 0.1);
+};
+
 /** Points every mount at the sun and follows its light to delivered energy, under every sky model. */
 export const runMounts = (setting: Setting): MountRun[] => {
   const { sun, sky, map } = setting;
@@ -116,6 +186,7 @@ export const runMounts = (setting: Setting): MountRun[] => {
     ...map.best,
     tiltFacing: (azimuthDeg) => bestTiltFacing(sun, sky, azimuthDeg),
     azimuthAtTilt: (tiltDeg) => bestAzimuthAtTilt(sun, sky, tiltDeg),
+    tiltTurning: (mount) => bestTiltTurning(setting, mount),
   };
   let pointing: Pointing | null = null;
   return setting.study.mounts.map((mount) => {

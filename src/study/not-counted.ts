@@ -58,18 +58,19 @@ const driveLines = (c: Counted): NotCounted[] =>
       const drive = run.mount.drive ?? { working: null, stuck: null, ownUse: null };
       const loss = (change: Partial<typeof drive>) =>
         percent(1 - again(c, run, { drive: { ...drive, ...change } }).energyKwhPerKw / energy);
+      const stuck = run.geometry.kind === 'turntable' ? 'equator' : 'flat';
       const lines: NotCounted[] = [];
       if (drive.working === null)
         lines.push({
           what: `mounts.${run.mount.id}.drive.working`,
-          effect: `${percent(1 - WORKING_EXAMPLE)} of the year stuck flat would cost ${run.mount.id} ${loss({ working: WORKING_EXAMPLE, stuck: 'flat' })} of its energy`,
+          effect: `${percent(1 - WORKING_EXAMPLE)} of the year stuck ${stuck === 'flat' ? 'flat' : 'facing the equator'} would cost ${run.mount.id} ${loss({ working: WORKING_EXAMPLE, stuck })} of its energy`,
         });
       if (drive.ownUse === null)
         lines.push({
           what: `mounts.${run.mount.id}.drive.own_use`,
           effect: `${percent(OWN_USE_EXAMPLE)} would cost ${run.mount.id} ${loss({ ownUse: OWN_USE_EXAMPLE })} of its energy`,
         });
-      lines.push(stowLine(c, run));
+      if (run.geometry.kind !== 'turntable') lines.push(stowLine(c, run)); // it has no flat to go to
       return lines;
     });
 

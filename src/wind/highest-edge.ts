@@ -34,6 +34,19 @@ export interface HighestEdge {
 export const steepestChordTiltDeg = (swingDeg: number, axisTiltDeg: number): number =>
   asinDeg(sinDeg(swingDeg) * cosDeg(axisTiltDeg));
 
+/**
+ * The same where axis and rows follow a slope: the angle whose sine is the upper edge's height over the ground below
+ * it, less that of the axis, per half chord: sin(swing + |cross-axis slope|) / cos(slope), at most 1. Plain geometry: a
+ * distance square to the slope is turned upright; the edge that stands out downhill is the higher one.
+ * @param crossAxisTiltDeg of the ground in the plane square to the axis, either sign
+ */
+export const steepestChordAboveSlopeDeg = (
+  swingDeg: number,
+  crossAxisTiltDeg: number,
+  slopeDeg: number,
+): number =>
+  asinDeg(Math.min(1, sinDeg(Math.min(90, swingDeg + Math.abs(crossAxisTiltDeg))) / cosDeg(slopeDeg)));
+
 const sumOrNull = (...parts: readonly (number | null)[]): number | null =>
   parts.reduce<number | null>((sum, part) => (sum === null || part === null ? null : sum + part), 0);
 

@@ -5,6 +5,7 @@ import {
   pointDualAxis,
   pointFixed,
   pointSingleAxis,
+  pointTurntable,
   type RowSpec,
 } from '../../src/mounts/index.ts';
 import { MONTH_FIRST_DAY, yearlySum } from '../../src/shared/index.ts';
@@ -162,6 +163,33 @@ test('the gains at latitude 35 are those worked out: 22.96 and 15.88 % on one ax
   expect(gain(tracker(sun, 60, null))).toBeCloseTo(22.96, 1);
   expect(gain(tracker(sun, 60, { gcr: 0.4, lowSun: 'backtrack' }))).toBeCloseTo(15.88, 1);
   expect(gain(pointDualAxis(sun, { kind: 'dual-axis', rows: null }))).toBeCloseTo(39.38, 1);
+});
+
+test('a turntable at its best tilt and a mast with limits stand between the best fixed plane and a free mast', () => {
+  const sun = textbookSun(35);
+  const sky = textbookSky(sun, 'clear');
+  const fixed = openLight(sun, sky, pointFixed(sun, 31.5, 180, null));
+  const dual = openLight(sun, sky, pointDualAxis(sun, { kind: 'dual-axis', rows: null }));
+  const turning = (planeTiltDeg: number) =>
+    openLight(sun, sky, pointTurntable(sun, { kind: 'turntable', planeTiltDeg, rows: null }));
+  const tilts = Array.from({ length: 91 }, (_, tilt) => turning(tilt));
+  const top = tilts.indexOf(Math.max(...tilts));
+  // One peak, at a tilt between that of the fixed plane and upright.
+  for (let t = 1; t <= 90; t++) expect(tilts[t] > tilts[t - 1]).toBe(t <= top);
+  expect(top).toBeGreaterThan(35);
+  expect(top).toBeLessThan(65);
+  // Jacobson & Jadhav 2018, Solar Energy 169: 1 to 3 % less than two axes in their global means; plausibility only.
+  expect(1 - tilts[top] / dual).toBeGreaterThan(0.01);
+  expect(1 - tilts[top] / dual).toBeLessThan(0.06);
+  expect(tilts[top]).toBeGreaterThan(fixed);
+  let before = dual;
+  for (const lowest of [10, 20, 40]) {
+    const limits = { turns: { fromDeg: 90, toDeg: 270 }, elevation: { lowestDeg: lowest, highestDeg: 80 } };
+    const limited = openLight(sun, sky, pointDualAxis(sun, { kind: 'dual-axis', rows: null, ...limits }));
+    expect(limited).toBeLessThan(before);
+    expect(limited).toBeGreaterThan(fixed);
+    before = limited;
+  }
 });
 
 test('every row of both tables was compared', () => {

@@ -1,6 +1,13 @@
 import { expect, test } from 'vitest';
 import { type ChainSpec, deliver, OPEN_RACK, planeViews } from '../../src/energy/index.ts';
-import { type Pointing, pointDualAxis, pointFixed, pointSingleAxis } from '../../src/mounts/index.ts';
+import {
+  axisTiltOnSlope,
+  type Pointing,
+  pointDualAxis,
+  pointFixed,
+  pointSingleAxis,
+  pointTurntable,
+} from '../../src/mounts/index.ts';
 import type { Place } from '../../src/shared/index.ts';
 import { orientationMap, type SkyHours, skyOverHours } from '../../src/sky/index.ts';
 import { SAMPLES_PER_HOUR, type SunHours, sunOverHours } from '../../src/sun/index.ts';
@@ -23,6 +30,8 @@ const spec = (temperatureC: Float64Array | null, windMs: Float64Array | null): C
   drive: null,
 });
 
+/** Of `mountsOf`. */
+const MOUNTS = 11;
 type Mounts = Record<string, (sun: SunHours) => Pointing>;
 const mountsOf = (tiltDeg: number, azimuthDeg: number, latitudeDeg: number): Mounts => {
   const axis = (axisTiltDeg: number, lowSun: 'backtrack' | 'shade') => (sun: SunHours) =>
@@ -40,8 +49,26 @@ const mountsOf = (tiltDeg: number, azimuthDeg: number, latitudeDeg: number): Mou
     'single axis, true tracking': axis(0, 'shade'),
     'single axis, backtracking': axis(0, 'backtrack'),
     'tilted axis, backtracking': axis(20, 'backtrack'),
+    'sloping ground, backtracking': (sun) =>
+      pointSingleAxis(sun, {
+        kind: 'single-axis',
+        axisAzimuthDeg: 180,
+        axisTiltDeg: axisTiltOnSlope(8, 230, 180),
+        swingDeg: 60,
+        rows: { gcr: 0.4, lowSun: 'backtrack' },
+        ground: { slopeDeg: 8, fallsTowardDeg: 230 },
+      }),
     'lone mast': (sun) => pointDualAxis(sun, { kind: 'dual-axis', rows: null }),
     'field of masts': (sun) => pointDualAxis(sun, { kind: 'dual-axis', rows: { gcr: 0.2, lowSun: 'shade' } }),
+    'mast with limits': (sun) =>
+      pointDualAxis(sun, {
+        kind: 'dual-axis',
+        rows: { gcr: 0.2, lowSun: 'shade' },
+        turns: { fromDeg: 90, toDeg: 270 },
+        elevation: { lowestDeg: 15, highestDeg: 80 },
+      }),
+    turntable: (sun) =>
+      pointTurntable(sun, { kind: 'turntable', planeTiltDeg: 50, rows: { gcr: 0.2, lowSun: 'shade' } }),
   };
 };
 
@@ -80,7 +107,7 @@ test('four samples an hour give every mount its year within 0.1 % of one-minute 
   }
   worst.light.print('light, 4 against 60 samples an hour, relative');
   worst.energy.print('energy, 4 against 60 samples an hour, relative');
-  expect(worst.light.count).toBe(4 * 8);
+  expect(worst.light.count).toBe(4 * MOUNTS);
   expect(worst.light.size).toBeLessThan(TOLERANCE);
   expect(worst.energy.size).toBeLessThan(TOLERANCE);
 });
@@ -103,7 +130,7 @@ describeWithWeather('on real years', () => {
     }
     worst.light.print('light on real years, 4 against 60 samples an hour, relative');
     worst.energy.print('energy on real years, 4 against 60 samples an hour, relative');
-    expect(worst.light.count).toBe(names.length * 8);
+    expect(worst.light.count).toBe(names.length * MOUNTS);
     expect(worst.light.size).toBeLessThan(TOLERANCE);
     expect(worst.energy.size).toBeLessThan(TOLERANCE);
   });

@@ -64,7 +64,8 @@ test('any value under any key is read or refused with places, never a crash', {
     'title', 'weather', 'site', 'sky', 'array', 'mounts', 'losses', 'finance', 'wind', 'advice', 'compare_with',
     'file', 'table', 'time', 'ghi', 'id', 'kind', 'tilt', 'rows', 'gcr', 'drive', 'working', 'cost', 'renewals', 'year', 'dc', 'heat',
     'bearing', 'magnetic', 'true', 'back', 'taken', 'downslope', 'dated', 'declination', 'slope', 'reading', 'rise', 'run',
-    'skyline', 'points', 'obstacles', 'bearings', 'error',
+    'skyline', 'points', 'obstacles', 'bearings', 'error', 'axis', 'ground', 'falls_toward', 'slope_limits', 'across',
+    'turns', 'from', 'to', 'elevation', 'lowest', 'highest', 'cloudy',
   ]; // biome-ignore format: one list
   const { value } = fc.letrec((tie) => ({
     value: fc.oneof(
@@ -82,6 +83,7 @@ test('any value under any key is read or refused with places, never a crash', {
         '5 ft',
         'best',
         'single-axis',
+        'turntable',
         'a',
         '-0.3 %/K',
         '16 E',

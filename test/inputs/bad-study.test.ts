@@ -86,6 +86,26 @@ describe('text that is no YAML', () => {
   });
 });
 
+describe('the ground under a tracker', () => {
+  const TRACKER = (keys: string) => MOUNT(`kind: single-axis, ${keys}`);
+  test.each([
+    ['ground: ¦{ slope: 6 % }', 'ground.falls_toward', 'missing-key', 'nothing'],
+    ['ground: ¦{ falls_toward: 200 }', 'ground.slope', 'missing-key', 'nothing'],
+    ['ground: { slope: ¦70, falls_toward: 200 }', 'ground.slope', 'wrong-value', '70'],
+    ['ground: { slope: ¦400 %, falls_toward: 200 }', 'ground.slope', 'wrong-value', '"400 %"'],
+    ['ground: { slope: ¦-3, falls_toward: 200 }', 'ground.slope', 'wrong-value', '-3'],
+    ['ground: { slope: 6 %, falls_toward: ¦south }', 'ground.falls_toward', 'wrong-value', '"south"'],
+    ['ground: ¦6 %', 'ground', 'wrong-type', '"6 %"'],
+    ['ground: { slope: 6 %, falls_toward: 200 }, axis: { tilt: ¦5 }', 'axis.tilt', 'given-twice', 'both'],
+    ['slope_limits: { across: ¦steep }', 'slope_limits.across', 'wrong-value', '"steep"'],
+    ['slope_limits: { ¦cross: 10 % }', 'slope_limits.cross', 'unknown-key', 'cross'],
+  ])('%s', async (keys, field, code, found) => {
+    const problem = await onlyProblem(TRACKER(keys));
+    expect(problem).toMatchObject({ field: `mounts.m.${field}`, code });
+    expect(problem.found).toContain(found);
+  });
+});
+
 describe('values out of their range or form', () => {
   test.each([
     ['site: { latitude: ¦95 }', 'site.latitude', '95', 'from -90 to 90'],
@@ -241,7 +261,7 @@ describe('mounts', () => {
     expect(problems.map((p) => p.field)).toEqual(
       ['kind', 'tilt', 'colour', 'rows.gcr', 'cost.capital'].map((key) => `mounts.m.${key}`),
     );
-    expect(problems[0].expected).toBe('one of roof-plane, fixed-tilt, single-axis, dual-axis');
+    expect(problems[0].expected).toBe('one of roof-plane, fixed-tilt, single-axis, dual-axis, turntable');
     for (const [kind, near] of [
       ['fixed-tlt', 'fixed-tilt'],
       ['Single_Axis', 'single-axis'],
@@ -291,9 +311,13 @@ describe('unknown keys', () => {
     [
       'kind: roof-plane, tilt: 3, azimuth: 4, ¦rows: { gcr: 0.4 }',
       'rows',
-      /fixed-tilt mounts, single-axis mounts and dual-axis mounts/,
+      /fixed-tilt mounts, single-axis mounts, dual-axis mounts and turntable mounts/,
     ],
-    ['kind: fixed-tilt, ¦drive: { own_use: 1 % }', 'drive', /single-axis mounts and dual-axis mounts/],
+    [
+      'kind: fixed-tilt, ¦drive: { own_use: 1 % }',
+      'drive',
+      /single-axis mounts, dual-axis mounts and turntable mounts/,
+    ],
     ['kind: single-axis, ¦tilt: 20', 'tilt', /axis of single-axis mounts/],
     ['kind: fixed-tilt, rows: { gcr: 0.4, ¦low_sun: shade }', 'rows.low_sun', /rows of single-axis mounts/],
     ['kind: fixed-tilt, ¦gcr: 0.4', 'gcr', /rows of fixed-tilt mounts/],
@@ -414,4 +438,29 @@ compare_with: "\\u0085"
       expect(text).not.toMatch(/[^\P{C}\u00ad]|[\u2028\u2029]/u);
       expect(text.length).toBeLessThan(400);
     }
+});
+
+describe('the reach of a mast', () => {
+  test.each([
+    ['dual-axis', 'turns: { from: 60, to: ¦60 }', 'turns.to', 'no-turn'],
+    ['dual-axis', 'turns: { from: 0, to: ¦360 }', 'turns.to', 'no-turn'],
+    ['turntable', 'turns: ¦{ from: 60 }', 'turns.to', 'missing-key'],
+    ['turntable', 'turns: { from: ¦-60, to: 60 }', 'turns.from', 'wrong-value'],
+    ['dual-axis', 'elevation: { lowest: ¦60 deg, highest: 20 }', 'elevation.lowest', 'limits-crossed'],
+    ['dual-axis', 'elevation: { highest: ¦100 }', 'elevation.highest', 'wrong-value'],
+    ['turntable', '¦elevation: { lowest: 10 }', 'elevation', 'unknown-key'],
+    ['turntable', '¦azimuth: 180', 'azimuth', 'unknown-key'],
+    ['turntable', 'tilt: ¦95', 'tilt', 'wrong-value'],
+    ['turntable', 'drive: { working: 97 %, stuck: ¦flat }', 'drive.stuck', 'wrong-value'],
+    ['turntable', 'drive: ¦{ working: 97 % }', 'drive.stuck', 'missing-key'],
+  ])('%s with %s', async (kind, keys, field, code) => {
+    const problem = await onlyProblem(MOUNT(`kind: ${kind}, ${keys}`));
+    expect(problem).toMatchObject({ field: `mounts.m.${field}`, code });
+    if (keys.includes('97 % }')) expect(problem.fix).toContain('equator');
+  });
+
+  test('a turntable is no mount to count gains from', async () => {
+    const problem = await onlyProblem(`${MOUNT('kind: turntable').replace('¦', '')}compare_with: ¦m\n`);
+    expect(problem).toMatchObject({ code: 'reference-moves', found: 'm, a turntable' });
+  });
 });

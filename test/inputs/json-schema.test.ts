@@ -74,8 +74,10 @@ describe('the JSON Schema of a study', () => {
       'fixed-tilt',
       'single-axis',
       'dual-axis',
+      'turntable',
     ]);
     expect(kinds.map((k) => k.required)).toEqual([
+      ['kind', 'id'],
       ['kind', 'id'],
       ['kind', 'id'],
       ['kind', 'id'],

@@ -297,6 +297,52 @@ mounts:
   expect(mounts[2].drive).toStrictEqual({ working: null, stuck: null, ownUse: 0.002 });
 });
 
+test('the tilt of an axis on sloping ground follows from the ground', async () => {
+  const { mounts } = await read(`weather: { file: a.epw }
+mounts:
+  - id: t
+    kind: single-axis
+    axis: { azimuth: 195 }
+    ground: { slope: 10 deg, falls_toward: 180 }
+    slope_limits: { along: 15 %, across: 5.7 }
+`);
+  expect(mounts[0].geometry).toStrictEqual({
+    kind: 'single-axis',
+    axisAzimuthDeg: 195,
+    axisTiltDeg: expect.closeTo(9.666, 3), // Anderson & Mikofski 2020, NREL/TP-5K00-76626, eq. 18
+    swingDeg: 60,
+    rows: null,
+    ground: { slopeDeg: 10, fallsTowardDeg: 180 },
+    slopeLimits: { alongDeg: expect.closeTo(8.5308, 4), acrossDeg: 5.7 }, // atan 0.15
+  });
+});
+
+test('the reach of masts and the tilt of turntables arrive, and what is blank is left out', async () => {
+  const { mounts } = await read(`weather: { file: a.epw }
+mounts:
+  - { id: m, kind: dual-axis, turns: { from: 300, to: 60 deg }, elevation: { lowest: 15 } }
+  - { id: t, kind: turntable, tilt: 100 %, turns: { from: 60, to: 300 }, drive: { working: 90 %, stuck: equator } }
+  - { id: b, kind: turntable, rows: { gcr: 0.2 } }
+`);
+  expect(mounts.map(({ geometry }) => geometry)).toStrictEqual([
+    {
+      kind: 'dual-axis',
+      rows: null,
+      turns: { fromDeg: 300, toDeg: 60 },
+      elevation: { lowestDeg: 15, highestDeg: 90 },
+    },
+    {
+      kind: 'turntable',
+      planeTiltDeg: expect.closeTo(45, 9),
+      rows: null,
+      turns: { fromDeg: 60, toDeg: 300 },
+    },
+    { kind: 'turntable', planeTiltDeg: 'best', rows: { gcr: 0.2, lowSun: 'shade' } },
+  ]);
+  expect(mounts[1].drive).toStrictEqual({ working: 0.9, stuck: 'equator', ownUse: null });
+  expect(mounts[2].drive).toStrictEqual({ working: null, stuck: null, ownUse: null });
+});
+
 test('anchors and aliases may share a group between mounts', async () => {
   const { mounts } = await read(`weather: { file: a.epw }
 mounts:

@@ -25,6 +25,7 @@ describe('the template of a study', () => {
       'single-axis',
       'roof-plane',
       'dual-axis',
+      'turntable',
     ]);
     expect(study.mounts.every((m) => m.cost !== null)).toBe(true);
     const { site, losses, finance } = study;

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
-import { pointMount, type ResolvedGeometry } from '../../src/mounts/index.ts';
+import { axisTiltOnSlope, pointMount, type ResolvedGeometry } from '../../src/mounts/index.ts';
 import { acosDeg, cosDeg, sinDeg } from '../../src/shared/index.ts';
 import { sunOverHours } from '../../src/sun/index.ts';
 
@@ -21,7 +21,7 @@ const worstMismatch = (mount: ResolvedGeometry): number => {
   return worst;
 };
 
-test('azimuth and tilt of a single-axis tracker give its angle of incidence, whatever its axis, swing and rows', () => {
+test('azimuth and tilt of a single-axis tracker give its angle of incidence, whatever its axis, swing, rows and ground', () => {
   fc.assert(
     fc.property(
       fc.record({
@@ -30,13 +30,19 @@ test('azimuth and tilt of a single-axis tracker give its angle of incidence, wha
       }),
       fc.double({ min: 20, max: 90, noNaN: true }),
       fc.option(fc.record({ gcr: fc.double({ min: 0.1, max: 0.8, noNaN: true }), back: fc.boolean() })),
-      ({ axis, tilt }, swingDeg, rows) => {
+      fc.boolean(),
+      ({ axis, tilt }, swingDeg, rows, sloping) => {
+        const ground = { slopeDeg: tilt / 3, fallsTowardDeg: 360 - axis };
         const mount: ResolvedGeometry = {
           kind: 'single-axis',
           axisAzimuthDeg: axis,
           axisTiltDeg: tilt,
           swingDeg,
           rows: rows && { gcr: rows.gcr, lowSun: rows.back ? 'backtrack' : 'shade' },
+          ...(sloping && {
+            axisTiltDeg: axisTiltOnSlope(ground.slopeDeg, ground.fallsTowardDeg, axis),
+            ground,
+          }),
         };
         // The angle from its cosine is good to the square root of rounding near 0 degrees.
         expect(worstMismatch(mount)).toBeLessThan(1e-6);
@@ -49,4 +55,9 @@ test('azimuth and tilt of a single-axis tracker give its angle of incidence, wha
 test('so do those of fixed planes and masts', () => {
   expect(worstMismatch({ kind: 'roof-plane', tiltDeg: 14, azimuthDeg: 166 })).toBeLessThan(1e-9);
   expect(worstMismatch({ kind: 'dual-axis', rows: null })).toBeLessThan(1e-6);
+  const limits = { turns: { fromDeg: 100, toDeg: 250 }, elevation: { lowestDeg: 20, highestDeg: 60 } };
+  expect(worstMismatch({ kind: 'dual-axis', rows: null, ...limits })).toBeLessThan(1e-9);
+  expect(worstMismatch({ kind: 'turntable', planeTiltDeg: 35, rows: null })).toBeLessThan(1e-9);
+  const north = { turns: { fromDeg: 300, toDeg: 60 } };
+  expect(worstMismatch({ kind: 'turntable', planeTiltDeg: 35, rows: null, ...north })).toBeLessThan(1e-9);
 });

@@ -1,7 +1,12 @@
 /** Geometry by hand arithmetic; lengths invented. */
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
-import { type EdgeGeometry, highestEdge, steepestChordTiltDeg } from '../../src/wind/index.ts';
+import {
+  type EdgeGeometry,
+  highestEdge,
+  steepestChordAboveSlopeDeg,
+  steepestChordTiltDeg,
+} from '../../src/wind/index.ts';
 
 const BLANK: Omit<EdgeGeometry, 'arrangement' | 'steepestTiltDeg'> = {
   slantM: null,
@@ -34,6 +39,24 @@ test('a single-axis tracker reaches axis height plus half its chord at full swin
   expect(highestEdge({ ...tracker, steepestTiltDeg: level }).aboveGroundM).toBeCloseTo(1.5 + Math.sqrt(3), 9);
   // axis tilted 60 degrees: the chord's vertical part is halved, sin 30 = cos 60 sin 90
   expect(steepestChordTiltDeg(90, 60)).toBeCloseTo(30, 9);
+});
+
+test('on a slope across the axis the edge that stands out downhill is higher above its ground', () => {
+  // Half a chord of 2 at 50 degrees rises 2 sin 50 over the axis while the ground falls 2 cos 50 tan 10 below it.
+  const DEG = Math.PI / 180;
+  const rise = 2 * Math.sin(50 * DEG) + 2 * Math.cos(50 * DEG) * Math.tan(10 * DEG);
+  for (const cross of [10, -10]) {
+    const steepestTiltDeg = steepestChordAboveSlopeDeg(50, cross, 10);
+    const tracker = {
+      ...BLANK,
+      arrangement: 'tracker',
+      slantM: 4,
+      axisHeightM: 1.5,
+      steepestTiltDeg,
+    } as const;
+    expect(highestEdge(tracker).aboveGroundM).toBeCloseTo(1.5 + rise, 9);
+  }
+  expect(steepestChordAboveSlopeDeg(60, 0, 0)).toBeCloseTo(60, 9);
 });
 
 test('a dual-axis mast reaches axis height plus half its chord', () => {

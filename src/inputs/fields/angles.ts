@@ -1,9 +1,9 @@
 import { tiltOfSlopeText } from '../../survey/index.ts';
 import type { Convert } from '../convert.ts';
-import { field, orWord } from './field.ts';
+import { field, orWord, Refusal } from './field.ts';
 import type { QuantityRule } from './quantity.ts';
 import { numberOrText, quantity, quantityWords, readQuantity } from './quantity.ts';
-import { plainText } from './range.ts';
+import { inRange, plainText } from './range.ts';
 import { asWritten, bySurvey } from './readings.ts';
 
 type AngleRule = Omit<QuantityRule, 'description'>;
@@ -14,6 +14,19 @@ const TILT: AngleRule = {
   range: { min: 0, max: 90 },
   example: '30 deg',
   fix: 'Flat is 0, upright is 90; write 30 deg, a slope such as 3:12, or a grade such as 25 %.',
+};
+const STEEPNESS: AngleRule = {
+  what: 'a steepness of the ground',
+  unit: 'deg',
+  range: { min: 0, max: 60 },
+  example: '6 %',
+  fix: 'Write a grade such as 6 %, an angle such as 3.4 deg, or a slope such as 1:12; 60 degrees is the most.',
+};
+const FACED: AngleRule = {
+  what: 'a height of the sun',
+  unit: 'deg',
+  range: { min: 0, max: 90 },
+  example: '15 deg',
 };
 const AZIMUTH: AngleRule = {
   what: 'a direction',
@@ -30,9 +43,10 @@ const SWING: AngleRule = {
 };
 
 /** Degrees from horizontal; `25 %` is a grade (rise over run) and `3:12` a slope. */
-const readTilt = (raw: unknown, convert: Convert): number => {
+const readTilt = (raw: unknown, convert: Convert, rule = TILT): number => {
   const slope = typeof raw === 'string' ? bySurvey(() => tiltOfSlopeText(plainText(raw))) : null;
-  return slope ?? readQuantity(raw, TILT, convert);
+  if (slope !== null && !inRange(slope, rule.range)) throw new Refusal(quantityWords(rule), rule.fix ?? '');
+  return slope ?? readQuantity(raw, rule, convert);
 };
 
 const wordsOf = (rule: AngleRule, description: string) => ({
@@ -51,6 +65,10 @@ const wordsOrBest = (rule: AngleRule, description: string) => ({
 
 export const tilt = (convert: Convert, description: string) =>
   field(wordsOf(TILT, description), (raw) => readTilt(raw, convert));
+
+/** Of the ground, or of the ground that a maker allows. */
+export const steepness = (convert: Convert, description: string) =>
+  field(wordsOf(STEEPNESS, description), (raw) => readTilt(raw, convert, STEEPNESS));
 
 export interface WrittenTilt {
   readonly tiltDeg: number;
@@ -80,6 +98,9 @@ export const azimuthOrBest = (convert: Convert, description: string) =>
   field(wordsOrBest(AZIMUTH, description), (raw) =>
     orWord(raw, 'best', () => readQuantity(raw, AZIMUTH, convert)),
   );
+
+/** Elevation of the sun that a mast can face. */
+export const faced = (convert: Convert, description: string) => quantity(convert, { ...FACED, description });
 
 /** Greatest turn of a tracker either way from flat. */
 export const swing = (convert: Convert, description: string) => quantity(convert, { ...SWING, description });

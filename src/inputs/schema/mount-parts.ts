@@ -59,7 +59,7 @@ const trackerRows = () =>
     })
     .register(hints, { description: 'Rows of trackers. Blank: one row, true tracking.' });
 
-const drive = () =>
+const drive = (stuck: ReturnType<typeof choice<'flat' | 'equator'>>) =>
   z
     .strictObject({
       working: z.optional(
@@ -71,7 +71,7 @@ const drive = () =>
             'Share of the time that the tracker works. Blank: downtime is not counted, which flatters it.',
         }),
       ),
-      stuck: z.optional(choice(['flat'], 'How it stands while it does not work. Needed with working.')),
+      stuck: z.optional(stuck),
       own_use: z.optional(
         share({
           what: 'a share of the yield',
@@ -103,7 +103,14 @@ export const mountParts = (convert: Convert, has: Present) => ({
   },
   rows: z.optional(rows()),
   trackerRows: z.optional(trackerRows()),
-  drive: z.optional(drive()),
+  drive: z.optional(drive(choice(['flat'], 'How it stands while it does not work. Needed with working.'))),
+  turntableDrive: wherePresent(has('drive'), () =>
+    z.optional(
+      drive(
+        choice(['equator'], 'Which way it faces while it does not work, at its tilt. Needed with working.'),
+      ),
+    ),
+  ),
   slant: length(convert, 'a slant length', '3.5 m', 'Length of a rack or tracker, measured along its slope.'),
   axisHeight: length(convert, 'a height', '1.5 m', 'Height of the axis above ground.'),
   lowerEdge: length(convert, 'a height', '0.8 m', 'Height of the lower edge above ground.', 'or zero'),

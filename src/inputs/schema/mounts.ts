@@ -1,10 +1,11 @@
 import * as z from 'zod/mini';
 import type { Convert } from '../convert.ts';
-import { azimuth, azimuthOrBest, swing, tilt, tiltOrBest } from '../fields/angles.ts';
+import { azimuth, azimuthOrBest, faced, steepness, swing, tilt, tiltOrBest } from '../fields/angles.ts';
 import { hints } from '../fields/field.ts';
+import { choice } from '../fields/words.ts';
 import { mountParts } from './mount-parts.ts';
 import type { Present } from './present.ts';
-import { once } from './present.ts';
+import { once, wherePresent } from './present.ts';
 
 type Parts = ReturnType<typeof mountParts>;
 
@@ -59,13 +60,41 @@ const axis = (convert: Convert) =>
     })
     .register(hints, { description: 'The axis. Blank: level, north-south.' });
 
-const singleAxis = (convert: Convert, { common, trackerRows, slant, axisHeight, drive }: Parts) =>
+const ground = (convert: Convert) =>
+  z
+    .strictObject({
+      slope: steepness(convert, 'Steepness of the ground, straight down: a grade (6 %), degrees, a slope.'),
+      falls_toward: azimuth(convert, 'The way straight down: degrees clockwise from true north.'),
+    })
+    .register(hints, {
+      description:
+        'The ground that axis and rows follow; tilt of the axis and slope across it are worked out. Blank: level.',
+    });
+
+const slopeLimits = (convert: Convert) =>
+  z
+    .strictObject({
+      along: z.optional(steepness(convert, 'Steepest ground along the axis. Blank: not checked.')),
+      across: z.optional(steepness(convert, 'Steepest ground straight across the axis. Blank: not checked.')),
+    })
+    .register(hints, { description: "The maker's limits of the ground's slope. Blank: not checked." });
+
+const singleAxis = (
+  convert: Convert,
+  { common, trackerRows, slant, axisHeight, drive }: Parts,
+  has: Present,
+) =>
   z
     .strictObject({
       kind: z.literal('single-axis'),
       ...common,
       axis: z.optional(axis(convert)),
+      ground: wherePresent(has('ground'), () => z.optional(ground(convert))),
+      slope_limits: wherePresent(has('slope_limits'), () => z.optional(slopeLimits(convert))),
       swing: z.optional(swing(convert, 'Greatest turn either way from flat, degrees. Blank: 60.')),
+      cloudy: z.optional(
+        choice(['track', 'flat'], 'Under an overcast sky: keep to the sun (also if blank), or lie flat.'),
+      ),
       rows: trackerRows,
       slant,
       axis_height: axisHeight,
@@ -73,10 +102,62 @@ const singleAxis = (convert: Convert, { common, trackerRows, slant, axisHeight, 
     })
     .register(hints, { description: 'A tracker that turns about one axis.' });
 
-const dualAxis = ({ common, rows, slant, axisHeight, drive }: Parts) =>
+const turns = (convert: Convert) =>
   z
-    .strictObject({ kind: z.literal('dual-axis'), ...common, rows, slant, axis_height: axisHeight, drive })
+    .strictObject({
+      from: azimuth(convert, 'First azimuth that it can face: degrees clockwise from true north.'),
+      to: azimuth(convert, 'Last azimuth that it can face, clockwise from the first.'),
+    })
+    .register(hints, { description: 'The azimuths that it can face, clockwise. Blank: all round.' });
+
+const elevation = (convert: Convert) =>
+  z
+    .strictObject({
+      lowest: z.optional(
+        faced(convert, 'Lowest sun that it can face, degrees above the horizon. Blank: 0, standing upright.'),
+      ),
+      highest: z.optional(
+        faced(convert, 'Highest sun that it can face, degrees above the horizon. Blank: 90, lying flat.'),
+      ),
+    })
+    .register(hints, { description: 'How high it can face: 90 less its tilt. Blank: from upright to flat.' });
+
+const dualAxis = (convert: Convert, { common, rows, slant, axisHeight, drive }: Parts, has: Present) =>
+  z
+    .strictObject({
+      kind: z.literal('dual-axis'),
+      ...common,
+      turns: wherePresent(has('turns'), () => z.optional(turns(convert))),
+      elevation: wherePresent(has('elevation'), () => z.optional(elevation(convert))),
+      rows,
+      slant,
+      axis_height: axisHeight,
+      drive,
+    })
     .register(hints, { description: 'A tracker that faces the sun. Without rows it is a lone mast.' });
+
+const turntable = (
+  convert: Convert,
+  { common, rows, slant, axisHeight, turntableDrive }: Parts,
+  has: Present,
+) =>
+  z
+    .strictObject({
+      kind: z.literal('turntable'),
+      ...common,
+      tilt: z.optional(
+        tiltOrBest(
+          convert,
+          'Held all year: degrees from horizontal, a slope (3:12), a grade (25 %), or best (also if blank).',
+        ),
+      ),
+      turns: wherePresent(has('turns'), () => z.optional(turns(convert))),
+      rows,
+      slant,
+      axis_height: axisHeight,
+      drive: turntableDrive,
+    })
+    .register(hints, { description: 'A tracker that turns about an upright axis and keeps its tilt.' });
 
 /** One schema for each kind of mount, made at its first use; its keys are the kind's own. `has` looks into all mounts. */
 export const mountSchemas = (convert: Convert, has: Present) => {
@@ -84,8 +165,9 @@ export const mountSchemas = (convert: Convert, has: Present) => {
   return {
     'roof-plane': once(() => roofPlane(convert, parts())),
     'fixed-tilt': once(() => fixedTilt(convert, parts())),
-    'single-axis': once(() => singleAxis(convert, parts())),
-    'dual-axis': once(() => dualAxis(parts())),
+    'single-axis': once(() => singleAxis(convert, parts(), has)),
+    'dual-axis': once(() => dualAxis(convert, parts(), has)),
+    turntable: once(() => turntable(convert, parts(), has)),
   };
 };
 

@@ -96,6 +96,7 @@ export const wholeStudy = (convert: Convert) => {
     kinds['fixed-tilt'](),
     kinds['single-axis'](),
     kinds['dual-axis'](),
+    kinds.turntable(),
   ]);
   return studyWith(convert, mount, everything);
 };

@@ -1,5 +1,5 @@
-import type { Comparison } from '../../shared/index.ts';
-import { limitsOf, limitWords } from '../limit-words.ts';
+import type { Comparison, MountResult } from '../../shared/index.ts';
+import { isGrade, limitsOf, limitWords } from '../limit-words.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
 import { formatNumber, formatUpTo, UNKNOWN } from '../numbers.ts';
 import { showsWind, windDeferral } from '../wind-words.ts';
@@ -27,12 +27,20 @@ const heights = (c: Comparison): string =>
     ]),
   );
 
+const inFull = (c: Comparison, m: MountResult, limit: MountResult['limits'][number]): string =>
+  `${md(nameOf(c, m))}: ${md(limit.detail ? `${limit.name} ${limit.detail}` : limitWords(limit))}.`;
+
+/** The maker's limits of the ground's slope; nothing where the study gives none. */
+const grades = (c: Comparison): string => {
+  const items = c.mounts.flatMap((m) => m.limits.filter(isGrade).map((limit) => inFull(c, m, limit)));
+  return items.length === 0 ? '' : `The slope of the ground:\n\n${mdList(items)}`;
+};
+
 const limits = (c: Comparison): string => {
   const items = c.mounts.flatMap((m) =>
-    limitsOf(m, 'most').map(
-      (limit) =>
-        `${md(nameOf(c, m))}: ${md(limit.detail ? `${limit.name} ${limit.detail}` : limitWords(limit))}.`,
-    ),
+    limitsOf(m, 'most')
+      .filter((limit) => !isGrade(limit))
+      .map((limit) => inFull(c, m, limit)),
   );
   return items.length > 0 ? mdList(items) : 'The study gives no limit of height or projection: not checked.';
 };
@@ -46,9 +54,14 @@ export const wind = (c: Comparison): string =>
         basis(c),
         heights(c),
         limits(c),
+        grades(c),
         legend(c),
       )
-    : section('Wind and height', 'Not checked: the study gives no wind, heights or limits of height.');
+    : section(
+        'Wind and height',
+        'Not checked: the study gives no wind, heights or limits of height.',
+        grades(c),
+      );
 
 const legend = (c: Comparison): string =>
   c.mounts.some(({ wind: w }) =>
