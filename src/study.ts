@@ -132,6 +132,10 @@ const fixedArraysInstead = (
           }),
         );
 
+/** Half of the band that reading errors leave to a plane's light, as a share of it. */
+const readingError = ({ orientation_factor: factor, orientation_factor_band: band }: MountResult): number =>
+  factor && band ? (band.high - band.low) / 2 / factor : 0;
+
 const adviceMount = (result: MountResult, run: MountRun, study: Study, array: ArraySummary): AdviceMount => ({
   ...result,
   by_sky: Object.fromEntries(
@@ -148,6 +152,7 @@ const adviceMount = (result: MountResult, run: MountRun, study: Study, array: Ar
       ];
     }),
   ) as Record<SkyModel, AdviceMount['by_sky'][SkyModel]>,
+  reading_error: readingError(result),
   downtime_blank: isTracker(run.geometry) && (run.mount.drive?.working ?? null) === null,
 });
 

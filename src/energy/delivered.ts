@@ -107,7 +107,7 @@ const passThroughYear = (sky: SkyHours, views: PlaneViews, spec: ChainSpec): Yea
       pass.lit += lit;
       pass.heated += dc;
       uncapped[h] = power;
-      ac += power < ceiling ? power : ceiling;
+      ac += Math.min(power, ceiling);
     }
     pass.open[month] = open;
     pass.skyline[month] = pastSkyline;
