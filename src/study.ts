@@ -116,10 +116,12 @@ const fixedArraysInstead = (
   isTracker(reference.geometry)
     ? []
     : mounts
+        .map((result, i) => ({ ...result, cost: runs[i].mount.cost }))
         .filter((_, i) => isTracker(runs[i].geometry))
         .map((tracker) =>
           sameEnergy({
             tracker,
+            finance: study.finance,
             reference: reference.mount,
             targetKwh: tracker.energy_kwh,
             energyOfDcKw: (dcKw) =>
