@@ -139,6 +139,7 @@ export {
   planeViews,
   type SkylineShade,
   type Stage,
+  type StuckAt,
   skylineShade,
 } from './energy/index.ts';
 

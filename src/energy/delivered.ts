@@ -57,6 +57,10 @@ export interface Delivered {
   readonly energyMonthlyKwhPerKw: readonly number[];
   /** AC power before the inverter's ceiling, kW per kW, hour by hour. */
   readonly uncappedKwPerKw: Float64Array;
+  /** What one kW would deliver if its tracker stood dead all year; null where downtime is not counted. */
+  readonly deadKwhPerKw: number | null;
+  /** That over what the tracker delivers while it works; null where downtime is not counted. */
+  readonly keptWhileDead: number | null;
 }
 
 /** One pass over the year: sums at each depth, kWh per kW of DC rating (1 kWh/m2 of light is 1 kWh per kW). */
@@ -134,13 +138,14 @@ const sum = (monthly: readonly number[]): number => monthly.reduce((total, month
  * spread, cables, conversion, the inverter's ceiling hour by hour, the drive's own use, and downtime.
  * A tracker that does not work delivers what it does where it is stuck: energy is `working` times the tracker's own
  * and `1 - working` times the stuck plane's (expected value; failures are taken as even over the year).
- * @param stuck views of the plane where a dead tracker lies; needed where `drive.working` is given
+ * @param stuck views of the planes where a dead tracker may stand, each as likely as the others; needed where
+ *   `drive.working` is given
  */
 export const deliver = (
   sky: SkyHours,
   views: PlaneViews,
   spec: ChainSpec,
-  stuck: PlaneViews | null = null,
+  stuck: readonly PlaneViews[] = [],
 ): Delivered => {
   const pass = passThroughYear(sky, views, spec);
   const irradiationKwhM2 = sum(pass.open);
@@ -163,8 +168,11 @@ export const deliver = (
     stage('drive', sum(ac));
   }
   const working = spec.drive?.working ?? null;
-  if (working !== null && stuck) {
-    const dead = passThroughYear(sky, stuck, spec).ac;
+  let [deadKwhPerKw, keptWhileDead]: (number | null)[] = [null, null];
+  if (working !== null && stuck.length > 0) {
+    const dead = meanOfMonths(stuck.map((views) => passThroughYear(sky, views, spec).ac));
+    deadKwhPerKw = sum(dead);
+    keptWhileDead = now > 0 ? deadKwhPerKw / now : null;
     ac = ac.map((kwh, month) => working * kwh + (1 - working) * dead[month]);
     stage('downtime', sum(ac));
   }
@@ -176,8 +184,14 @@ export const deliver = (
     energyKwhPerKw: sum(ac),
     energyMonthlyKwhPerKw: ac,
     uncappedKwPerKw: pass.uncapped,
+    deadKwhPerKw,
+    keptWhileDead,
   };
 };
+
+/** Month by month, the mean of years that are equally likely. */
+const meanOfMonths = (years: readonly (readonly number[])[]): number[] =>
+  years[0].map((_, month) => years.reduce((total, year) => total + year[month], 0) / years.length);
 
 /** Yearly AC energy of an array of `dcKw` under an inverter of `inverterKw` (null: none), kWh, from one kW's hours. */
 export const energyUnderInverter = (

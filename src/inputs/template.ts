@@ -65,6 +65,9 @@ array:
 # slope: { rise: 4 ft, run: 12 ft, rise_error: 1 in, run_error: 1 in } # the run is level
 # gcr is the slant length of a row over the distance from row to row. Give it for all ground mounts or for none:
 # where only one side has rows, no clear lead is claimed. Every price here is made up: put your quotes in.
+# A dead tracker may also stand at a known angle: about one axis, or for a tracker that faces the sun.
+# drive: { working: 97 %, stuck: { turn: 45, faces: east } }
+# drive: { working: 97 %, stuck: { tilt: 30, azimuth: 90 } }
 mounts:
   - id: ground
     kind: fixed-tilt
@@ -83,7 +86,8 @@ mounts:
 #    axis_height: 1.5 m # above ground
 #    drive:
 #      working: 97 %  # share of the time. Blank: downtime is not counted, which flatters the tracker
-#      stuck: flat    # how it stands when it does not work; needed with working
+#      stuck: flat    # how it stands when it does not work: flat, or average for where it stopped; needed with working
+#      visits: 2      # repair visits a year: listed, not priced
 #      own_use: 0.3 % # of the yield, used by the drive itself
 #    cost: # those without _per_kw are for the whole array
 #      capital_per_kw: 2100

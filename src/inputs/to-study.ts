@@ -1,17 +1,14 @@
 import type { CostSpec } from '../cost/index.ts';
-import type { ArraySpec, DriveSpec } from '../energy/index.ts';
+import type { ArraySpec, DriveSpec, StuckAt } from '../energy/index.ts';
 import type { MountGeometry, MountLengths, RowSpec } from '../mounts/index.ts';
 import type { TableColumn, TableColumns } from '../weather/index.ts';
 import type { WindSpec } from '../wind/index.ts';
+import { DEFAULT_ALBEDO, DEFAULT_AXIS_AZIMUTH_DEG, DEFAULT_SWING_DEG } from './defaults.ts';
 import type { RawMount } from './schema/mounts.ts';
 import type { RawStudy } from './schema/study.ts';
+import { sideTurn } from './side-turn.ts';
 import type { MountReadings, Study, StudyMount } from './study-file.ts';
 import { readingsOf, skylinesOf } from './to-readings.ts';
-
-/** Common practice, no source: grass and bare soil lie between 0.15 and 0.25. */
-const DEFAULT_ALBEDO = 0.2;
-/** Common practice, no source: the usual limit of a horizontal tracker. */
-const DEFAULT_SWING_DEG = 60;
 
 /** Only single-axis rows turn back; other rows take the shade as it falls. */
 const rowsOf = (
@@ -43,7 +40,7 @@ const geometryOf = (mount: RawMount, readings: MountReadings | null): MountGeome
     case 'single-axis':
       return {
         kind: mount.kind,
-        axisAzimuthDeg: mount.axis?.azimuth ?? 180,
+        axisAzimuthDeg: mount.axis?.azimuth ?? DEFAULT_AXIS_AZIMUTH_DEG,
         axisTiltDeg: mount.axis?.tilt ?? 0,
         swingDeg: mount.swing ?? DEFAULT_SWING_DEG,
         rows: rowsOf(mount.rows, 'backtrack'),
@@ -60,12 +57,23 @@ const lengthsOf = (mount: RawMount): MountLengths => ({
   airBehindM: ('air_behind' in mount ? mount.air_behind : null) ?? null,
 });
 
+const stuckOf = (mount: Extract<RawMount, { kind: 'single-axis' | 'dual-axis' }>): StuckAt | null => {
+  const stuck = mount.drive?.stuck;
+  if (stuck === undefined || typeof stuck === 'string') return stuck ?? null;
+  if ('tilt' in stuck) return { tiltDeg: stuck.tilt, azimuthDeg: stuck.azimuth };
+  const axisAzimuthDeg =
+    (mount.kind === 'single-axis' ? mount.axis?.azimuth : undefined) ?? DEFAULT_AXIS_AZIMUTH_DEG;
+  const { turn, faces } = stuck;
+  return { turnDeg: (faces && sideTurn(turn, faces, axisAzimuthDeg)) ?? turn };
+};
+
 /** Every tracker has a drive, even where the study says nothing of it. */
 const driveOf = (mount: RawMount): DriveSpec | null =>
   mount.kind === 'single-axis' || mount.kind === 'dual-axis'
     ? {
         working: mount.drive?.working ?? null,
-        stuck: mount.drive?.stuck ?? null,
+        stuck: stuckOf(mount),
+        visits: mount.drive?.visits ?? null,
         ownUse: mount.drive?.own_use ?? null,
       }
     : null;

@@ -8,3 +8,5 @@ export * from './row-view.ts';
 export * from './single-axis.ts';
 export * from './slope.ts';
 export type * from './spec.ts';
+export * from './still-tracker.ts';
+export * from './stopped-at-random.ts';

@@ -141,6 +141,18 @@ export interface MountResult {
   /** Product of the efficiencies times `irradiation_kwh_m2` is `energy_kwh_per_kw`. Counted stages only. */
   stages: { name: string; efficiency: number; kwh_per_kw_after: number; source: string }[];
   weakest_stage: string;
+  /** What a tracker does while it does not work; null where that is not counted. */
+  downtime: {
+    /** Share of the time that it works. */
+    working: number;
+    /** How it stands while it does not, in words. */
+    stuck: string;
+    /** kWh per kW that it would deliver in a year of standing so, and that over a year of working; null without light. */
+    stuck_kwh_per_kw: number;
+    kept_while_stuck: number | null;
+  } | null;
+  /** Repair visits a year, as given: listed, not priced. */
+  visits_per_year: number | null;
   capital: number | null;
   capital_per_kw: number | null;
   upkeep_per_year: number | null;

@@ -1,5 +1,5 @@
 import { breakEven, costOfEnergy, mountCost } from '../cost/index.ts';
-import { lightBySource } from '../energy/index.ts';
+import { type Delivered, lightBySource } from '../energy/index.ts';
 import type { Study } from '../inputs/index.ts';
 import { isTracker, type MountGeometry } from '../mounts/index.ts';
 import {
@@ -13,6 +13,7 @@ import { type EdgeGeometry, screenWind, steepestChordTiltDeg } from '../wind/ind
 import { type MountRun, shadingOf } from './mount-run.ts';
 import { factorBand, programmeLimits } from './orientation.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
+import { stuckWords } from './still-planes.ts';
 
 /** Energy per kW of DC rating in the month that gives least a day. */
 export const worstMonth = (monthlyKwhPerKw: readonly number[]): MountResult['worst_month'] => {
@@ -167,6 +168,8 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
       source: STAGE_SOURCES[s.name](run),
     })),
     weakest_stage: weakest.name,
+    downtime: downtimeOf(run, delivered),
+    visits_per_year: mount.drive?.visits ?? null,
     capital: cost.capital,
     capital_per_kw: cost.capitalPerKw,
     upkeep_per_year: cost.upkeepPerYear,
@@ -215,5 +218,19 @@ const STAGE_SOURCES: Record<
   conversion: () => 'given',
   'inverter ceiling': () => "the inverter's AC rating, hour by hour",
   drive: () => 'given',
-  downtime: () => 'given share of time working; stuck flat else',
+  downtime: ({ mount, geometry }) =>
+    `given share of time working; stuck ${stuckWords(mount.drive?.stuck ?? 'flat', geometry)} else`,
+};
+
+/** What a tracker delivers while it is dead; null where that is not counted. */
+const downtimeOf = ({ mount, geometry }: MountRun, delivered: Delivered): MountResult['downtime'] => {
+  const { working, stuck } = mount.drive ?? {};
+  const { deadKwhPerKw, keptWhileDead } = delivered;
+  if (working == null || stuck == null || deadKwhPerKw === null) return null;
+  return {
+    working,
+    stuck: stuckWords(stuck, geometry),
+    stuck_kwh_per_kw: deadKwhPerKw,
+    kept_while_stuck: keptWhileDead,
+  };
 };

@@ -12,7 +12,6 @@ import {
 import type { StudyMount } from '../inputs/index.ts';
 import {
   type BestAngles,
-  isTracker,
   type Pointing,
   pointMount,
   type ResolvedGeometry,
@@ -23,6 +22,7 @@ import { bestAzimuthAtTilt, bestTiltFacing } from '../sky/index.ts';
 import { powerLawFactor } from '../wind/index.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
 import type { MountSurvey } from './site-survey.ts';
+import { flatPlane, stuckPlanes } from './still-planes.ts';
 
 /** One mount with all that was worked out for it before money. */
 export interface MountRun {
@@ -30,8 +30,10 @@ export interface MountRun {
   readonly geometry: ResolvedGeometry;
   readonly gcr: number | null;
   readonly views: PlaneViews;
-  /** Trackers: the plane where a dead one lies. */
-  readonly stuck: PlaneViews | null;
+  /** Trackers: the plane lying flat (along its axis). */
+  readonly flat: PlaneViews | null;
+  /** Trackers: the planes where a dead one may stand, each as likely as the others. */
+  readonly stuck: readonly PlaneViews[];
   readonly chain: ChainSpec;
   readonly arrayHeightM: number;
   readonly survey: MountSurvey | null;
@@ -79,7 +81,8 @@ const runMount = (
   setting: Setting,
 ): MountRun => {
   const views = planeViews(setting.sun, pointing, setting.shade);
-  const stuck = isTracker(geometry) ? setting.flat : null;
+  const flat = flatPlane(setting, geometry);
+  const stuck = stuckPlanes(setting, geometry, mount.drive?.stuck ?? 'flat', flat);
   const arrayHeightM = arrayHeight(mount, geometry, setting.study.site.roofHeightM);
   const chain = chainOf(setting, mount, arrayHeightM);
   const delivered = {} as Record<SkyModel, Delivered>;
@@ -87,7 +90,7 @@ const runMount = (
   const gcr = 'rows' in geometry ? (geometry.rows?.gcr ?? null) : null;
   const survey = setting.survey.mounts.get(mount.id) ?? null;
   const worstPoint = worstPointOf(setting, views, pointing);
-  return { mount, geometry, gcr, views, stuck, chain, arrayHeightM, survey, worstPoint, delivered };
+  return { mount, geometry, gcr, views, flat, stuck, chain, arrayHeightM, survey, worstPoint, delivered };
 };
 
 const worstPointOf = (

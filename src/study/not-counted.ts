@@ -55,7 +55,7 @@ const driveLines = (c: Counted): NotCounted[] =>
     .filter((run) => isTracker(run.geometry))
     .flatMap((run) => {
       const energy = deliveredBy(c, run).energyKwhPerKw;
-      const drive = run.mount.drive ?? { working: null, stuck: null, ownUse: null };
+      const drive = run.mount.drive ?? { working: null, stuck: null, visits: null, ownUse: null };
       const loss = (change: Partial<typeof drive>) =>
         percent(1 - again(c, run, { drive: { ...drive, ...change } }).energyKwhPerKw / energy);
       const lines: NotCounted[] = [];
@@ -69,6 +69,11 @@ const driveLines = (c: Counted): NotCounted[] =>
           what: `mounts.${run.mount.id}.drive.own_use`,
           effect: `${percent(OWN_USE_EXAMPLE)} would cost ${run.mount.id} ${loss({ ownUse: OWN_USE_EXAMPLE })} of its energy`,
         });
+      if (drive.visits !== null)
+        lines.push({
+          what: `mounts.${run.mount.id}.drive.visits`,
+          effect: `${Number(drive.visits.toFixed(2))} visits a year are listed, not priced: put what they cost into its upkeep`,
+        });
       lines.push(stowLine(c, run));
       return lines;
     });
@@ -77,9 +82,9 @@ const driveLines = (c: Counted): NotCounted[] =>
 const stowLine = (c: Counted, run: MountRun): NotCounted => {
   const what = `wind stow of ${run.mount.id}`;
   const wind = c.year.windMs;
-  if (!wind || !run.stuck) return { what, effect: 'the weather file has no wind, so it cannot be estimated' };
+  if (!wind || !run.flat) return { what, effect: 'the weather file has no wind, so it cannot be estimated' };
   const working = deliver(c.sky, run.views, { ...run.chain, drive: null }).uncappedKwPerKw;
-  const flat = deliver(c.sky, run.stuck, { ...run.chain, drive: null }).uncappedKwPerKw;
+  const flat = deliver(c.sky, run.flat, { ...run.chain, drive: null }).uncappedKwPerKw;
   const ceiling = run.chain.ceilingKwPerKw ?? Number.POSITIVE_INFINITY;
   let [all, lost, hours] = [0, 0, 0];
   for (let h = 0; h < wind.length; h++) {

@@ -118,6 +118,8 @@ export const inventedMount = (m: InventedMount): MountResult => {
     worst_month: { month: MONTH_NAMES[worst], kwh_per_kw_day: perDay[worst] },
     stages,
     weakest_stage: m.kind === 'roof-plane' ? 'heat' : 'heat',
+    downtime: null,
+    visits_per_year: null,
     capital: null,
     capital_per_kw: null,
     upkeep_per_year: null,

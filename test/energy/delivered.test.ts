@@ -57,7 +57,12 @@ const anySpec: fc.Arbitrary<ChainSpec> = fc.record({
   }),
   ceilingKwPerKw: fc.option(fc.double({ min: 0.2, max: 1.2, noNaN: true }), { nil: null }),
   drive: fc.option(
-    fc.record({ working: share(1), stuck: fc.constant('flat' as const), ownUse: share(0.05) }),
+    fc.record({
+      working: share(1),
+      stuck: fc.constant('flat' as const),
+      visits: fc.constant(null),
+      ownUse: share(0.05),
+    }),
     { nil: null },
   ),
 });
@@ -67,7 +72,7 @@ describe('the chain', () => {
   test('multiplies: irradiation times every stage is the energy, to the last digits', () => {
     fc.assert(
       fc.property(anyViews, anySpec, (views, spec) => {
-        const d = deliver(sky, views, spec, flat);
+        const d = deliver(sky, views, spec, [flat]);
         expect(Math.abs(product(d) / d.energyKwhPerKw - 1)).toBeLessThan(1e-12);
         expect(d.stages.at(-1)!.kwhPerKwAfter / d.energyKwhPerKw).toBeCloseTo(1, 12);
         expect(d.energyMonthlyKwhPerKw.reduce((a, b) => a + b) / d.energyKwhPerKw).toBeCloseTo(1, 12);
@@ -80,7 +85,7 @@ describe('the chain', () => {
   test('never gains where it must not: every stage but heat and downtime keeps at most all', () => {
     fc.assert(
       fc.property(anyViews, anySpec, (views, spec) => {
-        for (const stage of deliver(sky, views, spec, flat).stages) {
+        for (const stage of deliver(sky, views, spec, [flat]).stages) {
           expect(stage.efficiency).toBeGreaterThan(0);
           // Cold modules beat their rating; a tracker stuck flat may beat one that turns out of its rows' shade.
           if (stage.name !== 'heat' && stage.name !== 'downtime')
@@ -94,7 +99,7 @@ describe('the chain', () => {
   test('counts only what is given: a blank takes no stage, and delivers what nothing would', () => {
     fc.assert(
       fc.property(anySpec, (spec) => {
-        const names = deliver(sky, lone, spec, flat).stages.map((s) => s.name);
+        const names = deliver(sky, lone, spec, [flat]).stages.map((s) => s.name);
         expect(names.includes('heat')).toBe(spec.ambient.temperatureC !== null);
         expect(names.includes('dirt')).toBe(spec.losses.dirt !== null);
         expect(names.includes('module spread')).toBe(spec.losses.moduleSpread !== null);
@@ -115,8 +120,8 @@ describe('the chain', () => {
     const blankDrive = deliver(
       sky,
       lone,
-      { ...nothing, drive: { working: null, stuck: null, ownUse: null } },
-      flat,
+      { ...nothing, drive: { working: null, stuck: null, visits: null, ownUse: null } },
+      [flat],
     );
     expect(blankDrive).toEqual(blank);
   });
@@ -178,8 +183,13 @@ describe('a tracker that is down', () => {
     deliver(
       sky,
       tracker,
-      { ...nothing, ambient: warm, ceilingKwPerKw: 0.7, drive: { working, stuck: 'flat', ownUse: null } },
-      flat,
+      {
+        ...nothing,
+        ambient: warm,
+        ceilingKwPerKw: 0.7,
+        drive: { working, stuck: 'flat', visits: null, ownUse: null },
+      },
+      [flat],
     );
 
   test('all year delivers what a flat plane does, and one that always works loses nothing', () => {

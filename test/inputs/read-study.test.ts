@@ -25,7 +25,7 @@ const BLANK: Omit<Study, 'title' | 'weather' | 'mounts'> = {
 };
 const WEATHER = { table: null, label: null, addMinutes: 0, acceptClock: false };
 const NO_LENGTHS = { slantM: null, axisHeightM: null, lowerEdgeM: null, airBehindM: null };
-const BLANK_DRIVE = { working: null, stuck: null, ownUse: null };
+const BLANK_DRIVE = { working: null, stuck: null, visits: null, ownUse: null };
 
 test('the simplest study gets the documented defaults, and null for all that is blank', async () => {
   const study = await read(`title: Orlin Bench
@@ -152,7 +152,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         },
         readings: null,
         lengths: NO_LENGTHS,
-        drive: { working: 0.97, stuck: 'flat', ownUse: 0.003 },
+        drive: { working: 0.97, stuck: 'flat', visits: null, ownUse: 0.003 },
         cost: { ...NO_COST, upkeep: 0, renewals: [{ what: 'drive', year: 12, cost: 800 }] },
       },
       {
@@ -294,7 +294,7 @@ mounts:
     rows: { gcr: 0.3, lowSun: 'shade' },
   });
   expect(mounts[1].lengths).toStrictEqual({ ...NO_LENGTHS, slantM: 2, axisHeightM: 1.5 });
-  expect(mounts[2].drive).toStrictEqual({ working: null, stuck: null, ownUse: 0.002 });
+  expect(mounts[2].drive).toStrictEqual({ working: null, stuck: null, visits: null, ownUse: 0.002 });
 });
 
 test('anchors and aliases may share a group between mounts', async () => {
@@ -310,4 +310,26 @@ test('what is read is not shared between two studies', async () => {
   const [a, b] = [await read(FULL), await read(FULL)];
   expect(a).toStrictEqual(b);
   expect(a.mounts[0]).not.toBe(b.mounts[0]);
+});
+
+test('a dead tracker stands flat, where it stopped, or as given; a side is a word and not a sign', async () => {
+  const stuck = async (kind: string, keys: string) => {
+    const text = `weather: { file: a }\nmounts: [ { id: m, kind: ${kind}, ${keys} } ]\n`;
+    return (await readStudy({ file: 'x', text })).mounts[0].drive;
+  };
+  const single = (at: string, keys = '') =>
+    stuck('single-axis', `drive: { working: 97 %, stuck: ${at}, visits: 2 }${keys}`);
+  expect(await single('average')).toStrictEqual({ working: 0.97, stuck: 'average', visits: 2, ownUse: null });
+  // With the axis falling south a positive turn faces west (src/mounts/single-axis.ts).
+  expect((await single('{ turn: 45, faces: west }'))?.stuck).toEqual({ turnDeg: 45 });
+  expect((await single('{ turn: 45, faces: east }'))?.stuck).toEqual({ turnDeg: -45 });
+  expect((await single('{ turn: 0 }'))?.stuck).toEqual({ turnDeg: 0 });
+  expect((await single('{ turn: 30, faces: east }', ', axis: { azimuth: 0 }'))?.stuck).toEqual({
+    turnDeg: 30,
+  });
+  expect((await single('{ turn: 30, faces: north }', ', axis: { azimuth: 270 }'))?.stuck).toEqual({
+    turnDeg: 30,
+  });
+  const dual = await stuck('dual-axis', 'drive: { working: 90 %, stuck: { tilt: 30, azimuth: 90 } }');
+  expect(dual?.stuck).toEqual({ tiltDeg: 30, azimuthDeg: 90 });
 });

@@ -1,7 +1,9 @@
 import * as z from 'zod/mini';
 import type { Convert } from '../convert.ts';
-import { hints } from '../fields/field.ts';
+import { azimuth, side, tilt, turn } from '../fields/angles.ts';
+import { field, hints, Refusal } from '../fields/field.ts';
 import { quantity } from '../fields/quantity.ts';
+import { inRange, numberAndRest } from '../fields/range.ts';
 import { share } from '../fields/share.ts';
 import { choice, text } from '../fields/words.ts';
 import { cost } from './money.ts';
@@ -59,7 +61,24 @@ const trackerRows = () =>
     })
     .register(hints, { description: 'Rows of trackers. Blank: one row, true tracking.' });
 
-const drive = () =>
+const visits = () =>
+  field(
+    {
+      description: 'Repair visits a year. Listed, not priced: put what they cost into upkeep.',
+      example: '2',
+      expected: VISITS,
+      form: { type: 'number', minimum: 0 },
+    },
+    (raw): number => {
+      const [amount, rest] = numberAndRest(raw, VISITS, 'Write for example 2.');
+      if (rest !== '' || !inRange(amount, { min: 0, max: 366 }))
+        throw new Refusal(VISITS, 'Write for example 2, or 0.5 for one in two years.');
+      return amount;
+    },
+  );
+const VISITS = 'a bare number of visits a year from 0 to 366';
+
+const drive = <S extends z.ZodMiniType>(stuckAt: S) =>
   z
     .strictObject({
       working: z.optional(
@@ -71,7 +90,8 @@ const drive = () =>
             'Share of the time that the tracker works. Blank: downtime is not counted, which flatters it.',
         }),
       ),
-      stuck: z.optional(choice(['flat'], 'How it stands while it does not work. Needed with working.')),
+      stuck: z.optional(stuckAt),
+      visits: z.optional(visits()),
       own_use: z.optional(
         share({
           what: 'a share of the yield',
@@ -82,6 +102,32 @@ const drive = () =>
       ),
     })
     .register(hints, { description: 'The drive of a tracker.' });
+
+const STUCK = { description: 'How it stands while it does not work. Needed with working.' };
+const stuckWord = () =>
+  choice(['flat', 'average'], 'Lying flat, or where it stopped, on average over all daylight.');
+
+const stuckTurn = (convert: Convert) =>
+  z
+    .union([
+      stuckWord(),
+      z.strictObject({
+        turn: turn(convert, 'Turn from flat about the axis, without a sign.'),
+        faces: z.optional(side()),
+      }),
+    ])
+    .register(hints, STUCK);
+
+const stuckPlane = (convert: Convert) =>
+  z
+    .union([
+      stuckWord(),
+      z.strictObject({
+        tilt: tilt(convert, 'Degrees from horizontal, a slope (3:12), a grade (25 %).'),
+        azimuth: azimuth(convert, 'The way it faces: degrees clockwise from true north, 180 is south.'),
+      }),
+    ])
+    .register(hints, STUCK);
 
 /** The parts that the kinds of mount share, each made once: making schemas is what reading a study costs most. */
 export const mountParts = (convert: Convert, has: Present) => ({
@@ -103,7 +149,8 @@ export const mountParts = (convert: Convert, has: Present) => ({
   },
   rows: z.optional(rows()),
   trackerRows: z.optional(trackerRows()),
-  drive: z.optional(drive()),
+  turningDrive: z.optional(drive(stuckTurn(convert))),
+  facingDrive: z.optional(drive(stuckPlane(convert))),
   slant: length(convert, 'a slant length', '3.5 m', 'Length of a rack or tracker, measured along its slope.'),
   axisHeight: length(convert, 'a height', '1.5 m', 'Height of the axis above ground.'),
   lowerEdge: length(convert, 'a height', '0.8 m', 'Height of the lower edge above ground.', 'or zero'),

@@ -5,6 +5,7 @@ import { hints } from '../fields/field.ts';
 import { mountParts } from './mount-parts.ts';
 import type { Present } from './present.ts';
 import { once } from './present.ts';
+import { turnIssues } from './turns.ts';
 
 type Parts = ReturnType<typeof mountParts>;
 
@@ -59,7 +60,7 @@ const axis = (convert: Convert) =>
     })
     .register(hints, { description: 'The axis. Blank: level, north-south.' });
 
-const singleAxis = (convert: Convert, { common, trackerRows, slant, axisHeight, drive }: Parts) =>
+const singleAxis = (convert: Convert, { common, trackerRows, slant, axisHeight, turningDrive }: Parts) =>
   z
     .strictObject({
       kind: z.literal('single-axis'),
@@ -69,13 +70,23 @@ const singleAxis = (convert: Convert, { common, trackerRows, slant, axisHeight, 
       rows: trackerRows,
       slant,
       axis_height: axisHeight,
-      drive,
+      drive: turningDrive,
+    })
+    .check(({ value, issues }) => {
+      issues.push(...turnIssues(value));
     })
     .register(hints, { description: 'A tracker that turns about one axis.' });
 
-const dualAxis = ({ common, rows, slant, axisHeight, drive }: Parts) =>
+const dualAxis = ({ common, rows, slant, axisHeight, facingDrive }: Parts) =>
   z
-    .strictObject({ kind: z.literal('dual-axis'), ...common, rows, slant, axis_height: axisHeight, drive })
+    .strictObject({
+      kind: z.literal('dual-axis'),
+      ...common,
+      rows,
+      slant,
+      axis_height: axisHeight,
+      drive: facingDrive,
+    })
     .register(hints, { description: 'A tracker that faces the sun. Without rows it is a lone mast.' });
 
 /** One schema for each kind of mount, made at its first use; its keys are the kind's own. `has` looks into all mounts. */
