@@ -101,6 +101,8 @@ export {
   exposureCoefficient,
   type HighestEdge,
   highestEdge,
+  type StowSpec,
+  stowHours,
   type VelocityPressure,
   velocityPressure,
   type WindSpec,

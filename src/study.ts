@@ -50,7 +50,7 @@ export const compareMounts = (study: Study, raw: RawYear, survey: SiteSurvey = N
   // advice
   const counted = { ...setting, runs, reference };
   const blanks = notCounted(counted);
-  const findings = [...ready.found.findings, ...survey.findings];
+  const findings = [...ready.found.findings, ...survey.findings, ...stowFindings(setting)];
   const adviceInput = {
     mounts: mounts.map((result, i) => adviceMount(result, runs[i], study, array)),
     referenceId: reference.mount.id,
@@ -104,6 +104,20 @@ export const compareMounts = (study: Study, raw: RawYear, survey: SiteSurvey = N
     advice: advise(adviceInput),
     assumptions: assumptionsOf(counted),
   };
+};
+
+/** A stow that cannot be counted must not pass for one that costs nothing. */
+const stowFindings = ({ study, year }: Setting): Finding[] => {
+  const parking = study.mounts.filter(({ stow }) => stow !== null).map(({ id }) => id);
+  if (parking.length === 0 || year.windMs) return [];
+  return [
+    {
+      code: 'stow-without-wind',
+      severity: 'warning',
+      text: `The weather file has no wind, so the stow of ${parking.join(', ')} is not counted, which flatters it.`,
+      fix: 'Use a year with wind at 10 m.',
+    },
+  ];
 };
 
 /** For each tracker, the array on the reference mount that delivers as much under the same inverter. */

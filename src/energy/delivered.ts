@@ -41,8 +41,15 @@ export type StageName =
   | 'cables'
   | 'conversion'
   | 'inverter ceiling'
+  | 'stow'
   | 'drive'
   | 'downtime';
+
+/** A plane that is parked in some hours: which (1), and its views while it is. */
+export interface Parked {
+  readonly stowed: Uint8Array;
+  readonly views: PlaneViews;
+}
 
 /** What one kW of DC rating delivers. */
 export interface Delivered {
@@ -55,8 +62,10 @@ export interface Delivered {
   readonly stages: readonly Stage[];
   readonly energyKwhPerKw: number;
   readonly energyMonthlyKwhPerKw: readonly number[];
-  /** AC power before the inverter's ceiling, kW per kW, hour by hour. */
+  /** AC power before the inverter's ceiling, kW per kW, hour by hour; in parked hours that of the parked plane. */
   readonly uncappedKwPerKw: Float64Array;
+  /** What parking takes by month, before the drive's own use and downtime; negative where it gives. Null where not counted. */
+  readonly lostToStowMonthlyKwhPerKw: readonly number[] | null;
   /** What one kW would deliver if its tracker stood dead all year; null where downtime is not counted. */
   readonly deadKwhPerKw: number | null;
   /** That over what the tracker delivers while it works; null where downtime is not counted. */
@@ -135,17 +144,20 @@ const sum = (monthly: readonly number[]): number => monthly.reduce((total, month
 
 /**
  * From the views of a plane and a sky to delivered AC energy, stage by stage: skyline, rows, incidence, heat, dirt, module
- * spread, cables, conversion, the inverter's ceiling hour by hour, the drive's own use, and downtime.
+ * spread, cables, conversion, the inverter's ceiling hour by hour, stow, the drive's own use, and downtime.
+ * A parked plane goes through the same chain; stow is the step from a plane that never parks to one that does.
  * A tracker that does not work delivers what it does where it is stuck: energy is `working` times the tracker's own
  * and `1 - working` times the stuck plane's (expected value; failures are taken as even over the year).
  * @param stuck views of the planes where a dead tracker may stand, each as likely as the others; needed where
  *   `drive.working` is given
+ * @param parked null: never parked
  */
 export const deliver = (
   sky: SkyHours,
   views: PlaneViews,
   spec: ChainSpec,
   stuck: readonly PlaneViews[] = [],
+  parked: Parked | null = null,
 ): Delivered => {
   const pass = passThroughYear(sky, views, spec);
   const irradiationKwhM2 = sum(pass.open);
@@ -162,6 +174,12 @@ export const deliver = (
   for (const [name, share] of constantShares(spec.losses)) stage(name, now * (1 - share));
   let ac = pass.ac;
   if (spec.ceilingKwPerKw !== null) stage('inverter ceiling', sum(ac));
+  let lostToStow: number[] | null = null;
+  if (parked) {
+    lostToStow = park(pass.uncapped, passThroughYear(sky, parked.views, spec).uncapped, parked.stowed, spec);
+    ac = ac.map((kwh, month) => kwh - (lostToStow as number[])[month]);
+    stage('stow', sum(ac));
+  }
   const ownUse = spec.drive?.ownUse ?? null;
   if (ownUse !== null) {
     ac = ac.map((kwh) => kwh * (1 - ownUse));
@@ -184,9 +202,28 @@ export const deliver = (
     energyKwhPerKw: sum(ac),
     energyMonthlyKwhPerKw: ac,
     uncappedKwPerKw: pass.uncapped,
+    lostToStowMonthlyKwhPerKw: lostToStow,
     deadKwhPerKw,
     keptWhileDead,
   };
+};
+
+/** Puts the parked plane's power in the parked hours of `uncapped`; returns what that takes under the ceiling, by month. */
+const park = (
+  uncapped: Float64Array,
+  still: Float64Array,
+  stowed: Uint8Array,
+  { ceilingKwPerKw }: ChainSpec,
+): number[] => {
+  const ceiling = ceilingKwPerKw ?? Number.POSITIVE_INFINITY;
+  const lost = new Array<number>(12).fill(0);
+  for (let month = 0; month < 12; month++)
+    for (let h = MONTH_FIRST_DAY[month] * 24; h < MONTH_FIRST_DAY[month + 1] * 24; h++) {
+      if (stowed[h] === 0) continue;
+      lost[month] += Math.min(uncapped[h], ceiling) - Math.min(still[h], ceiling);
+      uncapped[h] = still[h];
+    }
+  return lost;
 };
 
 /** Month by month, the mean of years that are equally likely. */

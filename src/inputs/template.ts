@@ -89,6 +89,13 @@ mounts:
 #      stuck: flat    # how it stands when it does not work: flat, or average for where it stopped; needed with working
 #      visits: 2      # repair visits a year: listed, not priced
 #      own_use: 0.3 % # of the yield, used by the drive itself
+#    stow: # parking in wind. Blank: not counted, which flatters the tracker
+#      gust: 18 m/s    # it parks when the weather's hourly wind at 10 m times gust_factor reaches this
+#      gust_factor: 1.5 # gust over hourly mean (default 1.5, an assumption)
+#      release: 12 m/s # it goes back to work once gusts stay below this. Blank: as gust
+#      hold: 3 h       # for so long. Blank: 0
+#      angle: 30       # turn from flat while parked; on a mast, tilt towards the equator. Blank: 0, flat
+#      faces: west     # the side to which it is turned
 #    cost: # those without _per_kw are for the whole array
 #      capital_per_kw: 2100
 #      capital: 500

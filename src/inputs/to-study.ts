@@ -2,8 +2,9 @@ import type { CostSpec } from '../cost/index.ts';
 import type { ArraySpec, DriveSpec, StuckAt } from '../energy/index.ts';
 import type { MountGeometry, MountLengths, RowSpec } from '../mounts/index.ts';
 import type { TableColumn, TableColumns } from '../weather/index.ts';
-import type { WindSpec } from '../wind/index.ts';
+import type { StowSpec, WindSpec } from '../wind/index.ts';
 import { DEFAULT_ALBEDO, DEFAULT_AXIS_AZIMUTH_DEG, DEFAULT_SWING_DEG } from './defaults.ts';
+import type { Side } from './fields/angles.ts';
 import type { RawMount } from './schema/mounts.ts';
 import type { RawStudy } from './schema/study.ts';
 import { sideTurn } from './side-turn.ts';
@@ -57,14 +58,31 @@ const lengthsOf = (mount: RawMount): MountLengths => ({
   airBehindM: ('air_behind' in mount ? mount.air_behind : null) ?? null,
 });
 
-const stuckOf = (mount: Extract<RawMount, { kind: 'single-axis' | 'dual-axis' }>): StuckAt | null => {
+type RawTracker = Extract<RawMount, { kind: 'single-axis' | 'dual-axis' }>;
+
+/** A turn with its sign from the side that it faces, once the axis is known. */
+const signed = (mount: RawTracker, turnDeg: number, faces: Side | undefined): number => {
+  const azimuthDeg = mount.kind === 'single-axis' ? mount.axis?.azimuth : undefined;
+  return (faces && sideTurn(turnDeg, faces, azimuthDeg ?? DEFAULT_AXIS_AZIMUTH_DEG)) ?? turnDeg;
+};
+
+const stuckOf = (mount: RawTracker): StuckAt | null => {
   const stuck = mount.drive?.stuck;
   if (stuck === undefined || typeof stuck === 'string') return stuck ?? null;
   if ('tilt' in stuck) return { tiltDeg: stuck.tilt, azimuthDeg: stuck.azimuth };
-  const axisAzimuthDeg =
-    (mount.kind === 'single-axis' ? mount.axis?.azimuth : undefined) ?? DEFAULT_AXIS_AZIMUTH_DEG;
-  const { turn, faces } = stuck;
-  return { turnDeg: (faces && sideTurn(turn, faces, axisAzimuthDeg)) ?? turn };
+  return { turnDeg: signed(mount, stuck.turn, stuck.faces) };
+};
+
+const stowOf = (mount: RawMount): StowSpec | null => {
+  if (!('stow' in mount) || !mount.stow) return null;
+  const { stow } = mount;
+  return {
+    gustMs: stow.gust,
+    gustFactor: stow.gust_factor ?? null,
+    releaseMs: stow.release ?? null,
+    holdH: stow.hold ?? 0,
+    angleDeg: signed(mount, stow.angle ?? 0, 'faces' in stow ? stow.faces : undefined),
+  };
 };
 
 /** Every tracker has a drive, even where the study says nothing of it. */
@@ -98,6 +116,7 @@ const mountOf = (mount: RawMount): StudyMount => {
     readings,
     lengths: lengthsOf(mount),
     drive: driveOf(mount),
+    stow: stowOf(mount),
     cost: costOf(mount),
   };
 };

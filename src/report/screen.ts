@@ -6,6 +6,7 @@ import { gainSentences } from './gain-words.ts';
 import { formatDaily, formatNumber, formatPlace } from './numbers.ts';
 import { capitalised, oneLine } from './plain-text.ts';
 import { tableLines, tableNotes } from './screen-table.ts';
+import { stowSentences } from './stow-words.ts';
 import { shadingLine } from './survey-words.ts';
 import { showsWind, windDeferral } from './wind-words.ts';
 import { monthInFull, mountById, nameOf, ratingWords, yearWords } from './words.ts';
@@ -25,6 +26,7 @@ const TITLE_COLUMNS = 48;
 const MOST_NOT_COUNTED = 4;
 const MOST_DOUBTS = 2;
 const MOST_DOWNTIMES = 3;
+const MOST_STOWS = 2;
 const MOST_GAINS = 3;
 const MOST_SWITCH_POINTS = 3;
 /** The design's limit for a clock that a recommendation can stand on. */
@@ -144,6 +146,7 @@ export const screenTable = (
     ...insteadLines(c, width),
     '',
     ...(lack === null ? [] : hanging('Costs', lack, INDENT, width)),
+    ...namedLines('Stow', stowSentences(c), MOST_STOWS, width),
     ...namedLines('Downtime', downtimeSentences(c), MOST_DOWNTIMES, width),
     ...namedLines(
       'Not counted',

@@ -5,7 +5,8 @@ import { DEFERRAL } from '../wind/index.ts';
 export const showsWind = (c: Comparison): boolean =>
   c.wind_basis !== null ||
   c.mounts.some(
-    ({ limits, wind }) =>
+    ({ limits, wind, stow }) =>
+      stow !== null ||
       limits.some(({ bound, status }) => bound === 'most' && status !== 'not_checked') ||
       wind.highest_edge_m !== null ||
       wind.roof_projection_m !== null ||

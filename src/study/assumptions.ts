@@ -2,6 +2,7 @@ import { isTracker } from '../mounts/index.ts';
 import type { Assumption } from '../shared/index.ts';
 import { SAMPLES_PER_HOUR, SOLAR_CONSTANT_WM2 } from '../sun/index.ts';
 import { HORIZON_BAND_DEG } from '../survey/index.ts';
+import { GUST_FACTOR } from '../wind/index.ts';
 import { type MountRun, USUAL_HEAT_PER_K } from './mount-run.ts';
 import type { Counted } from './not-counted.ts';
 
@@ -89,6 +90,16 @@ export const assumptionsOf = (c: Counted): Assumption[] => {
     });
   if (trackers.length > 0)
     list.push({ what: 'trackers', value: 'point exactly; level ground', source: 'assumption' });
+  for (const { mount, parked } of trackers)
+    if (mount.stow && parked)
+      list.push({
+        what: `stow of ${mount.id}`,
+        value: `gust = hourly mean wind at 10 m x ${mount.stow.gustFactor ?? GUST_FACTOR}; an hour is parked whole or not at all; the rows or masts beside it park alike`,
+        source:
+          mount.stow.gustFactor === null
+            ? 'assumption: the study gives no gust_factor; some sites gust more'
+            : 'the study, and assumption',
+      });
   const down = trackers.filter((run) => run.mount.drive?.working != null);
   if (down.length > 0)
     list.push({

@@ -9,11 +9,11 @@ import {
   type MountResult,
   type SkyModel,
 } from '../shared/index.ts';
-import { type EdgeGeometry, screenWind, steepestChordTiltDeg } from '../wind/index.ts';
+import { type EdgeGeometry, GUST_FACTOR, screenWind, steepestChordTiltDeg } from '../wind/index.ts';
 import { type MountRun, shadingOf } from './mount-run.ts';
 import { factorBand, programmeLimits } from './orientation.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
-import { stuckWords } from './still-planes.ts';
+import { parkedWords, stuckWords } from './still-planes.ts';
 
 /** Energy per kW of DC rating in the month that gives least a day. */
 export const worstMonth = (monthlyKwhPerKw: readonly number[]): MountResult['worst_month'] => {
@@ -168,6 +168,7 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
       source: STAGE_SOURCES[s.name](run),
     })),
     weakest_stage: weakest.name,
+    stow: stowOf(run, setting),
     downtime: downtimeOf(run, delivered),
     visits_per_year: mount.drive?.visits ?? null,
     capital: cost.capital,
@@ -217,9 +218,32 @@ const STAGE_SOURCES: Record<
   cables: () => 'given',
   conversion: () => 'given',
   'inverter ceiling': () => "the inverter's AC rating, hour by hour",
+  stow: () =>
+    'given gust and hold time against hourly wind at 10 m; parked hours take the light of the parked plane',
   drive: () => 'given',
   downtime: ({ mount, geometry }) =>
     `given share of time working; stuck ${stuckWords(mount.drive?.stuck ?? 'flat', geometry)} else`,
+};
+
+/** What parking in wind costs a tracker; null where that is not counted. */
+const stowOf = ({ mount, geometry, parked, delivered }: MountRun, setting: Setting): MountResult['stow'] => {
+  const lost = delivered[setting.study.sky.model].lostToStowMonthlyKwhPerKw;
+  if (!mount.stow || !parked || !lost) return null;
+  const { gustMs, gustFactor, releaseMs, holdH } = mount.stow;
+  const lit = setting.sun.sunlit;
+  return {
+    gust_ms: gustMs,
+    gust_factor: gustFactor ?? GUST_FACTOR,
+    release_ms: releaseMs ?? gustMs,
+    hold_h: holdH,
+    parked: parkedWords(mount.stow, geometry, setting),
+    hours: parked.hours,
+    daylight_hours: parked.stowed.reduce((sum, stowed, h) => sum + (stowed && lit[h] > 0 ? 1 : 0), 0),
+    events: parked.events,
+    longest_h: parked.longestH,
+    lost_kwh_per_kw: lost.reduce((sum, month) => sum + month, 0),
+    lost_monthly_kwh_per_kw: [...lost],
+  };
 };
 
 /** What a tracker delivers while it is dead; null where that is not counted. */

@@ -6,6 +6,7 @@ import {
   lightThrough,
   OPEN_RACK,
   onRoof,
+  type Parked,
   type PlaneViews,
   planeViews,
 } from '../energy/index.ts';
@@ -19,10 +20,10 @@ import {
 } from '../mounts/index.ts';
 import { type SkyModel, sinDeg, yearlySum } from '../shared/index.ts';
 import { bestAzimuthAtTilt, bestTiltFacing } from '../sky/index.ts';
-import { powerLawFactor } from '../wind/index.ts';
+import { powerLawFactor, type StowHours } from '../wind/index.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
 import type { MountSurvey } from './site-survey.ts';
-import { flatPlane, stuckPlanes } from './still-planes.ts';
+import { flatPlane, parkedPlane, stuckPlanes } from './still-planes.ts';
 
 /** One mount with all that was worked out for it before money. */
 export interface MountRun {
@@ -34,6 +35,8 @@ export interface MountRun {
   readonly flat: PlaneViews | null;
   /** Trackers: the planes where a dead one may stand, each as likely as the others. */
   readonly stuck: readonly PlaneViews[];
+  /** Trackers: the hours in which it is parked, and its plane then; null where stow is not given, or the file has no wind. */
+  readonly parked: (StowHours & Parked) | null;
   readonly chain: ChainSpec;
   readonly arrayHeightM: number;
   readonly survey: MountSurvey | null;
@@ -83,14 +86,29 @@ const runMount = (
   const views = planeViews(setting.sun, pointing, setting.shade);
   const flat = flatPlane(setting, geometry);
   const stuck = stuckPlanes(setting, geometry, mount.drive?.stuck ?? 'flat', flat);
+  const parked = parkedPlane(setting, mount, geometry, flat);
   const arrayHeightM = arrayHeight(mount, geometry, setting.study.site.roofHeightM);
   const chain = chainOf(setting, mount, arrayHeightM);
   const delivered = {} as Record<SkyModel, Delivered>;
-  for (const model of ALL_MODELS) delivered[model] = deliver(setting.skies[model], views, chain, stuck);
+  for (const model of ALL_MODELS)
+    delivered[model] = deliver(setting.skies[model], views, chain, stuck, parked);
   const gcr = 'rows' in geometry ? (geometry.rows?.gcr ?? null) : null;
   const survey = setting.survey.mounts.get(mount.id) ?? null;
   const worstPoint = worstPointOf(setting, views, pointing);
-  return { mount, geometry, gcr, views, flat, stuck, chain, arrayHeightM, survey, worstPoint, delivered };
+  return {
+    mount,
+    geometry,
+    gcr,
+    views,
+    flat,
+    stuck,
+    parked,
+    chain,
+    arrayHeightM,
+    survey,
+    worstPoint,
+    delivered,
+  };
 };
 
 const worstPointOf = (

@@ -2,6 +2,7 @@ import { mountCost, presentEnergy } from '../cost/index.ts';
 import { type ChainSpec, type Delivered, deliver, energyUnderInverter } from '../energy/index.ts';
 import { isTracker } from '../mounts/index.ts';
 import type { NotCounted } from '../shared/index.ts';
+import { GUST_FACTOR } from '../wind/index.ts';
 import type { MountRun } from './mount-run.ts';
 import type { Setting } from './setting.ts';
 
@@ -24,7 +25,6 @@ const LOSS_KEYS = {
 const DC_PER_AC_EXAMPLE = 1.2;
 const AGEING_EXAMPLE = 0.005;
 const STOW_GUST_MS = 15;
-const GUST_FACTOR = 1.5;
 const LOW_SUN = Math.sin((10 * Math.PI) / 180);
 const SNOW_EXAMPLE = 0.2;
 const RENEWAL_EXAMPLE = { share: 0.05, year: 12 };
@@ -34,7 +34,7 @@ const kwh = (x: number): string => `${Math.round(x)} kWh/kW·yr`;
 
 const deliveredBy = (c: Counted, run: MountRun): Delivered => run.delivered[c.study.sky.model];
 const again = (c: Counted, run: MountRun, change: Partial<ChainSpec>): Delivered =>
-  deliver(c.sky, run.views, { ...run.chain, ...change }, run.stuck);
+  deliver(c.sky, run.views, { ...run.chain, ...change }, run.stuck, run.parked);
 const each = (c: Counted, share: (run: MountRun) => number): string =>
   c.runs.map((run) => `${run.mount.id} ${percent(share(run))}`).join(', ');
 
@@ -74,7 +74,7 @@ const driveLines = (c: Counted): NotCounted[] =>
           what: `mounts.${run.mount.id}.drive.visits`,
           effect: `${Number(drive.visits.toFixed(2))} visits a year are listed, not priced: put what they cost into its upkeep`,
         });
-      lines.push(stowLine(c, run));
+      if (!run.parked) lines.push(stowLine(c, run));
       return lines;
     });
 
@@ -82,6 +82,8 @@ const driveLines = (c: Counted): NotCounted[] =>
 const stowLine = (c: Counted, run: MountRun): NotCounted => {
   const what = `wind stow of ${run.mount.id}`;
   const wind = c.year.windMs;
+  if (run.mount.stow && !wind)
+    return { what, effect: 'given, but the weather file has no wind: not counted, which is not zero' };
   if (!wind || !run.flat) return { what, effect: 'the weather file has no wind, so it cannot be estimated' };
   const working = deliver(c.sky, run.views, { ...run.chain, drive: null }).uncappedKwPerKw;
   const flat = deliver(c.sky, run.flat, { ...run.chain, drive: null }).uncappedKwPerKw;

@@ -1,4 +1,5 @@
-import { type PlaneViews, planeViews, type StuckAt } from '../energy/index.ts';
+import { type Parked, type PlaneViews, planeViews, type StuckAt } from '../energy/index.ts';
+import type { StudyMount } from '../inputs/index.ts';
 import {
   type DualAxis,
   isTracker,
@@ -11,6 +12,7 @@ import {
   turnsStoppedAt,
 } from '../mounts/index.ts';
 import { compassWords } from '../shared/index.ts';
+import { type StowHours, type StowSpec, stowHours } from '../wind/index.ts';
 import type { Setting } from './setting.ts';
 
 /** A tracker that lies flat along its axis; null for mounts that do not move. */
@@ -52,6 +54,34 @@ const stuckMasts = ({ sun, shade }: Setting, mount: DualAxis, stuck: StuckAside)
     used = pointMastAt(sun, mount, tiltDeg, azimuthDeg, used);
     return planeViews(sun, used, shade);
   });
+};
+
+/** The azimuth towards the equator. */
+const equatorward = ({ year }: Setting): number => (year.place.latitudeDeg < 0 ? 0 : 180);
+
+/** A tracker parked in wind: in which hours, and where it then stands; null where it never parks or wind is not known. */
+export const parkedPlane = (
+  setting: Setting,
+  { stow }: StudyMount,
+  geometry: ResolvedGeometry,
+  flat: PlaneViews | null,
+): (StowHours & Parked) | null => {
+  const { year, sun, shade } = setting;
+  if (!stow || !year.windMs || flat === null) return null;
+  const at = (pointing: Pointing) => planeViews(sun, pointing, shade);
+  const views =
+    stow.angleDeg === 0
+      ? flat
+      : geometry.kind === 'single-axis'
+        ? at(pointAtTurn(sun, geometry, stow.angleDeg))
+        : at(pointMastAt(sun, geometry as DualAxis, stow.angleDeg, equatorward(setting)));
+  return { ...stowHours(year.windMs, stow), views };
+};
+
+/** How a parked tracker stands, in words that follow `parked`. */
+export const parkedWords = ({ angleDeg }: StowSpec, geometry: ResolvedGeometry, setting: Setting): string => {
+  if (geometry.kind === 'single-axis') return turnWords(angleDeg, geometry.axisAzimuthDeg);
+  return angleDeg === 0 ? 'flat' : `tilted ${angleDeg}° to face ${compassWords(equatorward(setting))}`;
 };
 
 /** The way a positive turn of a single-axis tracker faces, in the words of a compass. */

@@ -206,6 +206,51 @@ describe('a tracker that is down', () => {
   });
 });
 
+describe('a tracker that parks', () => {
+  const marks = fc.array(fc.boolean(), { minLength: 24, maxLength: 24 });
+  const hoursOf = (day: boolean[]) => Uint8Array.from({ length: 8760 }, (_, h) => Number(day[h % 24]));
+
+  test('multiplies whatever the chain, and its months and its hours close', () => {
+    fc.assert(
+      fc.property(anySpec, marks, (spec, day) => {
+        const parked = { stowed: hoursOf(day), views: flat };
+        const d = deliver(sky, tracker, spec, [flat, lone], parked);
+        const without = deliver(sky, tracker, { ...spec, drive: null });
+        expect(Math.abs(product(d) / d.energyKwhPerKw - 1)).toBeLessThan(1e-9);
+        expect(d.energyMonthlyKwhPerKw.reduce((a, b) => a + b) / d.energyKwhPerKw).toBeCloseTo(1, 12);
+        const after = d.stages.find((s) => s.name === 'stow')!.kwhPerKwAfter;
+        const lost = d.lostToStowMonthlyKwhPerKw!.reduce((a, b) => a + b);
+        expect(after).toBeCloseTo(without.energyKwhPerKw - lost, 9);
+        // The hours before the ceiling are those of the plane as it stood.
+        expect(energyUnderInverter(d.uncappedKwPerKw, 1, spec.ceilingKwPerKw)).toBeCloseTo(after, 9);
+      }),
+      { numRuns: 40 },
+    );
+  });
+
+  test('in no hour changes nothing, and in every hour is the parked plane', () => {
+    const spec = { ...nothing, ambient: warm, ceilingKwPerKw: 0.7 };
+    const park = (at: number) =>
+      deliver(sky, tracker, spec, [], { stowed: new Uint8Array(8760).fill(at), views: flat });
+    const never = deliver(sky, tracker, spec);
+    expect(park(0).energyMonthlyKwhPerKw).toEqual(never.energyMonthlyKwhPerKw);
+    expect(never.lostToStowMonthlyKwhPerKw).toBeNull();
+    expect(park(1).energyKwhPerKw / deliver(sky, flat, spec).energyKwhPerKw).toBeCloseTo(1, 12);
+    expect(park(1).irradiationKwhM2).toBe(never.irradiationKwhM2);
+  });
+});
+
+test('a dead tracker that may stand in several ways delivers their mean, each through the chain by itself', () => {
+  const spec = { ...nothing, ambient: warm, ceilingKwPerKw: 0.5 };
+  const drive = { working: 0.8, stuck: 'average' as const, visits: null, ownUse: null };
+  const d = deliver(sky, tracker, { ...spec, drive }, [flat, lone, inRows]);
+  const alone = [flat, lone, inRows].map((views) => deliver(sky, views, spec).energyKwhPerKw);
+  expect(d.deadKwhPerKw).toBeCloseTo((alone[0] + alone[1] + alone[2]) / 3, 9);
+  const working = deliver(sky, tracker, spec).energyKwhPerKw;
+  expect(d.keptWhileDead).toBeCloseTo(d.deadKwhPerKw! / working, 12);
+  expect(d.energyKwhPerKw).toBeCloseTo(0.8 * working + 0.2 * d.deadKwhPerKw!, 9);
+});
+
 test('rows never add energy, the closer they stand the less there is', () => {
   fc.assert(
     fc.property(

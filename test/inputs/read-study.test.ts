@@ -53,6 +53,7 @@ mounts:
         readings: null,
         lengths: NO_LENGTHS,
         drive: null,
+        stow: null,
         cost: null,
       },
       {
@@ -68,6 +69,7 @@ mounts:
         readings: null,
         lengths: NO_LENGTHS,
         drive: BLANK_DRIVE,
+        stow: null,
         cost: null,
       },
     ],
@@ -124,6 +126,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         readings: null,
         lengths: { ...NO_LENGTHS, airBehindM: 0.1 },
         drive: null,
+        stow: null,
         cost: { ...NO_COST, capitalPerKw: 1700, upkeepPerKw: 15 },
       },
       {
@@ -138,6 +141,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         readings: null,
         lengths: NO_LENGTHS,
         drive: null,
+        stow: null,
         cost: { ...NO_COST, capital: 21000 },
       },
       {
@@ -153,6 +157,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         readings: null,
         lengths: NO_LENGTHS,
         drive: { working: 0.97, stuck: 'flat', visits: null, ownUse: 0.003 },
+        stow: null,
         cost: { ...NO_COST, upkeep: 0, renewals: [{ what: 'drive', year: 12, cost: 800 }] },
       },
       {
@@ -162,6 +167,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         readings: null,
         lengths: NO_LENGTHS,
         drive: BLANK_DRIVE,
+        stow: null,
         cost: null,
       },
     ],
@@ -332,4 +338,30 @@ test('a dead tracker stands flat, where it stopped, or as given; a side is a wor
   });
   const dual = await stuck('dual-axis', 'drive: { working: 90 %, stuck: { tilt: 30, azimuth: 90 } }');
   expect(dual?.stuck).toEqual({ tiltDeg: 30, azimuthDeg: 90 });
+});
+
+test('stow is read with its blanks; speeds and times in any unit; a side is a word', async () => {
+  const stow = async (kind: string, keys: string) => {
+    const text = `weather: { file: a }\nmounts: [ { id: m, kind: ${kind}, ${keys} } ]\n`;
+    return (await readStudy({ file: 'x', text })).mounts[0].stow;
+  };
+  expect(await stow('single-axis', 'stow: { gust: 18 m/s }')).toStrictEqual({
+    gustMs: 18,
+    gustFactor: null,
+    releaseMs: null,
+    holdH: 0,
+    angleDeg: 0,
+  });
+  const full =
+    'stow: { gust: 72 km/h, gust_factor: 1.4, release: 36 km/h, hold: 90 min, angle: 30, faces: west }';
+  expect(await stow('single-axis', full)).toStrictEqual({
+    gustMs: 20,
+    gustFactor: 1.4,
+    releaseMs: 10,
+    holdH: 1.5,
+    angleDeg: 30,
+  });
+  expect((await stow('single-axis', full.replace('west', 'east')))?.angleDeg).toBe(-30);
+  expect((await stow('single-axis', 'stow: { gust: 18, hold: 3 h }'))?.holdH).toBe(3);
+  expect((await stow('dual-axis', 'stow: { gust: 18, hold: 3, angle: 20 }'))?.angleDeg).toBe(20);
 });

@@ -1,15 +1,15 @@
 import * as z from 'zod/mini';
 import type { Convert } from '../convert.ts';
 import { azimuth, side, tilt, turn } from '../fields/angles.ts';
-import { field, hints, Refusal } from '../fields/field.ts';
+import { hints } from '../fields/field.ts';
 import { quantity } from '../fields/quantity.ts';
-import { inRange, numberAndRest } from '../fields/range.ts';
 import { share } from '../fields/share.ts';
-import { choice, text } from '../fields/words.ts';
+import { bareNumber, choice, text } from '../fields/words.ts';
 import { cost } from './money.ts';
 import type { Present } from './present.ts';
 import { wherePresent } from './present.ts';
 import { bearingGroup, slopeGroup } from './readings.ts';
+import { stowTilt, stowTurn } from './stow.ts';
 
 /** An id names files and JSON fields, so it stays plain. */
 const ID = /^[a-z0-9][a-z0-9_-]*$/;
@@ -62,21 +62,13 @@ const trackerRows = () =>
     .register(hints, { description: 'Rows of trackers. Blank: one row, true tracking.' });
 
 const visits = () =>
-  field(
-    {
-      description: 'Repair visits a year. Listed, not priced: put what they cost into upkeep.',
-      example: '2',
-      expected: VISITS,
-      form: { type: 'number', minimum: 0 },
-    },
-    (raw): number => {
-      const [amount, rest] = numberAndRest(raw, VISITS, 'Write for example 2.');
-      if (rest !== '' || !inRange(amount, { min: 0, max: 366 }))
-        throw new Refusal(VISITS, 'Write for example 2, or 0.5 for one in two years.');
-      return amount;
-    },
+  bareNumber(
+    'visits a year',
+    { min: 0, max: 366 },
+    'Repair visits a year. Listed, not priced: put what they cost into upkeep.',
+    '2',
+    'Write for example 2, or 0.5 for one in two years.',
   );
-const VISITS = 'a bare number of visits a year from 0 to 366';
 
 const drive = <S extends z.ZodMiniType>(stuckAt: S) =>
   z
@@ -151,6 +143,8 @@ export const mountParts = (convert: Convert, has: Present) => ({
   trackerRows: z.optional(trackerRows()),
   turningDrive: z.optional(drive(stuckTurn(convert))),
   facingDrive: z.optional(drive(stuckPlane(convert))),
+  turningStow: wherePresent(has('stow'), () => z.optional(stowTurn(convert))),
+  facingStow: wherePresent(has('stow'), () => z.optional(stowTilt(convert))),
   slant: length(convert, 'a slant length', '3.5 m', 'Length of a rack or tracker, measured along its slope.'),
   axisHeight: length(convert, 'a height', '1.5 m', 'Height of the axis above ground.'),
   lowerEdge: length(convert, 'a height', '0.8 m', 'Height of the lower edge above ground.', 'or zero'),

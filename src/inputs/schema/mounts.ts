@@ -60,7 +60,10 @@ const axis = (convert: Convert) =>
     })
     .register(hints, { description: 'The axis. Blank: level, north-south.' });
 
-const singleAxis = (convert: Convert, { common, trackerRows, slant, axisHeight, turningDrive }: Parts) =>
+const singleAxis = (
+  convert: Convert,
+  { common, trackerRows, slant, axisHeight, turningDrive, turningStow }: Parts,
+) =>
   z
     .strictObject({
       kind: z.literal('single-axis'),
@@ -71,13 +74,14 @@ const singleAxis = (convert: Convert, { common, trackerRows, slant, axisHeight, 
       slant,
       axis_height: axisHeight,
       drive: turningDrive,
+      stow: turningStow,
     })
     .check(({ value, issues }) => {
       issues.push(...turnIssues(value));
     })
     .register(hints, { description: 'A tracker that turns about one axis.' });
 
-const dualAxis = ({ common, rows, slant, axisHeight, facingDrive }: Parts) =>
+const dualAxis = ({ common, rows, slant, axisHeight, facingDrive, facingStow }: Parts) =>
   z
     .strictObject({
       kind: z.literal('dual-axis'),
@@ -86,6 +90,7 @@ const dualAxis = ({ common, rows, slant, axisHeight, facingDrive }: Parts) =>
       slant,
       axis_height: axisHeight,
       drive: facingDrive,
+      stow: facingStow,
     })
     .register(hints, { description: 'A tracker that faces the sun. Without rows it is a lone mast.' });
 

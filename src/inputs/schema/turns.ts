@@ -4,17 +4,20 @@ import { sideTurn } from '../side-turn.ts';
 import { refuseIn } from './survey-issues.ts';
 
 interface Turned {
-  readonly turn: number;
+  readonly turn?: number | undefined;
+  readonly angle?: number | undefined;
   readonly faces?: Side | undefined;
 }
 
 interface Turning {
   readonly axis?: { readonly azimuth?: number | undefined } | undefined;
   readonly swing?: number | undefined;
-  readonly drive?: { readonly stuck?: unknown } | undefined;
+  readonly drive?: { readonly stuck?: string | Turned | undefined } | undefined;
+  readonly stow?: Turned | undefined;
 }
 
-const issuesOf = ({ turn, faces }: Turned, path: string[], { axis, swing }: Turning) => {
+const issuesOf = (turned: Turned, path: string[], key: 'turn' | 'angle', { axis, swing }: Turning) => {
+  const [turn, faces] = [turned[key] ?? 0, turned.faces];
   const axisAzimuthDeg = axis?.azimuth ?? DEFAULT_AXIS_AZIMUTH_DEG;
   const swingDeg = swing ?? DEFAULT_SWING_DEG;
   const sides = (['north', 'east', 'south', 'west'] as const).filter(
@@ -23,7 +26,7 @@ const issuesOf = ({ turn, faces }: Turned, path: string[], { axis, swing }: Turn
   const list = sides.join(' or ');
   if (turn > swingDeg)
     return [
-      refuseIn([...path, 'turn'], {
+      refuseIn([...path, key], {
         code: 'beyond-swing',
         expected: `a turn within the swing of ${swingDeg} degrees`,
         fix: `Write at most ${swingDeg}, or widen swing.`,
@@ -48,8 +51,12 @@ const issuesOf = ({ turn, faces }: Turned, path: string[], { axis, swing }: Turn
   ];
 };
 
-const isTurned = (raw: unknown): raw is Turned => typeof raw === 'object' && raw !== null && 'turn' in raw;
-
 /** What shows only when a turn is held against the tracker's own axis and swing. */
-export const turnIssues = (mount: Turning) =>
-  isTurned(mount.drive?.stuck) ? issuesOf(mount.drive.stuck, ['drive', 'stuck'], mount) : [];
+export const turnIssues = (mount: Turning) => {
+  const { stow, drive } = mount;
+  const stuck = typeof drive?.stuck === 'object' ? drive.stuck : null;
+  return [
+    ...(stuck ? issuesOf(stuck, ['drive', 'stuck'], 'turn', mount) : []),
+    ...(stow ? issuesOf(stow, ['stow'], 'angle', mount) : []),
+  ];
+};

@@ -2,6 +2,7 @@ import { type Comparison, MONTH_DAYS, MONTH_NAMES, type MountResult } from '../.
 import { downtimeSentences } from '../downtime-words.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
 import { formatDaily, formatGain, formatNumber, formatPercent, UNKNOWN } from '../numbers.ts';
+import { stowMonths, stowSentences } from '../stow-words.ts';
 import { monthInFull, mountById, nameOf } from '../words.ts';
 import { blocks, section } from './section.ts';
 
@@ -96,6 +97,17 @@ const stageSources = (c: Comparison): string =>
     }),
   );
 
+const stow = (c: Comparison): string => {
+  const { names, rows } = stowMonths(c);
+  if (names.length === 0) return '';
+  const table = mdTable(
+    ['Taken by stow, kWh/kW', ...names.map(md)],
+    ['left', ...names.map(() => 'right' as const)],
+    rows,
+  );
+  return blocks('### Wind stow', mdList(stowSentences(c).map(md)), table);
+};
+
 const downtime = (c: Comparison): string => {
   const sentences = downtimeSentences(c);
   return sentences.length === 0 ? '' : blocks('### Downtime', mdList(sentences.map(md)));
@@ -110,6 +122,7 @@ export const energy = (c: Comparison): string =>
       'mount or is not counted.',
     stageTable(c),
     stageSources(c),
+    stow(c),
     downtime(c),
     '### Month by month',
     'Each mount against the fixed plane that would yield most in that month, on the rows and losses of ' +
