@@ -162,6 +162,7 @@ const adviceMount = (result: MountResult, run: MountRun, study: Study, array: Ar
       ];
     }),
   ) as Record<SkyModel, AdviceMount['by_sky'][SkyModel]>,
+  snow_counted: run.mount.snow !== null,
   downtime_blank: isTracker(run.geometry) && (run.mount.drive?.working ?? null) === null,
 });
 

@@ -19,6 +19,8 @@ export interface ChainSpec {
   readonly windFactor: number;
   readonly heatPerK: number;
   readonly losses: LossSpec;
+  /** Share of each month's light that snow takes, twelve of them 0..1; null: not counted. */
+  readonly snow: readonly number[] | null;
   /** Inverter's AC rating per kW of DC; null: no ceiling. */
   readonly ceilingKwPerKw: number | null;
   readonly drive: DriveSpec | null;
@@ -37,6 +39,7 @@ export type StageName =
   | 'incidence'
   | 'heat'
   | 'dirt'
+  | 'snow'
   | 'module spread'
   | 'cables'
   | 'conversion'
@@ -79,6 +82,8 @@ interface YearPass {
   readonly rows: number;
   readonly lit: number;
   readonly heated: number;
+  /** What of `heated` snow leaves. */
+  readonly clear: number;
   /** AC energy under the ceiling, by month. */
   readonly ac: number[];
   /** AC power before the ceiling, hour by hour, kW per kW. */
@@ -95,11 +100,23 @@ const passThroughYear = (sky: SkyHours, views: PlaneViews, spec: ChainSpec): Yea
   const kept = constantShares(spec.losses).reduce((product, [, share]) => product * (1 - share), 1);
   const uncapped = new Float64Array(sky.direct.length);
   const twelve = () => new Array<number>(12).fill(0);
-  const pass = { open: twelve(), skyline: twelve(), rows: 0, lit: 0, heated: 0, ac: twelve(), uncapped };
+  const pass = {
+    open: twelve(),
+    skyline: twelve(),
+    rows: 0,
+    lit: 0,
+    heated: 0,
+    clear: 0,
+    ac: twelve(),
+    uncapped,
+  };
   for (let month = 0; month < 12; month++) {
     let open = 0;
     let pastSkyline = 0;
     let ac = 0;
+    let heated = 0;
+    const clear = 1 - (spec.snow?.[month] ?? 0);
+    const keptClear = kept * clear;
     const end = MONTH_FIRST_DAY[month + 1] * 24;
     for (let h = MONTH_FIRST_DAY[month] * 24; h < end; h++) {
       const light = lightAt(sky, views.open, h) / 1000;
@@ -113,15 +130,17 @@ const passThroughYear = (sky: SkyHours, views: PlaneViews, spec: ChainSpec): Yea
         const moduleC = moduleTemperatureC(temperatureC[h], behindRows * 1000, wind, u0, u1);
         dc *= Math.max(0, powerAtTemperature(moduleC, spec.heatPerK));
       }
-      const power = dc * kept;
+      const power = dc * keptClear;
       open += light;
       pastSkyline += seen;
       pass.rows += behindRows;
       pass.lit += lit;
       pass.heated += dc;
+      heated += dc;
       uncapped[h] = power;
       ac += power < ceiling ? power : ceiling;
     }
+    pass.clear += heated * clear;
     pass.open[month] = open;
     pass.skyline[month] = pastSkyline;
     pass.ac[month] = ac;
@@ -143,8 +162,8 @@ const constantShares = (losses: LossSpec): [StageName, number][] =>
 const sum = (monthly: readonly number[]): number => monthly.reduce((total, month) => total + month, 0);
 
 /**
- * From the views of a plane and a sky to delivered AC energy, stage by stage: skyline, rows, incidence, heat, dirt, module
- * spread, cables, conversion, the inverter's ceiling hour by hour, stow, the drive's own use, and downtime.
+ * From the views of a plane and a sky to delivered AC energy, stage by stage: skyline, rows, incidence, heat, dirt, snow,
+ * module spread, cables, conversion, the inverter's ceiling hour by hour, stow, the drive's own use, and downtime.
  * A parked plane goes through the same chain; stow is the step from a plane that never parks to one that does.
  * A tracker that does not work delivers what it does where it is stuck: energy is `working` times the tracker's own
  * and `1 - working` times the stuck plane's (expected value; failures are taken as even over the year).
@@ -171,7 +190,10 @@ export const deliver = (
   if (views.rows !== views.skyline) stage('rows', pass.rows);
   stage('incidence', pass.lit);
   if (spec.ambient.temperatureC) stage('heat', pass.heated);
-  for (const [name, share] of constantShares(spec.losses)) stage(name, now * (1 - share));
+  const shares = constantShares(spec.losses);
+  for (const [name, share] of shares) if (name === 'dirt') stage(name, now * (1 - share));
+  if (spec.snow) stage('snow', pass.heated > 0 ? (now * pass.clear) / pass.heated : 0);
+  for (const [name, share] of shares) if (name !== 'dirt') stage(name, now * (1 - share));
   let ac = pass.ac;
   if (spec.ceilingKwPerKw !== null) stage('inverter ceiling', sum(ac));
   let lostToStow: number[] | null = null;

@@ -49,6 +49,8 @@ export interface StudyMount {
   readonly drive: DriveSpec | null;
   /** Null for mounts that do not move, and where blank: it never parks, which is listed as not counted. */
   readonly stow: StowSpec | null;
+  /** Share of each month's light that snow takes, January first; null where blank. */
+  readonly snow: readonly number[] | null;
   readonly cost: CostSpec | null;
 }
 

@@ -6,6 +6,7 @@ import type { StowSpec, WindSpec } from '../wind/index.ts';
 import { DEFAULT_ALBEDO, DEFAULT_AXIS_AZIMUTH_DEG, DEFAULT_SWING_DEG } from './defaults.ts';
 import type { Side } from './fields/angles.ts';
 import type { RawMount } from './schema/mounts.ts';
+import { monthlyShares } from './schema/snow.ts';
 import type { RawStudy } from './schema/study.ts';
 import { sideTurn } from './side-turn.ts';
 import type { MountReadings, Study, StudyMount } from './study-file.ts';
@@ -117,6 +118,7 @@ const mountOf = (mount: RawMount): StudyMount => {
     lengths: lengthsOf(mount),
     drive: driveOf(mount),
     stow: stowOf(mount),
+    snow: mount.snow === undefined ? null : monthlyShares(mount.snow),
     cost: costOf(mount),
   };
 };

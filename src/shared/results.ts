@@ -141,6 +141,15 @@ export interface MountResult {
   /** Product of the efficiencies times `irradiation_kwh_m2` is `energy_kwh_per_kw`. Counted stages only. */
   stages: { name: string; efficiency: number; kwh_per_kw_after: number; source: string }[];
   weakest_stage: string;
+  /** What snow on the modules takes; null where that is not counted. */
+  snow: {
+    /** Twelve shares of each month's light, as given. */
+    monthly_shares: number[];
+    /** In its place in the chain, before later stages. */
+    taken_kwh_per_kw: number;
+    /** Of a rack above ground, as given: room for snow that slides off. Null where blank. */
+    lower_edge_m: number | null;
+  } | null;
   /** When a tracker parks in wind and what that takes; null where that is not counted. */
   stow: {
     /** Gusts at 10 m: it parks at this one and is released below that one, after so many hours. */

@@ -90,6 +90,14 @@ export const assumptionsOf = (c: Counted): Assumption[] => {
     });
   if (trackers.length > 0)
     list.push({ what: 'trackers', value: 'point exactly; level ground', source: 'assumption' });
+  const snowy = runs.filter((run) => run.mount.snow !== null);
+  if (snowy.length > 0)
+    list.push({
+      what: `snow on ${ids(snowy)}`,
+      value:
+        'takes the same share of every hour of its month, working, parked or dead; snow on the ground brightens nothing',
+      source: 'the study, and assumption',
+    });
   for (const { mount, parked } of trackers)
     if (mount.stow && parked)
       list.push({

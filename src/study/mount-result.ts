@@ -168,6 +168,7 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
       source: STAGE_SOURCES[s.name](run),
     })),
     weakest_stage: weakest.name,
+    snow: snowOf(run, setting),
     stow: stowOf(run, setting),
     downtime: downtimeOf(run, delivered),
     visits_per_year: mount.drive?.visits ?? null,
@@ -214,6 +215,7 @@ const STAGE_SOURCES: Record<
   incidence: () => 'Martin & Ruiz 2001, a_r 0.16',
   heat: ({ chain }) => chain.heatLoss.source,
   dirt: () => 'given',
+  snow: () => 'given by month; dims every hour of its month alike',
   'module spread': () => 'given',
   cables: () => 'given',
   conversion: () => 'given',
@@ -223,6 +225,20 @@ const STAGE_SOURCES: Record<
   drive: () => 'given',
   downtime: ({ mount, geometry }) =>
     `given share of time working; stuck ${stuckWords(mount.drive?.stuck ?? 'flat', geometry)} else`,
+};
+
+/** What snow takes from a mount; null where that is not counted. */
+const snowOf = ({ mount, delivered }: MountRun, { study }: Setting): MountResult['snow'] => {
+  const { stages } = delivered[study.sky.model];
+  const stage = stages.find(({ name }) => name === 'snow');
+  if (!mount.snow || !stage) return null;
+  const before = stages[stages.indexOf(stage) - 1].kwhPerKwAfter;
+  return {
+    monthly_shares: [...mount.snow],
+    // Sums in another order may differ in the last digit; snow never gives.
+    taken_kwh_per_kw: Math.max(0, before - stage.kwhPerKwAfter),
+    lower_edge_m: mount.lengths.lowerEdgeM,
+  };
 };
 
 /** What parking in wind costs a tracker; null where that is not counted. */

@@ -73,6 +73,7 @@ const chainOf = ({ study, year, array }: Setting, mount: StudyMount, arrayHeight
   windFactor: powerLawFactor(arrayHeightM),
   heatPerK: study.array.module?.heatPerK ?? USUAL_HEAT_PER_K,
   losses: study.losses,
+  snow: mount.snow,
   ceilingKwPerKw: array.ac_kw === null ? null : array.ac_kw / array.dc_kw,
   drive: mount.drive,
 });

@@ -135,7 +135,19 @@ const skylineLine = (c: Counted): NotCounted[] => {
   return [{ what: 'site.skyline', effect }];
 };
 
+/** Snow where no mount has it; where some have, the others are named. */
 const snowLine = (c: Counted): NotCounted[] => {
+  const [blank, given] = [true, false].map((isBlank) =>
+    c.runs.filter(({ mount }) => (mount.snow === null) === isBlank).map(({ mount }) => mount.id),
+  );
+  if (blank.length === 0) return [];
+  if (given.length > 0)
+    return [
+      {
+        what: `snow of ${blank.join(', ')}`,
+        effect: `counted for ${given.join(', ')} and not here, which flatters ${blank.length === 1 ? 'it' : 'them'}; give snow for all ${c.runs.length} mounts`,
+      },
+    ];
   const air = c.year.temperatureC;
   if (!air)
     return [{ what: 'snow', effect: 'the weather file has no temperature, so it cannot be estimated' }];

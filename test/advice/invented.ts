@@ -50,6 +50,7 @@ export const mount = (sketch: Sketch): AdviceMount => {
     premium_per_kw: null,
     limits: [],
     downtime_blank: false,
+    snow_counted: false,
     ...rest,
     by_sky,
   };

@@ -118,6 +118,7 @@ export const inventedMount = (m: InventedMount): MountResult => {
     worst_month: { month: MONTH_NAMES[worst], kwh_per_kw_day: perDay[worst] },
     stages,
     weakest_stage: m.kind === 'roof-plane' ? 'heat' : 'heat',
+    snow: null,
     stow: null,
     downtime: null,
     visits_per_year: null,

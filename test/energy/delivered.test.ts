@@ -38,6 +38,7 @@ const nothing: ChainSpec = {
   heatPerK: -0.004,
   losses: { dirt: null, moduleSpread: null, cables: null, conversion: null },
   ceilingKwPerKw: null,
+  snow: null,
   drive: null,
 };
 const warm = { temperatureC: site.temperatureC, windMs: site.windMs };
@@ -54,6 +55,9 @@ const anySpec: fc.Arbitrary<ChainSpec> = fc.record({
     moduleSpread: share(0.1),
     cables: share(0.1),
     conversion: share(0.1),
+  }),
+  snow: fc.option(fc.array(fc.double({ min: 0, max: 0.9, noNaN: true }), { minLength: 12, maxLength: 12 }), {
+    nil: null,
   }),
   ceilingKwPerKw: fc.option(fc.double({ min: 0.2, max: 1.2, noNaN: true }), { nil: null }),
   drive: fc.option(
@@ -102,6 +106,7 @@ describe('the chain', () => {
         const names = deliver(sky, lone, spec, [flat]).stages.map((s) => s.name);
         expect(names.includes('heat')).toBe(spec.ambient.temperatureC !== null);
         expect(names.includes('dirt')).toBe(spec.losses.dirt !== null);
+        expect(names.includes('snow')).toBe(spec.snow !== null);
         expect(names.includes('module spread')).toBe(spec.losses.moduleSpread !== null);
         expect(names.includes('cables')).toBe(spec.losses.cables !== null);
         expect(names.includes('conversion')).toBe(spec.losses.conversion !== null);
@@ -132,6 +137,25 @@ describe('the chain', () => {
     const bare = deliver(sky, lone, nothing).energyKwhPerKw;
     expect(d.energyKwhPerKw / bare).toBeCloseTo(0.98 * 0.99 * 0.985 * 0.965, 12);
   });
+});
+
+test('snow takes each month its share, after dirt and before the rest, so that a ceiling sees it', () => {
+  const snow = [0.5, 0.25, 0, 0, 0, 0, 0, 0, 0, 0, 0, 1];
+  const spec = { ...nothing, ambient: warm, losses: { ...nothing.losses, dirt: 0.02, conversion: 0.03 } };
+  const [clear, under] = [deliver(sky, lone, spec), deliver(sky, lone, { ...spec, snow })];
+  for (let m = 0; m < 12; m++)
+    expect(under.energyMonthlyKwhPerKw[m]).toBeCloseTo(clear.energyMonthlyKwhPerKw[m] * (1 - snow[m]), 9);
+  expect(under.irradiationKwhM2).toBe(clear.irradiationKwhM2);
+  expect(under.stages.map((s) => s.name)).toEqual(['incidence', 'heat', 'dirt', 'snow', 'conversion']);
+  expect(under.stages.find((s) => s.name === 'snow')!.efficiency).toBeCloseTo(
+    under.energyKwhPerKw / clear.energyKwhPerKw,
+    12,
+  );
+  const zero = deliver(sky, lone, { ...spec, snow: new Array<number>(12).fill(0) });
+  expect(zero.energyMonthlyKwhPerKw).toEqual(clear.energyMonthlyKwhPerKw);
+  const capped = { ...spec, snow, ceilingKwPerKw: 0.4 };
+  const d = deliver(sky, lone, capped);
+  expect(energyUnderInverter(d.uncappedKwPerKw, 1, 0.4)).toBeCloseTo(d.energyKwhPerKw, 9);
 });
 
 describe('the inverter’s ceiling', () => {

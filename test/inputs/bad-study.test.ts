@@ -247,6 +247,18 @@ describe('mounts', () => {
     ['kind: single-axis, stow: { gust: 18, angle: ¦70, faces: west }', 'stow.angle', '70', /widen swing/],
     ['kind: single-axis, swing: 50, stow: ¦{ gust: 18, angle: 30 }', 'stow.faces', 'nothing', /faces: east/],
     ['kind: fixed-tilt, ¦stow: { gust: 18 }', 'stow', '"stow"', /single-axis mounts and dual-axis mounts/],
+    ['kind: dual-axis, snow: ¦5 %', 'snow', '"5 %"', /snow: \{ Jan: 20 %, Feb: 15 % \}/],
+    ['kind: dual-axis, snow: ¦[ 5 %, 3 % ]', 'snow', 'a list of 2', /Jan: 20 %/],
+    ['kind: dual-axis, snow: ¦{ }', 'snow', 'a group without keys', /Jan: 20 %/],
+    ['kind: dual-axis, snow: { Jan: ¦20 }', 'snow.Jan', '20', /Write 20 %/],
+    ['kind: dual-axis, snow: { ¦jan: 20 % }', 'snow.jan', '"jan"', /Did you mean Jan\?/],
+    ['kind: dual-axis, snow: [ 0, 0, 0, 0, 0, 0, 0, ¦101 %, 0, 0, 0, 0 ]', 'snow.#8', '"101 %"', /20 %/],
+    [
+      'kind: dual-axis, snow: ¦[ 1, 1, 1, 1, 1, 1, 1, 1, 1, 1, 1, 1 ]',
+      'snow',
+      'a list of 12',
+      /months that have snow/,
+    ],
     ['kind: dual-axis, cost: { capital: ¦-1 }', 'cost.capital', '-1', /cannot be negative/],
     ['kind: dual-axis, cost: { capital: ¦1700 USD }', 'cost.capital', '"1700 USD"', /finance.currency/],
     [

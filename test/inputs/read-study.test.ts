@@ -54,6 +54,7 @@ mounts:
         lengths: NO_LENGTHS,
         drive: null,
         stow: null,
+        snow: null,
         cost: null,
       },
       {
@@ -70,6 +71,7 @@ mounts:
         lengths: NO_LENGTHS,
         drive: BLANK_DRIVE,
         stow: null,
+        snow: null,
         cost: null,
       },
     ],
@@ -127,6 +129,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         lengths: { ...NO_LENGTHS, airBehindM: 0.1 },
         drive: null,
         stow: null,
+        snow: null,
         cost: { ...NO_COST, capitalPerKw: 1700, upkeepPerKw: 15 },
       },
       {
@@ -142,6 +145,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         lengths: NO_LENGTHS,
         drive: null,
         stow: null,
+        snow: null,
         cost: { ...NO_COST, capital: 21000 },
       },
       {
@@ -158,6 +162,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         lengths: NO_LENGTHS,
         drive: { working: 0.97, stuck: 'flat', visits: null, ownUse: 0.003 },
         stow: null,
+        snow: null,
         cost: { ...NO_COST, upkeep: 0, renewals: [{ what: 'drive', year: 12, cost: 800 }] },
       },
       {
@@ -168,6 +173,7 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         lengths: NO_LENGTHS,
         drive: BLANK_DRIVE,
         stow: null,
+        snow: null,
         cost: null,
       },
     ],
@@ -364,4 +370,22 @@ test('stow is read with its blanks; speeds and times in any unit; a side is a wo
   expect((await stow('single-axis', full.replace('west', 'east')))?.angleDeg).toBe(-30);
   expect((await stow('single-axis', 'stow: { gust: 18, hold: 3 h }'))?.holdH).toBe(3);
   expect((await stow('dual-axis', 'stow: { gust: 18, hold: 3, angle: 20 }'))?.angleDeg).toBe(20);
+});
+
+test('snow is a list of twelve months or those that have any, on every kind of mount', async () => {
+  const snow = async (keys: string) =>
+    (await readStudy({ file: 'x', text: `weather: { file: a }\nmounts: [ { id: m, ${keys} } ]\n` })).mounts[0]
+      .snow;
+  const expected = [0.2, 0.15, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0.1];
+  const list = 'snow: [ 20 %, 0.15, 0, 0, 0, 0, 0, 0, 0, 0, 0, 10 % ]';
+  const named = 'snow: { Feb: 15 %, Jan: 20 %, Dec: 0.1 }';
+  for (const kind of [
+    'kind: fixed-tilt',
+    'kind: single-axis',
+    'kind: dual-axis',
+    'kind: roof-plane, tilt: 3, azimuth: 9',
+  ])
+    for (const keys of [list, named]) expect(await snow(`${kind}, ${keys}`)).toEqual(expected);
+  expect(await snow('kind: fixed-tilt, snow: { Jan: 100 % }')).toEqual([1, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0]);
+  expect(await snow('kind: fixed-tilt')).toBeNull();
 });

@@ -104,6 +104,7 @@ export const inventedMount = (m: Invented): MountResult => {
     worst_month: { month: MONTH_NAMES[worst], kwh_per_kw_day: daily[worst] },
     stages,
     weakest_stage: stages.reduce((a, b) => (b.efficiency < a.efficiency ? b : a)).name,
+    snow: null,
     stow: null,
     downtime: null,
     visits_per_year: null,

@@ -9,6 +9,7 @@ import { cost } from './money.ts';
 import type { Present } from './present.ts';
 import { wherePresent } from './present.ts';
 import { bearingGroup, slopeGroup } from './readings.ts';
+import { snow } from './snow.ts';
 import { stowTilt, stowTurn } from './stow.ts';
 
 /** An id names files and JSON fields, so it stays plain. */
@@ -134,6 +135,7 @@ export const mountParts = (convert: Convert, has: Present) => ({
       }),
     ),
     cost: z.optional(cost()),
+    snow: wherePresent(has('snow'), () => z.optional(snow())),
   },
   onSite: {
     bearing: wherePresent(has('bearing'), () => z.optional(bearingGroup(convert))),

@@ -2,6 +2,7 @@ import { type Comparison, MONTH_DAYS, MONTH_NAMES, type MountResult } from '../.
 import { downtimeSentences } from '../downtime-words.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
 import { formatDaily, formatGain, formatNumber, formatPercent, UNKNOWN } from '../numbers.ts';
+import { snowSentences } from '../snow-words.ts';
 import { stowMonths, stowSentences } from '../stow-words.ts';
 import { monthInFull, mountById, nameOf } from '../words.ts';
 import { blocks, section } from './section.ts';
@@ -97,6 +98,11 @@ const stageSources = (c: Comparison): string =>
     }),
   );
 
+const snow = (c: Comparison): string => {
+  const sentences = snowSentences(c);
+  return sentences.length === 0 ? '' : blocks('### Snow', mdList(sentences.map(md)));
+};
+
 const stow = (c: Comparison): string => {
   const { names, rows } = stowMonths(c);
   if (names.length === 0) return '';
@@ -122,6 +128,7 @@ export const energy = (c: Comparison): string =>
       'mount or is not counted.',
     stageTable(c),
     stageSources(c),
+    snow(c),
     stow(c),
     downtime(c),
     '### Month by month',
