@@ -146,6 +146,10 @@ const fixedArraysInstead = (
           }),
         );
 
+/** Half of the band that reading errors leave to a plane's light, as a share of it. */
+const readingError = ({ orientation_factor: factor, orientation_factor_band: band }: MountResult): number =>
+  factor && band ? (band.high - band.low) / 2 / factor : 0;
+
 const adviceMount = (result: MountResult, run: MountRun, study: Study, array: ArraySummary): AdviceMount => ({
   ...result,
   by_sky: Object.fromEntries(
@@ -162,6 +166,7 @@ const adviceMount = (result: MountResult, run: MountRun, study: Study, array: Ar
       ];
     }),
   ) as Record<SkyModel, AdviceMount['by_sky'][SkyModel]>,
+  reading_error: readingError(result),
   snow_counted: run.mount.snow !== null,
   downtime_blank: isTracker(run.geometry) && (run.mount.drive?.working ?? null) === null,
 });

@@ -13,7 +13,8 @@ const NO_CHOICE = { choice: null, confidence: null, leads: [], switch_points: []
 
 /**
  * What to choose and how sure that is. Hard limits first, then the objective, then whether the lead is larger than
- * the doubt: half the range, over the Perez, Hay-Davies and Reindl skies, of the difference between two mounts.
+ * the doubt: half the range, over the Perez, Hay-Davies and Reindl skies, of the difference between two mounts, with the
+ * reading errors of their angles where the study gives any.
  * A blocking finding withholds the choice, and so does a study in which no mount keeps its limits.
  */
 export const advise = (input: AdviceInput): AdviceResult => {

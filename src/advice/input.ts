@@ -35,6 +35,8 @@ export type AdviceMount = Readonly<
   >
 > & {
   readonly by_sky: Readonly<Record<SkyModel, SkyMetrics>>;
+  /** Half of what the reading errors of its angles leave open, as a share of its light (0.013 is 1.3 %); 0 without readings. */
+  readonly reading_error: number;
   /** True for a tracker whose `drive.working` is blank: then its downtime is not counted. */
   readonly downtime_blank: boolean;
   /** False where the mount's snow is blank. */

@@ -13,12 +13,24 @@ export const DOUBT_SKIES: readonly SkyModel[] = ['perez', 'hay-davies', 'reindl'
 const ROUNDING = 1e-9;
 
 /** Half the range, over the three skies, of the difference between two mounts in the metric; the same either way round. */
-export const doubtBetween = (a: AdviceMount, b: AdviceMount, metric: Metric): number => {
+const skyDoubt = (a: AdviceMount, b: AdviceMount, metric: Metric): number => {
   const differences = DOUBT_SKIES.map(
     (sky) => (metric.underSky(a, sky) ?? Number.NaN) - (metric.underSky(b, sky) ?? Number.NaN),
   );
   return (Math.max(...differences) - Math.min(...differences)) / 2;
 };
+
+/** What the reading errors of a mount's angles leave open, in the metric, which goes with its light or with one over it. */
+const readingDoubt = (m: AdviceMount, metric: Metric): number =>
+  m.reading_error * Math.abs(metric.of(m) ?? 0);
+
+/**
+ * How far the difference between two mounts may be out: the spread of the sky models and, where angles were read on site
+ * with an error, what that leaves open. They have nothing to do with each other, so they add in quadrature (JCGM
+ * 100:2008, eq. 10). The same either way round.
+ */
+export const doubtBetween = (a: AdviceMount, b: AdviceMount, metric: Metric): number =>
+  Math.hypot(skyDoubt(a, b, metric), readingDoubt(a, metric), readingDoubt(b, metric));
 
 /** `clear` above twice the doubt, `likely` above the doubt, else `too_close`. */
 export const confidenceOf = (lead: number, doubt: number): Confidence =>
@@ -63,10 +75,11 @@ const remarks = (chosen: AdviceMount, other: AdviceMount): string[] => {
     : [];
 };
 
-const sizeWords = (lead: number, doubt: number, unit: string): string => {
+const sizeWords = (lead: number, doubt: number, unit: string, read: readonly AdviceMount[]): string => {
   const size = `the lead is ${inWords(lead)} ${unit}`;
   if (!(doubt > 0)) return `${size} and the sky models do not differ`;
-  return `${size}, ${lead > doubt ? `${inWords(lead / doubt, 2)} times` : 'within'} the doubt of ${inWords(doubt)}`;
+  const reading = read.length > 0 ? `, reading errors of ${read.map(nameOf).join(' and ')} included` : '';
+  return `${size}, ${lead > doubt ? `${inWords(lead / doubt, 2)} times` : 'within'} the doubt of ${inWords(doubt)}${reading}`;
 };
 
 /** How far `chosen` leads `other`, how sure that is, and why. */
@@ -78,13 +91,14 @@ export const leadOver = (chosen: AdviceMount, other: AdviceMount, ranking: Ranki
   const doubt = doubtBetween(chosen, other, metric);
   const bySize = confidenceOf(lead, doubt);
   const clauses = caps(chosen, other, ranking);
+  const read = [chosen, other].filter((m) => m.reading_error > 0);
   return {
     over: other.id,
     confidence: bySize === 'clear' && clauses.length > 0 ? 'likely' : bySize,
     lead,
     doubt,
     unit: metric.unit,
-    why: [sizeWords(lead, doubt, metric.unit), ...clauses, ...remarks(chosen, other)].join('; '),
+    why: [sizeWords(lead, doubt, metric.unit, read), ...clauses, ...remarks(chosen, other)].join('; '),
   };
 };
 

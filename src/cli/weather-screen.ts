@@ -1,6 +1,6 @@
 import { type Finding, type HourLabel, MONTH_NAMES, type Severity } from '../shared/index.ts';
 import { placeWords } from './figures.ts';
-import { INDENT, named, printable, shellWord } from './plain.ts';
+import { INDENT, named, printable } from './plain.ts';
 import type { WeatherFacts } from './weather-facts.ts';
 
 const LABEL_WORDS: Record<HourLabel, string> = {
@@ -53,8 +53,11 @@ const air = ({ temperature_c: t, wind_10m_ms: w }: WeatherFacts): string => {
   return `${temperature}; ${wind}`;
 };
 
-/** What a weather file holds, how far to trust it and why: at most 100 columns. */
-export const weatherScreen = (f: WeatherFacts, path: string): string => {
+/**
+ * What a weather file holds, how far to trust it and why: at most 100 columns.
+ * @param next what to do with it
+ */
+export const weatherScreen = (f: WeatherFacts, next: string): string => {
   const lines = [
     `${printable(f.source)}   ${f.format}${f.station ? `   ${printable(f.station)}` : ''}`,
     `${place(f)}. ${LABEL_WORDS[f.label]}`,
@@ -70,7 +73,7 @@ export const weatherScreen = (f: WeatherFacts, path: string): string => {
       named(SEVERITY_WORDS[severity], printable(fix ? `${text} ${fix}` : text)),
     ),
     '',
-    named('Next', `name it in a study: weather: { file: ${shellWord(path)} }, then trackworth compare STUDY`),
+    named('Next', next),
   ];
   return `${lines.join('\n')}\n`;
 };

@@ -4,6 +4,7 @@ import { type Place, TrackworthError } from '../shared/index.ts';
 import type { RawYear } from '../weather/index.ts';
 import { isStudyName, readStudyInputs, readWeatherFile } from './inputs.ts';
 import type { Io } from './io.ts';
+import { shellWord } from './plain.ts';
 import type { WeatherOverrides } from './weather-options.ts';
 
 export interface WeatherOptions extends WeatherOverrides {
@@ -13,8 +14,8 @@ export interface WeatherOptions extends WeatherOverrides {
 interface Read {
   readonly raw: RawYear;
   readonly clock: Pick<Study['weather'], 'addMinutes' | 'acceptClock'>;
-  /** As the user can type it. */
-  readonly path: string;
+  /** What to do with it, in words. */
+  readonly next: string;
 }
 
 const placeOf = (o: WeatherOptions): { [K in keyof Place]: Place[K] | null } => ({
@@ -29,7 +30,8 @@ const readFile = async (typed: string, options: WeatherOptions, cwd: string): Pr
   const { readWeather } = await import('../weather/index.ts');
   const label = options.label ?? null;
   const raw = await readWeather({ source: typed, bytes, label, place: placeOf(options) });
-  return { raw, clock: { addMinutes: 0, acceptClock: false }, path: typed };
+  const next = `name it in a study: weather: { file: ${shellWord(typed)} }, then trackworth compare STUDY`;
+  return { raw, clock: { addMinutes: 0, acceptClock: false }, next };
 };
 
 /** The weather of a study, with the study's columns, place and clock, which no option may contradict. */
@@ -47,13 +49,13 @@ const readOfStudy = async (
         fix: 'Write the place and the label in the study: site: { ... }, weather: { label: ... }.',
       },
     ]);
-  const { study, raw, weatherPath } = await readStudyInputs(typed, cwd);
-  return { raw, clock: study.weather, path: weatherPath };
+  const { study, raw } = await readStudyInputs(typed, cwd);
+  return { raw, clock: study.weather, next: `trackworth compare ${shellWord(typed)}` };
 };
 
 /** What a weather file holds and how far to trust it. */
 export const weather = async (typed: string, options: WeatherOptions, io: Io): Promise<void> => {
-  const { raw, clock, path } = isStudyName(typed)
+  const { raw, clock, next } = isStudyName(typed)
     ? await readOfStudy(typed, options, io.cwd)
     : await readFile(typed, options, io.cwd);
   const [{ readyYear }, { weatherFacts }] = await Promise.all([
@@ -66,5 +68,5 @@ export const weather = async (typed: string, options: WeatherOptions, io: Io): P
     return io.out(factsJson(facts));
   }
   const { weatherScreen } = await import('./weather-screen.ts');
-  io.out(weatherScreen(facts, path));
+  io.out(weatherScreen(facts, next));
 };

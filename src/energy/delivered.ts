@@ -138,7 +138,7 @@ const passThroughYear = (sky: SkyHours, views: PlaneViews, spec: ChainSpec): Yea
       pass.heated += dc;
       heated += dc;
       uncapped[h] = power;
-      ac += power < ceiling ? power : ceiling;
+      ac += Math.min(power, ceiling);
     }
     pass.clear += heated * clear;
     pass.open[month] = open;

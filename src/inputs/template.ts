@@ -51,7 +51,7 @@ array:
 #    length: 1.76 m
 #    width: 1.13 m
 #    thickness: 35 mm
-#    heat: -0.34 %/K  # change of power as modules warm, with its unit. Blank: heat is not counted
+#    heat: -0.34 %/K  # change of power as modules warm, with its unit. Blank: -0.35 %/K, common for silicon
 
 # The mounts to compare, each with an id of its own (lower-case letters, digits, - and _) and a kind:
 #   roof-plane   parallel to a roof         fixed-tilt   a rack on the ground that does not move

@@ -5,7 +5,7 @@ import { nameOf } from './words.ts';
 
 /** Marks a cost per kWh that rests on part of the costs only. */
 export const INCOMPLETE_MARK = '*';
-export const INCOMPLETE_NOTE = `${INCOMPLETE_MARK} from the costs that are given: a cost that decides is blank and not counted`;
+const INCOMPLETE_NOTE = `${INCOMPLETE_MARK} from the costs that are given: a cost that decides is blank and not counted`;
 
 export interface CostColumn {
   /** `at 6.0 %` or, where the study gives no rate, `at 4 %`. */
@@ -44,6 +44,12 @@ export const lcoeColumns = (c: Comparison): CostColumn[] => {
     },
   }));
 };
+
+/** What the mark means; null where no cost per kWh bears it. */
+export const incompleteNote = (c: Comparison): string | null =>
+  c.mounts.some((mount) => lcoeColumns(c).some(({ cell }) => cell(mount).endsWith(INCOMPLETE_MARK)))
+    ? INCOMPLETE_NOTE
+    : null;
 
 export const hasCapital = (c: Comparison): boolean => c.mounts.some((mount) => mount.capital_per_kw !== null);
 

@@ -1,6 +1,6 @@
 import type { Comparison, MountResult } from '../shared/index.ts';
 import { columnsOf, hanging, padLeft, padRight, shorten, wrap } from './columns.ts';
-import { currencyOf, hasCapital, INCOMPLETE_MARK, INCOMPLETE_NOTE, lcoeColumns } from './cost-columns.ts';
+import { currencyOf, hasCapital, INCOMPLETE_MARK, incompleteNote, lcoeColumns } from './cost-columns.ts';
 import { limitsInWords } from './limit-words.ts';
 import { formatDaily, formatGain, formatNumber, UNKNOWN } from './numbers.ts';
 import { oneLine } from './plain-text.ts';
@@ -114,5 +114,7 @@ export const tableLines = (c: Comparison, width: number): string[] => {
 };
 
 /** What the marks in the table mean; empty where it has none. */
-export const tableNotes = (c: Comparison): string[] =>
-  lcoeColumns(c).length > 0 && c.mounts.some((mount) => mount.cost_incomplete) ? [INCOMPLETE_NOTE] : [];
+export const tableNotes = (c: Comparison): string[] => {
+  const note = incompleteNote(c);
+  return note === null ? [] : [note];
+};

@@ -6,7 +6,7 @@ export const cosDeg = (deg: number): number => Math.cos(deg * DEG);
 export const tanDeg = (deg: number): number => Math.tan(deg * DEG);
 
 /** Rounding may carry a cosine a hair outside -1..1; the inverse sines and cosines here clamp it first. */
-export const clampUnit = (x: number): number => (x > 1 ? 1 : x < -1 ? -1 : x);
+export const clampUnit = (x: number): number => Math.max(-1, Math.min(1, x));
 export const asinDeg = (x: number): number => Math.asin(clampUnit(x)) / DEG;
 export const acosDeg = (x: number): number => Math.acos(clampUnit(x)) / DEG;
 export const atan2Deg = (y: number, x: number): number => Math.atan2(y, x) / DEG;

@@ -17,7 +17,12 @@ export interface ReadyYear {
 const withClockAccepted = (findings: readonly Finding[]): Finding[] =>
   findings.map((f) =>
     f.code === 'clock-shift' && f.severity === 'block'
-      ? { ...f, severity: 'warning', text: `${f.text} The study accepts the clock as it is.` }
+      ? {
+          ...f,
+          severity: 'warning',
+          text: `${f.text} The study accepts the clock as it is.`,
+          fix: "Take weather.accept_clock out of the study unless the file's times were checked elsewhere.",
+        }
       : f,
   );
 

@@ -120,6 +120,8 @@ const reportUnfilled = (raw: RawYear, hours: readonly number[], problems: Proble
     });
 };
 
+const hoursInWords = (n: number): string => (n === 1 ? '1 hour' : `${n} hours`);
+
 const notesOn = (count: Count, given: readonly Component[]): Finding[] => {
   const notes: Finding[] = [];
   const note = (code: string, severity: Finding['severity'], text: string) =>
@@ -128,25 +130,25 @@ const notesOn = (count: Count, given: readonly Component[]): Finding[] => {
     note(
       'missing-at-night',
       'note',
-      `Irradiance is missing in ${count.night} hours without sun and counts as 0.`,
+      `Irradiance is missing in ${hoursInWords(count.night)} without sun and counts as 0.`,
     );
   if (count.edge > 0)
     note(
       'missing-at-the-edge',
       'warning',
-      `Irradiance is missing in ${count.edge} hours of daylight close to sunrise or sunset and counts as 0.`,
+      `Irradiance is missing in ${hoursInWords(count.edge)} of daylight close to sunrise or sunset and counts as 0.`,
     );
   if (count.negative > 0)
     note(
       'negative-irradiance',
       count.least < -20 ? 'warning' : 'note',
-      `${count.negative} values of irradiance are negative (down to ${count.least.toFixed(1)} W/m2) and count as 0.`,
+      `${count.negative === 1 ? '1 value of irradiance is' : `${count.negative} values of irradiance are`} negative (down to ${count.least.toFixed(1)} W/m2) and ${count.negative === 1 ? 'counts' : 'count'} as 0.`,
     );
   if (given.length === 3 && count.derived > 0)
     note(
       'filled-by-closure',
       'note',
-      `In ${count.derived} hours one component was missing and was worked out from the two others.`,
+      `In ${hoursInWords(count.derived)} one component was missing and was worked out from the two others.`,
     );
   if (given.length === 2) {
     const absent = COMPONENTS.find((name) => !given.includes(name)) as Component;

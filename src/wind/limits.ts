@@ -10,6 +10,9 @@ const ROUNDING_M = 1e-9;
 /** Plain metres to the centimetre: `3`, `0.25`, `3.9`. */
 const metres = (m: number): string => String(Number(m.toFixed(2)));
 
+/** An excess under a centimetre would print as 0. */
+const metresOver = (m: number): string => (m < 0.01 ? String(Number(m.toPrecision(2))) : metres(m));
+
 const statusOf = (excessM: number, readingErrorM: number): LimitStatus => {
   if (readingErrorM > 0 && Math.abs(excessM) <= readingErrorM) return 'within_reading_error';
   return excessM > ROUNDING_M ? 'broken' : 'kept';
@@ -20,8 +23,7 @@ const detailOf = (status: LimitStatus, valueM: number, limitM: number, readingEr
     case 'within_reading_error':
       return `too near to tell: ${metres(valueM)} of ${metres(limitM)} m, read to ${metres(readingErrorM)} m`;
     case 'broken':
-      // an excess under a centimetre would print as 0
-      return `exceeds ${metres(limitM)} m by ${String(Number((valueM - limitM).toPrecision(2)))} m`;
+      return `exceeds ${metres(limitM)} m by ${metresOver(valueM - limitM)} m`;
     default:
       return `within: ${metres(valueM)} of ${metres(limitM)} m`;
   }

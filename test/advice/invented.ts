@@ -49,6 +49,7 @@ export const mount = (sketch: Sketch): AdviceMount => {
     break_even_gain: null,
     premium_per_kw: null,
     limits: [],
+    reading_error: 0,
     downtime_blank: false,
     snow_counted: false,
     ...rest,

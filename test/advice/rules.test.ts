@@ -50,6 +50,27 @@ test('lead and doubt are the difference in cost per kWh and half its range over 
   );
 });
 
+test('reading errors of the angles widen the doubt in quadrature, and the why says whose', () => {
+  // The sky models leave 0.003 open as above; 4 % of 0.1 on the roof is 0.004: together 0.005, and the lead of 0.008 is 1.6 of it.
+  const readRoof = (reading_error: number) =>
+    mount({
+      id: 'roof',
+      kind: 'roof-plane',
+      gcr: null,
+      rows: 'no rows',
+      cost: [0.1, 0.1, 0.1],
+      reading_error,
+    });
+  const dearer = mount({ id: 'ground', cost: [0.108, 0.112, 0.106] });
+  const leadOf = (error: number) => advise(study([readRoof(error), dearer])).leads[0];
+  expect(leadOf(0).doubt).toBeCloseTo(0.003, 12);
+  expect(leadOf(0).confidence).toBe('clear');
+  const read = leadOf(0.04);
+  expect(read.doubt).toBeCloseTo(0.005, 12);
+  expect(read.confidence).toBe('likely');
+  expect(read.why).toContain('1.6 times the doubt of 0.00500, reading errors of roof included');
+});
+
 test('a smaller lead over the same doubt is likely, then too close', () => {
   const likely = advise(study([ground, tracker({ cost: [0.1135, 0.1175, 0.1115] })])); // 0.0045 over 0.003
   expect([likely.choice, likely.confidence]).toEqual(['ground', 'likely']);

@@ -88,6 +88,8 @@ test('a plain table is read through the study that names its columns', async () 
   expect(code).toBe(0);
   expect(out).toContain('only global light is in the file');
   expect(out).toMatch(/GHI global.* 1 678$/m);
+  // the study, not the bare table, which says nothing of its columns
+  expect(out).toMatch(/^Next +trackworth compare study\.yaml$/m);
   expect((await command(cwd, 'compare', 'study.yaml', '--no-charts')).code).toBe(0);
 });
 

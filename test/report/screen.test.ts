@@ -128,6 +128,21 @@ test('without a rate the cost per kWh is shown at 4, 7 and 10 %, and what is inc
   expect(text).toContain('* from the costs that are given');
 });
 
+test('a mark is explained only where a figure bears it', () => {
+  const whole = invented();
+  const [first, ...others] = whole.mounts;
+  const unpriced = {
+    ...first,
+    capital: null,
+    capital_per_kw: null,
+    lcoe_per_kwh: null,
+    cost_incomplete: true,
+  };
+  const text = screen(() => ({ ...whole, mounts: [unpriced, ...others] }));
+  expect(text).toContain('—');
+  expect(text).not.toContain('* from the costs that are given');
+});
+
 test('a blocked study says so above its table, notes stay out', () => {
   const text = screen(inventedBlocked);
   expect(text.indexOf('BLOCKED')).toBeGreaterThan(0);

@@ -1,6 +1,6 @@
 import { beforeAll, describe, expect, test } from 'vitest';
 import { type Comparison, type MountResult, wrap180 } from '../../src/shared/index.ts';
-import { compareMounts } from '../../src/study.ts';
+import { compareMounts, surveySite } from '../../src/study.ts';
 import type { RawYear } from '../../src/weather/index.ts';
 import { movedBy, sampleStudy, sampleYear, studyFrom } from '../support/sample.ts';
 
@@ -8,8 +8,12 @@ let raw: RawYear;
 let sample: Comparison;
 beforeAll(async () => {
   raw = await sampleYear();
-  sample = compareMounts(await sampleStudy(), raw);
+  const study = await sampleStudy();
+  sample = compareMounts(study, raw, await surveySite(study, raw.place, noFile));
 });
+
+/** The sample's skyline is written in the study. */
+const noFile = () => Promise.reject(new Error('no file is read here'));
 
 const mount = (c: Comparison, id: string) => c.mounts.find((m) => m.id === id) as MountResult;
 const sum = (numbers: readonly number[]) => numbers.reduce((a, b) => a + b, 0);
@@ -120,7 +124,11 @@ mounts: [ { id: ground, kind: fixed-tilt }, { id: tracker, kind: single-axis } ]
   test('accepted as it is recommends, and keeps the finding as a warning', async () => {
     const c = await compare(study(', accept_clock: true'), movedBy(raw, 1));
     expect(c.advice.choice).not.toBeNull();
-    expect(c.weather.findings.find((f) => f.code === 'clock-shift')?.severity).toBe('warning');
+    const finding = c.weather.findings.find((f) => f.code === 'clock-shift');
+    expect(finding?.severity).toBe('warning');
+    expect(finding?.text).toMatch(/The study accepts the clock as it is\.$/);
+    // what the study has done already is not asked of it again
+    expect(finding?.fix).not.toMatch(/accept_clock: true/);
   });
 });
 
@@ -201,6 +209,6 @@ test('an albedo asked of a file that has none is an error, not a silent 0.2', as
 test('the comparison changes nothing that it was given', async () => {
   const study = await sampleStudy();
   const before = [raw.ghi.slice(), raw.dni.slice(), JSON.stringify(study)];
-  compareMounts(study, raw);
+  compareMounts(study, raw, await surveySite(study, raw.place, noFile));
   expect([raw.ghi, raw.dni, JSON.stringify(study)]).toEqual(before);
 });

@@ -60,6 +60,10 @@ describe('a complete year', () => {
       ['missing-at-night', 'note'],
       ['negative-irradiance', 'note'],
     ]);
+    expect(year.notes.map((n) => n.text)).toEqual([
+      'Irradiance is missing in 1 hour without sun and counts as 0.',
+      '1 value of irradiance is negative (down to -2.5 W/m2) and counts as 0.',
+    ]);
     expect(year.notes[1].text).toContain('-2.5 W/m2');
   });
 

@@ -48,6 +48,8 @@ test('a height over its limit is broken, and the detail says by how much', () =>
     },
   ]);
   expect(checkLimits('tracker', ground(3.001), limits)[0].detail).toBe('exceeds 3 m by 0.001 m');
+  // both lengths are printed to the centimetre, and so is what lies between them
+  expect(checkLimits('tracker', ground(7.55), limits)[0].detail).toBe('exceeds 3 m by 4.55 m');
 });
 
 test('a roof array is held to its projection, not to the height of a building', () => {

@@ -49,7 +49,9 @@ export const array = (convert: Convert) => {
             width: z.optional(side('a width', '1.13 m', 0, 10, 'Shorter side of one module.')),
             thickness: z.optional(side('a thickness', '35 mm', 0, 0.5, 'With its frame.')),
             heat: z.optional(
-              heat('Change of power per kelvin, with its unit, negative. Blank: heat is not counted.'),
+              heat(
+                'Change of power per kelvin, with its unit, negative. Blank: -0.35 %/K, common practice for crystalline silicon.',
+              ),
             ),
           })
           .register(hints, { description: 'One module. Blank: power is not rounded to whole modules.' }),

@@ -37,7 +37,11 @@ const leads = (c: Comparison): string => {
   ]);
   return blocks(
     `How sure the lead of ${choice} is. The doubt is half the range, over the Perez, Hay-Davies and Reindl skies, of the ` +
-      'difference between the two mounts. A lead is clear above twice the doubt where like is compared with like, and likely above the doubt. The doubt holds nothing else: ' +
+      'difference between the two mounts. A lead is clear above twice the doubt where like is compared with like, and likely above the doubt. ' +
+      (c.mounts.some((m) => m.orientation_factor_band !== null)
+        ? 'Where angles were read on site with an error, what that leaves open is added in quadrature. '
+        : '') +
+      'The doubt holds nothing else: ' +
       'prices, upkeep, life and downtime are taken as given, and what they may move stands under "What would reverse it".',
     mdTable(['Over', 'The lead is', 'Why'], ['left', 'left', 'left'], rows),
   );

@@ -1,5 +1,5 @@
 import type { Comparison, MountResult } from '../../shared/index.ts';
-import { costLack, currencyOf, hasCapital, INCOMPLETE_NOTE, lcoeColumns } from '../cost-columns.ts';
+import { costLack, currencyOf, hasCapital, incompleteNote, lcoeColumns } from '../cost-columns.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
 import { formatGain, formatNumber, formatPercent, formatSigned } from '../numbers.ts';
 import { capitalised, oneLine } from '../plain-text.ts';
@@ -46,13 +46,13 @@ const lines = (c: Comparison): string => {
 /** The cost lines of every mount, or what is lacking. */
 export const cost = (c: Comparison): string => {
   const lack = costLack(c);
-  const incomplete = c.mounts.some((m) => m.cost_incomplete) && lcoeColumns(c).length > 0;
+  const incomplete = incompleteNote(c);
   return section(
     'Costs',
     lack === null ? '' : `${md(capitalised(lack))}.`,
     hasCapital(c) ? terms(c) : '',
     hasCapital(c) ? lines(c) : '',
-    incomplete ? `${md(INCOMPLETE_NOTE)}.` : '',
+    incomplete === null ? '' : `${md(incomplete)}.`,
   );
 };
 

@@ -1,5 +1,5 @@
 import type { Comparison, MountResult } from '../../shared/index.ts';
-import { costLack, currencyOf, hasCapital, INCOMPLETE_NOTE, lcoeColumns } from '../cost-columns.ts';
+import { costLack, currencyOf, hasCapital, incompleteNote, lcoeColumns } from '../cost-columns.ts';
 import type { ChartFile } from '../extras.ts';
 import { limitsInWords } from '../limit-words.ts';
 import { type Align, md, mdImage, mdTable } from '../markdown.ts';
@@ -44,10 +44,11 @@ export const figure = ({ title, altText, file }: ChartFile): string =>
 
 const notes = (c: Comparison): string => {
   const lack = costLack(c);
+  const incomplete = incompleteNote(c);
   return [
     `Energy is what leaves the inverter (AC) in the first year, per kW of DC rating: ${md(arrayWords(c))}.`,
     lack === null ? '' : `${md(capitalised(lack))}.`,
-    c.mounts.some((m) => m.cost_incomplete) && lcoeColumns(c).length > 0 ? `${md(INCOMPLETE_NOTE)}.` : '',
+    incomplete === null ? '' : `${md(incomplete)}.`,
   ]
     .filter((text) => text !== '')
     .join(' ');
