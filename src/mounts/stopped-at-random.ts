@@ -56,7 +56,7 @@ export const turnsStoppedAt = (sun: SunHours, mount: SingleAxis): number[] => {
 
 /**
  * The same for a tracker that faces the sun: 18 directions, each the mean of a group of equal daylight. They keep the
- * light within 1 % of that of all suns of the year.
+ * light within about 1 % of that of all suns of the year.
  */
 export const planesStoppedAt = (sun: SunHours): { tiltDeg: number; azimuthDeg: number }[] => {
   const daylight = daylightOfSamples(sun);
