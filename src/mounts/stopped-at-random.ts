@@ -70,7 +70,7 @@ export const turnsStoppedAt = (
 
 /**
  * The same for a tracker that faces the sun: 18 directions, each the mean of a group of equal daylight. They keep the
- * light within 1 % of that of all suns of the year. A mast with limits stops as near to each as it reaches.
+ * light within about 1 % of that of all suns of the year. A mast with limits stops as near to each as it reaches.
  */
 export const planesStoppedAt = (
   sun: SunHours,

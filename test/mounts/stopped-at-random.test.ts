@@ -1,8 +1,9 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { lightThrough, planeViews } from '../../src/energy/index.ts';
+import { lightThrough, type PlaneViews, planeViews } from '../../src/energy/index.ts';
 import {
   type DualAxis,
+  type Pointing,
   planesStoppedAt,
   pointAtTurn,
   pointFixed,
@@ -109,20 +110,25 @@ describe('a single-axis tracker that stopped at a random moment of daylight', ()
     expect(compared).toBe(9);
     console.log(`seven turns against all: worst ${(worst * 100).toFixed(3)} % of 9`);
     expect(worst).toBeLessThan(0.005); // far below what is known of when trackers fail
-  });
+  }, 60_000);
 });
 
 describe('a tracker that faced the sun and stopped at a random moment of daylight', () => {
-  test('keeps the light of the mean over every 23rd sun of the year', () => {
+  test('keeps the light of the mean over every 53rd sun of the year', () => {
     let worst = 0;
     for (const { site: place, sky: over } of skies) {
       const { sun } = place;
-      const at = (tilt: number, azimuth: number) =>
-        light(planeViews(sun, pointFixed(sun, tilt, azimuth, null)), over);
+      let pointing: Pointing | null = null;
+      let views: PlaneViews | null = null;
+      const at = (tilt: number, azimuth: number) => {
+        pointing = pointFixed(sun, tilt, azimuth, null, pointing);
+        views = planeViews(sun, pointing, null, views);
+        return light(views, over);
+      };
       let [all, sum] = [0, 0];
       let suns = 0;
       let h = 0;
-      for (let s = 7; s < sun.up.length; s += 23) {
+      for (let s = 7; s < sun.up.length; s += 53) {
         while (sun.first[h + 1] <= s) h++;
         // An hour of sunrise has as many samples as any other, for less daylight.
         const time = sun.sunlit[h];
@@ -130,15 +136,15 @@ describe('a tracker that faced the sun and stopped at a random moment of dayligh
         all += time;
         suns++;
       }
-      expect(suns).toBeGreaterThan(700);
+      expect(suns).toBeGreaterThan(300);
       const planes = planesStoppedAt(sun);
       expect(planes).toHaveLength(18);
       const few = mean(planes.map((p) => at(p.tiltDeg, p.azimuthDeg)));
       worst = Math.max(worst, Math.abs(few / (sum / all) - 1));
     }
-    console.log(`18 planes against every 23rd sun: worst ${(worst * 100).toFixed(2)} %`);
+    console.log(`18 planes against every 53rd sun: worst ${(worst * 100).toFixed(2)} %`);
     expect(worst).toBeLessThan(0.012); // the mean plane of a group takes a little more than the group does
-  });
+  }, 60_000);
 });
 
 test('a field of masts that stand still lies between a lone mast and long rows', () => {
