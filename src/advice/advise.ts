@@ -21,7 +21,6 @@ export const advise = (input: AdviceInput): AdviceResult => {
   const reference = input.mounts.find((m) => m.id === input.referenceId) as AdviceMount;
   const { kept, excluded } = siftByLimits(input.mounts);
   const common = {
-    doubts: doubtsOf(input, reference),
     cautions: cautionsFor(input.mounts.map((m) => m.kind)),
     excluded,
   };
@@ -29,11 +28,23 @@ export const advise = (input: AdviceInput): AdviceResult => {
   const blocking = input.findings.filter((finding) => finding.severity === 'block');
   if (blocking.length > 0) {
     const headline = `NO RECOMMENDATION: ${blocking.map(({ text, fix }) => `${text} ${fix}`.trim()).join(' ')}`;
-    return { ...NO_CHOICE, headline, reasons: reasonsFor(input, reference, null), ...common };
+    return {
+      ...NO_CHOICE,
+      headline,
+      reasons: reasonsFor(input, reference, null),
+      doubts: doubtsOf(input, reference, null),
+      ...common,
+    };
   }
   if (kept.length === 0) {
     const headline = `NO MOUNT KEEPS ITS LIMITS: ${excluded.map(({ id, why }) => `${id} (${why})`).join(', ')}`;
-    return { ...NO_CHOICE, headline, reasons: reasonsFor(input, reference, null), ...common };
+    return {
+      ...NO_CHOICE,
+      headline,
+      reasons: reasonsFor(input, reference, null),
+      doubts: doubtsOf(input, reference, null),
+      ...common,
+    };
   }
 
   const ranking = rank(kept, input);
@@ -42,10 +53,11 @@ export const advise = (input: AdviceInput): AdviceResult => {
   return {
     choice: chosen.id,
     confidence: leastSure(leads),
-    headline: headlineOf(ranking, leads, excluded.length > 0),
+    headline: headlineOf(ranking, leads, input.mounts),
     leads,
     reasons: reasonsFor(input, reference, ranking),
     switch_points: switchPoints(input, reference, ranking),
+    doubts: doubtsOf(input, reference, ranking),
     ...common,
   };
 };

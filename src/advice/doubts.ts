@@ -1,5 +1,7 @@
 import type { AdviceInput, AdviceMount } from './input.ts';
 import { isLoneMast, rowsDiffer } from './leads.ts';
+import { notHeldAgainst } from './programme.ts';
+import { type Ranking, unrankedWords } from './ranking.ts';
 import { isTracker, listWords, nameOf, percent } from './words.ts';
 
 const skySpread = (m: AdviceMount, reference: AdviceMount): string => {
@@ -57,8 +59,20 @@ const aboutMoney = (input: AdviceInput): string[] => {
       ];
 };
 
+const aboutUnranked = (ranking: Ranking): string[] => {
+  const words = unrankedWords(ranking);
+  return words === null ? [] : [`${words}. What has no price might be cheaper than what is chosen.`];
+};
+
+const aboutProgramme = (mounts: readonly AdviceMount[]): string[] =>
+  mounts.flatMap((m) => {
+    const words = notHeldAgainst(m, mounts);
+    return words === null ? [] : [`Programme: ${words}, so ${nameOf(m)} was not held against it.`];
+  });
+
 /** What the answer cannot know, each with its numbers where it has any. */
-export const doubtsOf = (input: AdviceInput, reference: AdviceMount): string[] => [
+export const doubtsOf = (input: AdviceInput, reference: AdviceMount, ranking: Ranking | null): string[] => [
+  ...(ranking === null ? [] : aboutUnranked(ranking)),
   ...input.mounts.filter((m) => isTracker(m) && m !== reference).map((m) => skySpread(m, reference)),
   ...(input.inverterGiven
     ? []
@@ -67,6 +81,7 @@ export const doubtsOf = (input: AdviceInput, reference: AdviceMount): string[] =
       ]),
   ...aboutRows(input.mounts, reference),
   ...input.mounts.flatMap(aboutMount),
+  ...aboutProgramme(input.mounts),
   ...aboutMoney(input),
   ...(input.notCounted.length === 0
     ? []

@@ -1,7 +1,9 @@
 import { inWords } from '../cost/index.ts';
 import type { AdviceMount } from './input.ts';
-import type { Lead } from './leads.ts';
-import type { Ranking } from './ranking.ts';
+import { doubtWords, type Lead, turnsOnRate } from './leads.ts';
+import { notHeldAgainst } from './programme.ts';
+import { onEnergyAlone, type Ranking, unrankedWords } from './ranking.ts';
+import { winnersWords } from './rates.ts';
 import { describeMount, listWords, nameOf } from './words.ts';
 
 /** `CLEAR over tracker, LIKELY over roof`, surest first. */
@@ -15,15 +17,37 @@ const leadWords = (leads: readonly Lead[], names: (id: string) => string): strin
     )
     .join(', ');
 
-/** The answer in one or two sentences, no surer than the least sure lead. */
-export const headlineOf = (ranking: Ranking, leads: readonly Lead[], someExcluded: boolean): string => {
-  const [chosen] = ranking.order;
-  const names = (id: string): string => nameOf(ranking.order.find((m) => m.id === id) as AdviceMount);
-  const onEnergy = ranking.lacking === null ? '' : ' on energy alone, costs not weighed';
-  if (leads.length === 0) {
-    const only = someExcluded ? 'the only mount that keeps its limits' : 'the only mount compared';
-    return `ONLY ${nameOf(chosen)}: ${describeMount(chosen)}. It is ${only}, so nothing is ranked`;
+/** Why nothing is ranked: one mount is left. */
+const onlyOne = ({ order: [chosen], unranked }: Ranking, mounts: readonly AdviceMount[]): string => {
+  const someExcluded = mounts.length > 1 + unranked.length;
+  const exempt = someExcluded ? notHeldAgainst(chosen, mounts) : null;
+  const keeps = `keeps its limits${exempt === null ? '' : ` (${exempt})`}`;
+  const has = 'a cost per kWh';
+  const only =
+    unranked.length > 0
+      ? `the only mount that ${someExcluded ? `${keeps} and has ${has}` : `has ${has}`}`
+      : someExcluded
+        ? `the only mount that ${keeps}`
+        : 'the only mount compared';
+  return `ONLY ${nameOf(chosen)}: ${describeMount(chosen)}. It is ${only}, so nothing is ranked`;
+};
+
+/** Why the nearest of the others is too close. */
+const closeness = (chosen: AdviceMount, other: AdviceMount, lead: Lead, ranking: Ranking): string => {
+  if (turnsOnRate(chosen, other, ranking)) {
+    return `It turns on the discount rate, which is not given: the cheaper one is ${winnersWords([chosen, other])}`;
   }
+  return lead.lead === 0
+    ? `${nameOf(chosen)} and ${nameOf(other)} are equal in ${ranking.metric.words}`
+    : `${nameOf(chosen)} is ahead of ${nameOf(other)} by ${inWords(lead.lead)} ${lead.unit}, within ` +
+        doubtWords(chosen, other, lead.doubt);
+};
+
+const rankedHeadline = (ranking: Ranking, leads: readonly Lead[]): string => {
+  const [chosen] = ranking.order;
+  const mountOf = (id: string): AdviceMount => ranking.order.find((m) => m.id === id) as AdviceMount;
+  const names = (id: string): string => nameOf(mountOf(id));
+  const onEnergy = onEnergyAlone(ranking) ? ' on energy alone, costs not weighed' : '';
   const close = leads.filter((lead) => lead.confidence === 'too_close');
   const surer = leadWords(leads, names);
   if (close.length === 0) {
@@ -31,11 +55,18 @@ export const headlineOf = (ranking: Ranking, leads: readonly Lead[], someExclude
   }
   const [nearest] = close;
   const both = listWords([nameOf(chosen), ...close.map((lead) => names(lead.over))]);
-  const size =
-    nearest.lead === 0
-      ? `${nameOf(chosen)} and ${names(nearest.over)} are equal in ${ranking.metric.words}`
-      : `${nameOf(chosen)} is ahead of ${names(nearest.over)} by ${inWords(nearest.lead)} ${nearest.unit}, ` +
-        `within the doubt of ${inWords(nearest.doubt)}`;
+  const why = closeness(chosen, mountOf(nearest.over), nearest, ranking);
   const rest = surer === '' ? '' : `. Lead of ${nameOf(chosen)}: ${surer}`;
-  return `TOO CLOSE TO CALL${onEnergy}: ${both}. ${size}${rest}`;
+  return `TOO CLOSE TO CALL${onEnergy}: ${both}. ${why}${rest}`;
+};
+
+/** The answer in a few sentences, no surer than the least sure lead; `mounts` are all that the study compares. */
+export const headlineOf = (
+  ranking: Ranking,
+  leads: readonly Lead[],
+  mounts: readonly AdviceMount[],
+): string => {
+  const answer = leads.length === 0 ? onlyOne(ranking, mounts) : rankedHeadline(ranking, leads);
+  const unranked = unrankedWords(ranking);
+  return unranked === null ? answer : `${answer}. ${unranked}`;
 };

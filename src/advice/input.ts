@@ -46,7 +46,7 @@ export type AdviceMount = Readonly<
 export interface AdviceInput {
   readonly mounts: readonly AdviceMount[];
   readonly referenceId: string;
-  /** What the study asks for; null: lowest cost per kWh where every mount has one. */
+  /** What the study asks for; null: lowest cost per kWh where any mount has one. */
   readonly objective: Objective | null;
   /** The study's own sky model, under which the mounts' figures stand. */
   readonly skyModel: SkyModel;

@@ -1,16 +1,15 @@
 import { inWords } from '../cost/index.ts';
 import type { AdviceResult, Confidence, SkyModel } from '../shared/index.ts';
 import type { AdviceMount } from './input.ts';
-import type { Metric, Ranking } from './ranking.ts';
-import { isTracker, nameOf } from './words.ts';
+import type { Metric } from './metric.ts';
+import { onEnergyAlone, type Ranking } from './ranking.ts';
+import { holdsAtAllRates, ROUNDING, ratesOf, winnersWords } from './rates.ts';
+import { isTracker, listWords, nameOf } from './words.ts';
 
 export type Lead = AdviceResult['leads'][number];
 
 /** The skies whose spread is the doubt. The isotropic sky is biased low and only ever shown as a lower bound. */
 export const DOUBT_SKIES: readonly SkyModel[] = ['perez', 'hay-davies', 'reindl'];
-
-/** A lead under this share of the metric itself is the rounding of sums. */
-const ROUNDING = 1e-9;
 
 /** Half the range, over the three skies, of the difference between two mounts in the metric; the same either way round. */
 const skyDoubt = (a: AdviceMount, b: AdviceMount, metric: Metric): number => {
@@ -44,6 +43,15 @@ export const isLoneMast = (m: AdviceMount): boolean =>
 export const rowsDiffer = (a: AdviceMount, b: AdviceMount): boolean =>
   onGround(a) && onGround(b) && !isLoneMast(a) && !isLoneMast(b) && (a.gcr === null) !== (b.gcr === null);
 
+/** Whether the cheaper of the two is another one at another rate, where the study gives none. */
+export const turnsOnRate = (chosen: AdviceMount, other: AdviceMount, ranking: Ranking): boolean =>
+  ranking.withoutRate && !holdsAtAllRates([chosen, other]);
+
+const rateClause = (chosen: AdviceMount, other: AdviceMount): string =>
+  holdsAtAllRates([chosen, other])
+    ? `no discount rate is given; the order holds at ${ratesOf([chosen, other])}`
+    : `no discount rate is given, and the cheaper one is ${winnersWords([chosen, other])}`;
+
 /** Why a lead is `likely` at most, whatever its size: one clause for each like-with-like rule that is not met. */
 const caps = (chosen: AdviceMount, other: AdviceMount, ranking: Ranking): string[] => {
   const clauses: string[] = [];
@@ -54,7 +62,11 @@ const caps = (chosen: AdviceMount, other: AdviceMount, ranking: Ranking): string
   if (ranking.rankedBy === 'lowest cost per kWh' && incomplete.length > 0) {
     clauses.push(`the costs of ${incomplete.join(' and ')} are incomplete, and blank is not zero`);
   }
-  if (ranking.lacking !== null) clauses.push(`costs were not weighed, for lack of ${ranking.lacking}`);
+  if (onEnergyAlone(ranking)) clauses.push(`costs were not weighed, for lack of ${ranking.lacking}`);
+  if (ranking.unranked.length > 0) {
+    clauses.push(`${listWords(ranking.unranked.map(nameOf))} could not be ranked and might be cheaper`);
+  }
+  if (ranking.withoutRate) clauses.push(rateClause(chosen, other));
   if (isTracker(chosen) && chosen.downtime_blank) {
     clauses.push(`downtime of ${nameOf(chosen)} is blank, and blank is not zero`);
   }
@@ -76,12 +88,29 @@ const remarks = (chosen: AdviceMount, other: AdviceMount): string[] => {
     : [];
 };
 
-const sizeWords = (lead: number, doubt: number, unit: string, read: readonly AdviceMount[]): string => {
-  const size = `the lead is ${inWords(lead)} ${unit}`;
-  if (!(doubt > 0)) return `${size} and the sky models do not differ`;
-  const reading = read.length > 0 ? `, reading errors of ${read.map(nameOf).join(' and ')} included` : '';
-  return `${size}, ${lead > doubt ? `${inWords(lead / doubt, 2)} times` : 'within'} the doubt of ${inWords(doubt)}${reading}`;
+/** `the doubt of sky models (0.00300)`, with the reading errors where the doubt holds any. */
+export const doubtWords = (a: AdviceMount, b: AdviceMount, doubt: number): string => {
+  const read = [a, b].filter((m) => m.reading_error > 0);
+  const reading = read.length > 0 ? ` and of the reading errors of ${listWords(read.map(nameOf))}` : '';
+  return `the doubt of sky models${reading} (${inWords(doubt)})`;
 };
+
+/** Beyond twice the doubt no multiple is given: the sky models are not the only thing that may be out. */
+const timesWords = (lead: number, doubt: number): string => {
+  if (lead > 2 * doubt) return 'more than twice';
+  return lead > doubt ? `${inWords(lead / doubt, 2)} times` : 'within';
+};
+
+const sizeWords = (
+  lead: number,
+  doubt: number,
+  unit: string,
+  [a, b]: readonly [AdviceMount, AdviceMount],
+): string =>
+  `the lead is ${inWords(lead)} ${unit}` +
+  (doubt > 0
+    ? `, ${timesWords(lead, doubt)} ${doubtWords(a, b, doubt)}`
+    : ' and the sky models do not differ');
 
 /** How far `chosen` leads `other`, how sure that is, and why. */
 export const leadOver = (chosen: AdviceMount, other: AdviceMount, ranking: Ranking): Lead => {
@@ -90,16 +119,17 @@ export const leadOver = (chosen: AdviceMount, other: AdviceMount, ranking: Ranki
   const raw = metric.lowWins ? b - a : a - b;
   const lead = Math.abs(raw) <= ROUNDING * Math.abs(b) ? 0 : raw;
   const doubt = doubtBetween(chosen, other, metric);
-  const bySize = confidenceOf(lead, doubt);
+  const bySize = turnsOnRate(chosen, other, ranking) ? 'too_close' : confidenceOf(lead, doubt);
   const clauses = caps(chosen, other, ranking);
-  const read = [chosen, other].filter((m) => m.reading_error > 0);
   return {
     over: other.id,
     confidence: bySize === 'clear' && clauses.length > 0 ? 'likely' : bySize,
     lead,
     doubt,
     unit: metric.unit,
-    why: [sizeWords(lead, doubt, metric.unit, read), ...clauses, ...remarks(chosen, other)].join('; '),
+    why: [sizeWords(lead, doubt, metric.unit, [chosen, other]), ...clauses, ...remarks(chosen, other)].join(
+      '; ',
+    ),
   };
 };
 

@@ -1,7 +1,9 @@
 import { inWords } from '../cost/index.ts';
 import type { AdviceInput, AdviceMount } from './input.ts';
 import { DOUBT_SKIES } from './leads.ts';
-import type { Ranking } from './ranking.ts';
+import { MIDDLE_RATE } from './metric.ts';
+import { onEnergyAlone, type Ranking, unrankedWords } from './ranking.ts';
+import { cheapestAtRates } from './rates.ts';
 import { currencyOf, isTracker, listWords, moreOrLess, nameOf, percentRange } from './words.ts';
 
 const ranked = ({ metric, order }: Ranking): string =>
@@ -45,29 +47,38 @@ const breakEven = (m: AdviceMount, reference: AdviceMount, currency: string): st
   return `${nameOf(m)} equals ${nameOf(reference)} in cost per kWh ${at} (${quoted}${known}).`;
 };
 
-/** Cheapest mount at each rate that the output shows where the study gives none. */
-const atRates = (mounts: readonly AdviceMount[], currency: string): string[] => {
-  const rates = Object.keys(mounts[0]?.lcoe_at_rates ?? {});
-  if (rates.length === 0 || mounts.some((m) => Object.keys(m.lcoe_at_rates).length === 0)) return [];
-  const cheapest = rates.map((rate) => {
-    const best = mounts.reduce((a, b) => (b.lcoe_at_rates[rate] < a.lcoe_at_rates[rate] ? b : a));
-    return `${nameOf(best)} at ${rate} (${inWords(best.lcoe_at_rates[rate], 4)})`;
-  });
-  return [`Without a rate, the lowest ${currency} per kWh is that of ${listWords(cheapest)}.`];
+/** Cheapest priced mount at each rate that the output shows where the study gives none; of those that may be chosen. */
+const atRates = (mounts: readonly AdviceMount[], all: readonly AdviceMount[], currency: string): string[] => {
+  const priced = mounts.filter((m) => Object.keys(m.lcoe_at_rates).length > 0);
+  if (priced.length === 0) return [];
+  const among = priced.length === all.length ? '' : ` among ${listWords(priced.map(nameOf))}`;
+  const cheapest = cheapestAtRates(priced).map(
+    ({ rate, best, cost }) => `${nameOf(best)} at ${rate} (${inWords(cost, 4)})`,
+  );
+  return [`Without a rate, the lowest ${currency} per kWh${among} is that of ${listWords(cheapest)}.`];
+};
+
+/** How the ranking had to make do with what the study gives. */
+const makingDo = (ranking: Ranking): string[] => {
+  const unranked = unrankedWords(ranking);
+  return [
+    ...(onEnergyAlone(ranking)
+      ? [`Ranked by energy alone: to weigh costs the study lacks ${ranking.lacking}.`]
+      : []),
+    ...(ranking.withoutRate
+      ? [`No discount rate is given (finance.real_rate): costs are ranked as they stand at ${MIDDLE_RATE}.`]
+      : []),
+    ...(unranked === null ? [] : [`${unranked}.`]),
+  ];
 };
 
 /** Why: the ranking, then each figure that it rests on, each with its numbers and its reference. */
 export const reasonsFor = (input: AdviceInput, reference: AdviceMount, ranking: Ranking | null): string[] => {
   const currency = currencyOf(input);
   const others = input.mounts.filter((m) => m.id !== reference.id);
-  const lacking =
-    ranking?.lacking == null
-      ? []
-      : [`Ranked by energy alone: to weigh costs the study lacks ${ranking.lacking}.`];
   return [
-    ...(ranking === null ? [] : [ranked(ranking)]),
-    ...lacking,
-    ...atRates(input.mounts, currency),
+    ...(ranking === null ? [] : [ranked(ranking), ...makingDo(ranking)]),
+    ...atRates(ranking?.order ?? input.mounts, input.mounts, currency),
     ...others.map((m) => gain(m, reference, input.years)),
     worstMonths(input),
     ...others

@@ -1,13 +1,20 @@
 import { bisect, type SameEnergy } from '../shared/index.ts';
 import { mountCost } from './mount-cost.ts';
-import type { CostSpec } from './spec.ts';
+import { presentCost } from './present-value.ts';
+import type { CostSpec, FinanceSpec } from './spec.ts';
 import { inWords } from './words.ts';
 
 /** DC rating over the inverter's AC rating beyond which nobody adds modules; the issue's limit of the search. */
 export const MOST_DC_PER_AC = 2.5;
 
 export interface SameEnergyQuestion {
-  readonly tracker: { readonly id: string; readonly label: string; readonly capital: number | null };
+  readonly tracker: {
+    readonly id: string;
+    readonly label: string;
+    readonly capital: number | null;
+    /** At `startDcKw`; absent or null: the cost over the life is not compared. */
+    readonly cost?: CostSpec | null;
+  };
   readonly reference: { readonly id: string; readonly label: string; readonly cost: CostSpec | null };
   /** What the tracker delivers in the first year, whole array. */
   readonly targetKwh: number;
@@ -20,6 +27,8 @@ export interface SameEnergyQuestion {
   readonly moduleAreaM2: number | null;
   readonly inverterKw: number | null;
   readonly currency: string | null;
+  /** Absent, or without rate or years: the cost over the life is not compared. */
+  readonly finance?: Pick<FinanceSpec, 'realRate' | 'years'>;
 }
 
 /** The smallest whole number in 1 .. `most` at which the rising `energy` reaches `target`; `most` does reach it. */
@@ -45,30 +54,68 @@ const searchLimit = (q: SameEnergyQuestion): number => {
   return q.moduleKw * Math.max(1, q.inverterKw === null ? Math.ceil(whole) : Math.floor(whole + 1e-9));
 };
 
-const sentence = (q: SameEnergyQuestion, dcKw: number, modules: number | null, difference: number | null) => {
-  const size =
-    modules === null || q.moduleKw === null
-      ? `${inWords(dcKw)} kW of ${q.reference.label} in place of ${inWords(q.startDcKw)} kW`
-      : `${modules} modules on ${q.reference.label} in place of ${Math.round(q.startDcKw / q.moduleKw)}`;
+/** A rating or an area: two decimals at most, so that whole modules of a usual size print exactly. */
+const sizeWords = (x: number): string => (x < 1000 ? String(Number(x.toFixed(2))) : inWords(x));
+
+const arrayWords = (q: SameEnergyQuestion, dcKw: number, modules: number | null): string => {
+  const { label } = q.reference;
+  if (modules === null || q.moduleKw === null)
+    return `${sizeWords(dcKw)} kW of fixed modules on ${label} in place of ${sizeWords(q.startDcKw)} kW`;
+  const area = q.moduleAreaM2 === null ? '' : `, ${Math.round(modules * q.moduleAreaM2)} m2`;
+  return `${modules} fixed modules (${sizeWords(dcKw)} kW${area}) on ${label} in place of ${Math.round(q.startDcKw / q.moduleKw)}`;
+};
+
+interface Differences {
+  readonly capital: number | null;
+  readonly presentCost: number | null;
+}
+
+const moneyWords = (q: SameEnergyQuestion, { capital, presentCost }: Differences): string => {
+  const currency = q.currency === null ? '' : ` ${q.currency}`;
+  const moreOrLess = (x: number) => `${inWords(Math.abs(x))}${currency} ${x < 0 ? 'less' : 'more'}`;
+  if (capital === null) return '; the difference in capital is not known';
+  const paid = capital === 0 ? 'the same capital as' : `${moreOrLess(capital)} capital than`;
+  const { realRate = null, years = null } = q.finance ?? {};
+  const overLife =
+    presentCost === null || realRate === null || years === null
+      ? ''
+      : ` and ${presentCost === 0 ? 'the same' : moreOrLess(presentCost)} over ${sizeWords(years)} years ` +
+        `(present cost at ${sizeWords(realRate * 100)} %)`;
+  return `, for ${paid} the tracker${overLife}`;
+};
+
+const sentence = (
+  q: SameEnergyQuestion,
+  dcKw: number,
+  modules: number | null,
+  differences: Differences,
+): string => {
   const inverter =
     q.inverterKw === null
-      ? 'no inverter is given, so its ceiling was not counted'
-      : `under the same ${inWords(q.inverterKw)} kW inverter`;
-  const money =
-    difference === null
-      ? 'the difference in capital is not known'
-      : difference === 0
-        ? 'the same capital'
-        : `${inWords(Math.abs(difference))} ${q.currency ?? ''}`.trim() +
-          (difference < 0 ? ' less capital' : ' more capital');
-  return `${size} deliver the ${inWords(q.targetKwh)} kWh a year of ${q.tracker.label} (${inverter}): ${money}.`;
+      ? ' (no inverter is given, so its ceiling was not counted)'
+      : ` under the same ${sizeWords(q.inverterKw)} kW inverter`;
+  return (
+    `${arrayWords(q, dcKw, modules)} deliver the ${inWords(q.targetKwh)} kWh a year of ${q.tracker.label}` +
+    `${inverter}${moneyWords(q, differences)}.`
+  );
 };
+
+/** Capital, upkeep and renewals of one mount over the life; null where a part, the rate or the years are not known. */
+const presentCostOf = (cost: CostSpec | null | undefined, dcKw: number, q: SameEnergyQuestion) => {
+  const { realRate = null, years = null } = q.finance ?? {};
+  const { capital, upkeepPerYear, renewals } = mountCost(cost ?? null, dcKw);
+  return capital === null || upkeepPerYear === null || realRate === null || years === null
+    ? null
+    : presentCost({ capital, upkeepPerYear, renewals }, realRate, years);
+};
+
+const less = (a: number | null, b: number | null): number | null => (a === null || b === null ? null : a - b);
 
 /**
  * The array on the reference mount that delivers as much in its first year as one tracker, under the same
  * inverter: the fewest whole modules, or the exact rating where no module is given. Searched up to 2.5 DC per
  * AC; beyond that it is not reachable and the most it can give is returned. Capital is the reference's cost
- * per kW and fixed cost at the new size.
+ * per kW and fixed cost at the new size; so is upkeep in the present cost over the life. Renewals are held.
  */
 export const sameEnergy = (q: SameEnergyQuestion): SameEnergy => {
   const limitKw = searchLimit(q);
@@ -87,6 +134,7 @@ export const sameEnergy = (q: SameEnergyQuestion): SameEnergy => {
       energy_kwh: most,
       capital: null,
       capital_difference: null,
+      present_cost_difference: null,
       text:
         `not reachable under this inverter: ${q.reference.label} gives at most ${inWords(most)} kWh of the ` +
         `${inWords(q.targetKwh)} of ${q.tracker.label}, with ${inWords(limitKw)} kW on it.`,
@@ -102,14 +150,21 @@ export const sameEnergy = (q: SameEnergyQuestion): SameEnergy => {
       ? bisect((kw) => q.energyOfDcKw(kw) - q.targetKwh, limitKw * 1e-6, limitKw, limitKw * 1e-7)
       : modules * moduleKw;
   const { capital } = mountCost(q.reference.cost, dcKw);
-  const difference = capital === null || q.tracker.capital === null ? null : capital - q.tracker.capital;
+  const differences = {
+    capital: less(capital, q.tracker.capital),
+    presentCost: less(
+      presentCostOf(q.reference.cost, dcKw, q),
+      presentCostOf(q.tracker.cost, q.startDcKw, q),
+    ),
+  };
   return {
     ...known,
     ...sized(dcKw, modules),
     reachable: true,
     energy_kwh: q.energyOfDcKw(dcKw),
     capital,
-    capital_difference: difference,
-    text: sentence(q, dcKw, modules, difference),
+    capital_difference: differences.capital,
+    present_cost_difference: differences.presentCost,
+    text: sentence(q, dcKw, modules, differences),
   };
 };

@@ -6,8 +6,13 @@ const UNPRINTABLE = /[\p{Cc}\p{Zl}\p{Zp}\u061c\u200b\u200e\u200f\u202a-\u202e\u2
 /** One line: every run of control characters and blanks becomes one space, ends trimmed. */
 export const oneLine = (text: string): string => text.replace(UNPRINTABLE, ' ').replace(/\s+/gu, ' ').trim();
 
-/** A sentence begins with a capital where it begins with a plain letter. */
-export const capitalised = (text: string): string => text.replace(/^[a-z]/, (letter) => letter.toUpperCase());
+/** A sentence begins with a capital where it begins with a plain word, not with one of `names`, which stand as they are. */
+export const capitalised = (text: string, names: readonly string[] = []): string =>
+  names.some(
+    (name) => name !== '' && text.startsWith(name) && !/^[\p{L}\p{N}_-]/u.test(text.slice(name.length)),
+  )
+    ? text
+    : text.replace(/^[a-z]/, (letter) => letter.toUpperCase());
 
 /** `a`, `a and b`, `a, b and c`. */
 export const listed = (items: readonly string[]): string =>

@@ -1,4 +1,4 @@
-import type { Comparison } from '../shared/index.ts';
+import { type Comparison, darkMonthsWords, isNothing, monthInFull } from '../shared/index.ts';
 import { columnsOf, hanging, shorten, wrap } from './columns.ts';
 import { costLack } from './cost-columns.ts';
 import { downtimeSentences } from './downtime-words.ts';
@@ -9,7 +9,7 @@ import { tableLines, tableNotes } from './screen-table.ts';
 import { stowSentences } from './stow-words.ts';
 import { shadingLine } from './survey-words.ts';
 import { showsWind, windDeferral } from './wind-words.ts';
-import { monthInFull, mountById, nameOf, ratingWords, yearWords } from './words.ts';
+import { mountById, mountNames, nameOf, ratingWords, yearWords } from './words.ts';
 
 export interface ScreenOptions {
   /** Where the memo lies, as the user would type it; null or absent: no report was written. */
@@ -70,12 +70,14 @@ const answerLines = (c: Comparison, width: number): string[] =>
     c.advice.headline,
     ...gainSentences(c).slice(0, MOST_GAINS),
     ...c.advice.switch_points.slice(0, MOST_SWITCH_POINTS),
-  ].flatMap((text) => wrap(capitalised(oneLine(text)), width));
+  ].flatMap((text) => wrap(capitalised(oneLine(text), mountNames(c)), width));
 
 /** What the month that is worst for the chosen mount (else the reference) could give at its best fixed tilt. */
 const monthLine = (c: Comparison, width: number): string[] => {
   const { month } = mountById(c, c.advice.choice ?? c.reference_id).worst_month;
   const plane = c.tilted_for_month.find((entry) => entry.month === month);
+  const dark = darkMonthsWords(c);
+  if (dark !== null && (!plane || isNothing(plane.kwh_per_kw_day))) return hanging('', dark, 2, width);
   if (!plane) return [];
   const text =
     `a fixed plane tilted for ${monthInFull(month)} (${formatNumber(plane.tilt_deg)}°) would give ` +

@@ -9,6 +9,7 @@ const mountRecord = (c: Comparison, rates: readonly string[], m: MountResult): R
   reference_id: c.reference_id,
   tilt_deg: m.tilt_deg,
   azimuth_deg: m.azimuth_deg,
+  pointing: m.pointing,
   tilt_basis: m.tilt_basis,
   tilt_error_deg: m.tilt_error_deg,
   azimuth_error_deg: m.azimuth_error_deg,

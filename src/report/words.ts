@@ -30,22 +30,6 @@ export const CONFIDENCE_WORDS: Record<NonNullable<AdviceResult['confidence']>, s
   too_close: 'too close to call',
 };
 
-export const FULL_MONTH: Readonly<Record<string, string>> = {
-  Jan: 'January',
-  Feb: 'February',
-  Mar: 'March',
-  Apr: 'April',
-  May: 'May',
-  Jun: 'June',
-  Jul: 'July',
-  Aug: 'August',
-  Sep: 'September',
-  Oct: 'October',
-  Nov: 'November',
-  Dec: 'December',
-};
-export const monthInFull = (month: string): string => FULL_MONTH[month] ?? month;
-
 /** What the weather file is, in words. */
 export const yearWords = (format: string): string => (format === 'table' ? 'hourly year' : 'typical year');
 
@@ -65,6 +49,10 @@ export const nameOf = (c: Comparison, mount: MountResult): string => {
   const shared = c.mounts.filter((other) => oneLine(other.label) === label).length > 1;
   return label !== mount.id && (shared || label === '') ? `${label} (${mount.id})`.trim() : label;
 };
+
+/** Every way in which a sentence may call a mount. */
+export const mountNames = (c: Comparison): string[] =>
+  c.mounts.flatMap((mount) => [nameOf(c, mount), oneLine(mount.label), mount.id]);
 
 /** `34° tilt, facing 186° (south)`; null for trackers. */
 export const facingWords = (mount: MountResult): string | null =>

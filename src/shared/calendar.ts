@@ -15,6 +15,25 @@ export const MONTH_NAMES = [
   'Nov',
   'Dec',
 ] as const;
+const MONTHS_IN_FULL = [
+  'January',
+  'February',
+  'March',
+  'April',
+  'May',
+  'June',
+  'July',
+  'August',
+  'September',
+  'October',
+  'November',
+  'December',
+] as const;
+
+/** `December` for `Dec`; any other text as it is. */
+export const monthInFull = (month: string): string =>
+  MONTHS_IN_FULL[(MONTH_NAMES as readonly string[]).indexOf(month)] ?? month;
+
 export const MONTH_DAYS = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31] as const;
 
 /** Day of the year (0-based) on which each month begins; the thirteenth entry is 365. */

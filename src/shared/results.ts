@@ -93,6 +93,8 @@ export interface MountResult {
   tilt_deg: number | null;
   /** Null for all trackers. */
   azimuth_deg: number | null;
+  /** Where it points, in words: `34.2° tilt, facing 186° (south)`, or the axis, its swing and what it does under a low sun. */
+  pointing: string;
   /** `given`, or `best: unshaded optimum of the orientation map`; null for trackers without a held tilt. */
   tilt_basis: string | null;
   /** TOF: irradiation over the map's maximum, 0..1; null for trackers. */
@@ -248,6 +250,8 @@ export interface SameEnergy {
   capital: number | null;
   /** Its capital less the tracker's; negative: the fixed array is cheaper. */
   capital_difference: number | null;
+  /** Capital, upkeep and renewals over the life, discounted, less the tracker's; null where any of them is not known. */
+  present_cost_difference: number | null;
   text: string;
 }
 

@@ -1,15 +1,11 @@
 import { breakEven, costOfEnergy, mountCost } from '../cost/index.ts';
 import { type Delivered, lightBySource } from '../energy/index.ts';
-import type { Study } from '../inputs/index.ts';
-import {
-  crossAxisTiltOf,
-  isTracker,
-  type MountGeometry,
-  type ResolvedGeometry,
-  type SingleAxis,
-} from '../mounts/index.ts';
+import type { Study, StudyMount } from '../inputs/index.ts';
+import { crossAxisTiltOf, isTracker, type ResolvedGeometry, type SingleAxis } from '../mounts/index.ts';
 import {
   type ArraySummary,
+  cosDeg,
+  DEG,
   MONTH_DAYS,
   MONTH_NAMES,
   type MountResult,
@@ -24,6 +20,7 @@ import {
 } from '../wind/index.ts';
 import { type MountRun, shadingOf } from './mount-run.ts';
 import { factorBand, programmeLimits } from './orientation.ts';
+import { pointingWords } from './pointing-words.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
 import { slopeLimits } from './slope-limits.ts';
 import { parkedWords, stuckWords } from './still-planes.ts';
@@ -75,6 +72,12 @@ export const edgeGeometry = ({ mount, geometry }: MountRun, study: Study): EdgeG
     roofHeightM: study.site.roofHeightM,
   };
 };
+
+/** How far the reading error of a rack's tilt may move its upper edge, m: the slant's rise against the tilt. */
+const edgeErrorM = ({ mount, geometry, survey }: MountRun): number =>
+  geometry.kind === 'fixed-tilt' && mount.lengths.slantM !== null && survey?.tiltErrorDeg
+    ? mount.lengths.slantM * cosDeg(geometry.tiltDeg) * survey.tiltErrorDeg * DEG
+    : 0;
 
 const landM2 = ({ geometry, gcr }: MountRun, array: ArraySummary): number | null =>
   geometry.kind === 'roof-plane' || gcr === null || array.modules === null || array.module_area_m2 === null
@@ -130,14 +133,14 @@ export const orientationOf = (run: MountRun, { study, sun, sky, map }: Setting):
   };
 };
 
-const limitsOfProgramme = (o: Orientation, { study }: Setting): MountResult['limits'] =>
+const limitsOfProgramme = (o: Orientation, { study, survey }: Setting): MountResult['limits'] =>
   o.orientation_factor === null
     ? []
     : programmeLimits(
         study.programme,
         o.orientation_factor,
         o.orientation_factor_band,
-        o.shading_worst_point,
+        survey.skyline && o.shading_worst_point,
       );
 
 /** One mount of the comparison, key by key of the contract. */
@@ -160,7 +163,7 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
   const even = tracker && run !== reference ? breakEven(costed(run), costed(reference), study.finance) : null;
   const referenceCapital = mountCost(reference.mount.cost, array.dc_kw).capitalPerKw;
   const orientation = orientationOf(run, setting);
-  const screened = screenWind(edgeGeometry(run, study), study.wind);
+  const screened = screenWind(edgeGeometry(run, study), study.wind, edgeErrorM(run));
   const weakest = delivered.stages.reduce((a, b) => (b.efficiency < a.efficiency ? b : a));
   return {
     id: mount.id,
@@ -168,7 +171,8 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
     label: mount.label,
     tilt_deg: heldTiltDeg(geometry),
     azimuth_deg: 'azimuthDeg' in geometry ? geometry.azimuthDeg : null,
-    tilt_basis: tiltBasis(mount.geometry),
+    tilt_basis: tiltBasis(mount),
+    pointing: pointingWords(geometry),
     ...orientation,
     gcr: run.gcr,
     rows: rowsInWords(run),
@@ -222,7 +226,7 @@ const heldTiltDeg = (geometry: ResolvedGeometry): number | null => {
 };
 
 /** Whose angles a plane has; null for trackers without a held tilt. */
-const tiltBasis = (asked: MountGeometry): string | null => {
+const tiltBasis = ({ geometry: asked, readings }: StudyMount): string | null => {
   if (asked.kind === 'single-axis' || asked.kind === 'dual-axis') return null;
   if (asked.kind === 'turntable')
     return asked.planeTiltDeg === 'best' ? 'best: most unshaded light of the year, turning' : 'given';
@@ -231,7 +235,7 @@ const tiltBasis = (asked: MountGeometry): string | null => {
   if (tilt && azimuth) return optimum;
   if (tilt) return `${optimum} for the azimuth given`;
   if (azimuth) return `${optimum} for the tilt given`;
-  return asked.azimuthDeg === 'surveyed' ? 'read on site' : 'given';
+  return readings ? 'read on site' : 'given';
 };
 
 /** Where each stage's figure comes from. */

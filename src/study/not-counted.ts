@@ -251,11 +251,12 @@ const heatLine = ({ year }: Counted): NotCounted[] =>
 
 /** What the study leaves blank and trackworth does not count, each with what one plausible value would do. */
 export const notCounted = (c: Counted): NotCounted[] => [
+  // What moves one mount against another comes first; what takes alike from all comes last.
   ...driveLines(c),
-  ...inverterLine(c),
-  ...lossLines(c),
-  ...heatLine(c),
   ...moneyLines(c),
+  ...inverterLine(c),
   ...skylineLine(c),
   ...snowLine(c),
+  ...heatLine(c),
+  ...lossLines(c),
 ];

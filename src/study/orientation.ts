@@ -60,19 +60,33 @@ const atLeast = (
   };
 };
 
-/** A programme's minimum TOF and TSRF for one fixed plane; TSRF at the worst point of the array. */
+/** Without a skyline nobody has measured the shade: TSRF can then be ruled out by the angles alone, never confirmed. */
+const withoutSkyline = (tsrf: Limit): Limit =>
+  tsrf.status === 'broken'
+    ? tsrf
+    : {
+        ...tsrf,
+        status: 'not_checked',
+        detail: `not checked: site.skyline is blank; without any shade ${tsrf.detail}`,
+      };
+
+/**
+ * A programme's minimum TOF and TSRF for one fixed plane; TSRF at the worst point of the array.
+ * @param shadingAtWorst null where the study gives no skyline
+ */
 export const programmeLimits = (
   programme: { readonly minimumTof: number | null; readonly minimumTsrf: number | null },
   factor: number,
   band: { low: number; high: number } | null,
-  shadingAtWorst: number,
+  shadingAtWorst: number | null,
 ): Limit[] => {
-  const open = 1 - shadingAtWorst;
+  const open = 1 - (shadingAtWorst ?? 0);
   const limits: Limit[] = [];
   if (programme.minimumTof !== null) limits.push(atLeast('TOF', factor, band, programme.minimumTof));
   if (programme.minimumTsrf !== null) {
     const shaded = band && { low: band.low * open, high: band.high * open };
-    limits.push(atLeast('TSRF', factor * open, shaded, programme.minimumTsrf));
+    const tsrf = atLeast('TSRF', factor * open, shaded, programme.minimumTsrf);
+    limits.push(shadingAtWorst === null ? withoutSkyline(tsrf) : tsrf);
   }
   return limits;
 };

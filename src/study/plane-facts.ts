@@ -83,7 +83,12 @@ export const planeFacts = (
     readings: o.readings,
     survey_steps: o.survey_steps,
     declinations: survey.declinations,
-    limits: programmeLimits(study.programme, factor, o.orientation_factor_band, o.shading_worst_point),
+    limits: programmeLimits(
+      study.programme,
+      factor,
+      o.orientation_factor_band,
+      survey.skyline && o.shading_worst_point,
+    ),
     findings: [...setting.ready.found.findings, ...survey.findings],
   };
 };

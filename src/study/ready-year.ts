@@ -13,10 +13,13 @@ export interface ReadyYear {
   readonly globalOnly: boolean;
 }
 
+/** What `accept_clock` stands by: the file's times as they are, at the place as it is. */
+const ABOUT_CLOCK = ['clock-shift', 'day-too-long'];
+
 /** The user has looked at the clock and stands by the file: the finding stays, but no longer blocks. */
 const withClockAccepted = (findings: readonly Finding[]): Finding[] =>
   findings.map((f) =>
-    f.code === 'clock-shift' && f.severity === 'block'
+    ABOUT_CLOCK.includes(f.code) && f.severity === 'block'
       ? {
           ...f,
           severity: 'warning',

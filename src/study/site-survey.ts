@@ -103,7 +103,10 @@ export const surveySite = async (
   return {
     mounts: new Map(mounts.map(([id, { result }]) => [id, result])),
     skyline: skylines.length === 0 ? null : surveySkylines(skylines.map(({ result }) => result)),
-    declinations: [...new Set(all.flatMap(({ north }) => (north ? [north.words] : [])))],
+    declinations: eachWithItsReadings([
+      ...mounts.map(([id, { north }]) => ({ north, reading: `the bearing of ${id}` })),
+      ...skylines.map(({ north, result }) => ({ north, reading: `the skyline at ${result.name}` })),
+    ]),
     findings: eachOnce(all.flatMap(({ north, findings }) => [...(north?.findings ?? []), ...findings])),
   };
 };
@@ -119,6 +122,16 @@ const placed = (problem: Problem, field: string, studyFile: string | undefined):
   problem.file === undefined
     ? { ...problem, file: studyFile, field: problem.field ? `${field}.${problem.field}` : field }
     : problem;
+
+/** Each declination once, with the readings that it was applied to. */
+const eachWithItsReadings = (
+  used: readonly { readonly north: NorthFound | null; readonly reading: string }[],
+): string[] => {
+  const readings = new Map<string, string[]>();
+  for (const { north, reading } of used)
+    if (north) readings.set(north.words, [...(readings.get(north.words) ?? []), reading]);
+  return [...readings].map(([words, applied]) => `${words}, applied to ${applied.join(' and ')}`);
+};
 
 const eachOnce = (findings: readonly Finding[]): Finding[] => [
   ...new Map(findings.map((finding) => [finding.text, finding])).values(),

@@ -13,10 +13,11 @@ interface Row {
 
 /**
  * A skyline from the text of a CSV file with the header `bearing,elevation` (either order; commas, semicolons or tabs),
- * in degrees. Bearings are as the file has them, magnetic or true. Throws every problem of the file with its line.
+ * in degrees; beside semicolons or tabs numbers may have a decimal comma. Bearings are as the file has them, magnetic or true. Throws every problem of the file with its line.
  */
 export const readSkylineFile = async (file: string, text: string): Promise<SkylinePoint[]> => {
-  const [header, ...body] = await rowsOf(file, text);
+  const delimiter = delimiterOf(text);
+  const [header, ...body] = await rowsOf(file, text, delimiter);
   const names = header.cells.map((cell) => cell.toLowerCase());
   const [bearing, elevation] = COLUMNS.map((name) => names.indexOf(name));
   if (bearing < 0 || elevation < 0 || names.length !== COLUMNS.length)
@@ -31,10 +32,14 @@ export const readSkylineFile = async (file: string, text: string): Promise<Skyli
       },
     ]);
   const problems: Problem[] = [];
+  const decimalComma = hasDecimalComma(body, delimiter);
+  const plain = (cell: string): string => (decimalComma ? cell.replace(',', '.') : cell);
   const read = body.map(({ line, cells }) => {
     if (cells.length !== COLUMNS.length) problems.push(wrongWidth(file, line, cells.length));
     const [azimuthDeg, elevationDeg] = [bearing, elevation].map((column, i) =>
-      cells.length === COLUMNS.length ? number(file, line, COLUMNS[i], cells[column], problems) : Number.NaN,
+      cells.length === COLUMNS.length
+        ? number(file, line, COLUMNS[i], plain(cells[column]), problems)
+        : Number.NaN,
     );
     return { line, azimuthDeg, elevationDeg };
   });
@@ -51,13 +56,25 @@ export const readSkylineFile = async (file: string, text: string): Promise<Skyli
   return points;
 };
 
-const rowsOf = async (file: string, text: string): Promise<Row[]> => {
+/** The header tells: only a semicolon or a tab that divides its two names leaves the comma to the numbers. */
+const delimiterOf = (text: string): string => {
+  const header = text.split(/\r\n|\n|\r/).find((line) => line.replace('\uFEFF', '').trim() !== '') ?? '';
+  return [';', '\t'].find((delimiter) => header.includes(delimiter)) ?? ',';
+};
+
+/** A file that has 1.5 as well fails at its first cell with a comma. */
+const hasDecimalComma = (body: readonly Row[], delimiter: string): boolean =>
+  delimiter !== ',' &&
+  !body.some(({ cells }) => cells.some((cell) => cell.includes('.'))) &&
+  body.some(({ cells }) => cells.some((cell) => cell.includes(',')));
+
+const rowsOf = async (file: string, text: string, delimiter: string): Promise<Row[]> => {
   const { parse, CsvError } = await import('csv-parse/sync');
   const rows: Row[] = [];
   try {
     parse(text, {
       bom: true,
-      delimiter: [',', ';', '\t'],
+      delimiter,
       relax_column_count: true,
       skip_empty_lines: true,
       trim: true,
@@ -98,7 +115,7 @@ const wrongWidth = (file: string, line: number, found: number): Problem => ({
   line,
   expected: '2 columns',
   found: String(found),
-  fix: 'Write numbers with a decimal point, one point a line.',
+  fix: 'Write one point a line, divided as the header is; numbers with a decimal comma need semicolons between them.',
 });
 
 /** Reports what is no number and gives NaN for it. */

@@ -1,6 +1,7 @@
 import type { Finding, HourlyYear } from '../shared/index.ts';
 import { BLOCKING_SHIFT_MIN, type Clock, FAR_MIN } from './clock.ts';
 import { EXCESS_SHARE } from './clock-estimates.ts';
+import { labelThatShifts } from './labels.ts';
 
 /** Clocks are off by whole or half hours as a rule: within so many minutes of one, that one is meant. */
 const ROUND_TO_MIN = 30;
@@ -24,14 +25,14 @@ const percent = (share: number): string => `${(share * 100).toFixed(1)} %`;
 /** What the clock's evidence comes to: a blocking shift, a fit, or that it cannot be told. */
 export const clockFindings = (clock: Clock, year: HourlyYear, addedMin: number): Finding[] => {
   const { asFiled, seasonsApartMin, lightAheadMin, timeShiftMin } = clock;
-  const main = seasonsApartMin === null ? mainFinding(clock, addedMin) : seasonFinding(seasonsApartMin);
+  const main = seasonsApartMin === null ? mainFinding(clock, year, addedMin) : seasonFinding(seasonsApartMin);
   const findings = [main];
-  if (timeShiftMin === null && Math.min(asFiled.morning, asFiled.evening) > EXCESS_SHARE)
+  if (timeShiftMin === null && seasonsApartMin === null && lightAtBothEnds(clock))
     findings.push({
       code: 'day-too-long',
-      severity: 'warning',
+      severity: 'block',
       text: `Light comes before sunrise and stays after sunset (${percent(asFiled.morning + asFiled.evening)} of the year's light is more than a clear sky gives at that hour), and no other clock mends both: the year does not belong to this place.`,
-      fix: 'Check latitude, hemisphere and the order of the months.',
+      fix: `Check the place, ${placeInWords(year)}, and correct it in the study: site: { latitude: ..., longitude: ..., utc_offset: ... } (north and east are positive); or write weather: { accept_clock: true } to stand by the file as it is.`,
     });
   const lean = lightAheadMin - (timeShiftMin ?? 0);
   if (Math.abs(lean) >= LEAN_MIN)
@@ -51,7 +52,13 @@ export const clockFindings = (clock: Clock, year: HourlyYear, addedMin: number):
   return findings;
 };
 
-const mainFinding = (clock: Clock, addedMin: number): Finding => {
+const lightAtBothEnds = ({ asFiled }: Clock): boolean =>
+  Math.min(asFiled.morning, asFiled.evening) > EXCESS_SHARE;
+
+const placeInWords = ({ place }: HourlyYear): string =>
+  `latitude ${place.latitudeDeg.toFixed(2)}, longitude ${place.longitudeDeg.toFixed(2)}, UTC${place.utcOffsetH < 0 ? '' : '+'}${place.utcOffsetH}`;
+
+const mainFinding = (clock: Clock, year: HourlyYear, addedMin: number): Finding => {
   const { timeShiftMin } = clock;
   if (timeShiftMin === null)
     return {
@@ -64,17 +71,30 @@ const mainFinding = (clock: Clock, addedMin: number): Finding => {
     return {
       code: 'clock-fits',
       severity: 'note',
-      text: `The clock fits the sun ${timeShiftMin === 0 ? 'to the minute' : `within ${minutes(timeShiftMin)}`}.`,
+      text: `${addedMin === 0 ? 'The' : `With the ${minutes(addedMin)} that the study ${addedMin > 0 ? 'adds' : 'takes off'} the`} clock fits the sun ${timeShiftMin === 0 ? 'to the minute' : `within ${minutes(timeShiftMin)}`}.`,
       fix: '',
     };
-  const total = addedMin + likelyShiftMin(timeShiftMin);
+  const likely = likelyShiftMin(timeShiftMin);
+  const total = addedMin + likely;
   const placeFirst = Math.abs(timeShiftMin) > FAR_MIN ? 'Check longitude and offset from UTC first. ' : '';
   return {
     code: 'clock-shift',
     severity: 'block',
     text: `The file's clock is about ${minutes(timeShiftMin)} ${lateOrEarly(timeShiftMin)} the sun, which flatters trackers: ${evidence(clock, timeShiftMin).join('; ')}.`,
-    fix: `${placeFirst}Write weather: { add_minutes: ${total} } in the study, or weather: { accept_clock: true } to stand by the file's times.`,
+    fix: `${placeFirst}Write weather: { add_minutes: ${total} } in the study${otherLabel(year, likely, addedMin)}, or weather: { accept_clock: true } to stand by the file's times.`,
   };
+};
+
+/**
+ * Where another label would move the hours as much, that may be the cause. The formats with a manual say themselves what
+ * their times stand for: only a table's label, or one that the study has set against the manual, is open to doubt.
+ */
+const otherLabel = (year: HourlyYear, shiftMin: number, addedMin: number): string => {
+  const open = year.format === 'table' || year.label !== 'end';
+  const label = open && addedMin === 0 ? labelThatShifts(year.label, shiftMin) : null;
+  return label === null
+    ? ''
+    : ` (or weather: { label: ${label} }, if the printed times mark the ${label} of the hour)`;
 };
 
 const evidence = (clock: Clock, shiftMin: number): string[] => {

@@ -26,6 +26,8 @@ export interface WeatherFindings {
  * All limits here are trackworth's choice.
  */
 const BREACH_SHARE = 0.03;
+/** So many measured hours of more light than the sun sends may be glitches; public typical years have none. */
+const BEYOND_SUN_HOURS = 5;
 const NIGHT_SHARE = 0.002;
 /** Public typical years close to 15 W/m2 rms or better. */
 const CLOSURE_LIMIT = { biasWm2: 10, rmsWm2: 30 };
@@ -57,7 +59,7 @@ export const weatherFindings = (
     ...closureFindings(closure),
     ...limitFindings(year, sun),
     ...nightFindings(night, annual.ghiKwhM2),
-    readFinding(year),
+    readFinding(year, addedMin),
     ...year.notes,
   ];
   return {
@@ -99,12 +101,15 @@ const nightFindings = ({ hours, kwhM2 }: { hours: number; kwhM2: number }, ghiKw
 
 const limitFindings = (year: HourlyYear, sun: SunHours): Finding[] => {
   const daylight = sun.sunlit.reduce((n, share) => n + (share > 0 ? 1 : 0), 0);
-  return breaches(year, sun).map(({ code, hours, what }) => ({
-    code,
-    severity: hours > BREACH_SHARE * daylight ? 'warning' : 'note',
-    text: `${hours} of ${daylight} hours of daylight have ${what}.`,
-    fix: hours > BREACH_SHARE * daylight ? 'Check units, columns and clock.' : '',
-  }));
+  return breaches(year, sun).map(({ code, hours, what, beyondSun }) => {
+    const grave = hours > (beyondSun ? BEYOND_SUN_HOURS : BREACH_SHARE * daylight);
+    return {
+      code,
+      severity: grave ? 'warning' : 'note',
+      text: `${hours} of ${daylight} hours of daylight have ${what}.`,
+      fix: grave ? 'Check units, columns and clock; the values are used as they are.' : '',
+    };
+  });
 };
 
 const closureFindings = (closure: Closure | null): Finding[] => {
@@ -145,9 +150,18 @@ const sumFindings = (annual: WeatherFindings['annual'], sun: SunHours): Finding[
   ];
 };
 
-const readFinding = (year: HourlyYear): Finding => ({
+const readFinding = (year: HourlyYear, addedMin: number): Finding => ({
   code: 'year-read',
   severity: 'note',
-  text: `${thousands(HOURS)} hours in ${year.format} format${year.station ? `, ${year.station}` : ''}; printed times stand for the ${year.label} of the hour${year.offsetMin === 0 ? '' : `, hours begin ${year.offsetMin} minutes past the full hour`}.`,
+  text: `${thousands(HOURS)} hours in ${year.format} format${year.station ? `, ${year.station}` : ''}; printed times stand for the ${year.label} of the hour${beginningInWords(year.offsetMin - addedMin, addedMin)}.`,
   fix: '',
 });
+
+/** Whole hours of the file's own offset follow from the label and need no words; what the study adds does. */
+const beginningInWords = (filedMin: number, addedMin: number): string => {
+  const pastMin = ((filedMin % 60) + 60) % 60;
+  const past = pastMin === 0 ? '' : `, hours begin ${pastMin} minutes past the full hour`;
+  if (addedMin === 0) return past;
+  const count = `${Math.abs(addedMin)} ${Math.abs(addedMin) === 1 ? 'minute' : 'minutes'}`;
+  return `${past}; as the study has it, hours begin ${count} ${addedMin > 0 ? 'later' : 'earlier'} than printed`;
+};

@@ -6,7 +6,7 @@ export interface TableColumn {
 }
 
 export interface TableColumns {
-  /** ISO 8601 local time without a zone (`2021-01-01 00:00`, `2021-01-01T01:00`). */
+  /** Local time without a zone: ISO 8601 (`2021-01-01 00:00`, `2021-01-01T01:00`), `31.01.2021 01:00`, or with slashes. */
   readonly time: TableColumn;
   readonly ghi: TableColumn | null;
   readonly dni: TableColumn | null;

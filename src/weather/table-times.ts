@@ -1,18 +1,21 @@
-import type { HourLabel } from '../shared/index.ts';
+import type { Finding, HourLabel } from '../shared/index.ts';
 import type { Cells } from './cells.ts';
 import { dayOfYear, isLeapDay } from './hour-of-year.ts';
 import { MINUTES_BEFORE_LABEL } from './labels.ts';
 import type { Problems } from './problems.ts';
 import { LEAP_HOUR, UNKNOWN_HOUR } from './raw-year.ts';
+import { type PrintedTime, printedTimes } from './table-dates.ts';
 
 const YEAR_MIN = 365 * 24 * 60;
-const ISO = /^\s*(\d{4})[-/](\d{1,2})[-/](\d{1,2})[T ]+(\d{1,2}):(\d{2})(?::(\d{2})(?:[.,]0+)?)?\s*$/;
 const UNKNOWN = Number.NaN;
+/** No day is the 0th of a month 0, so this is refused like any other date that does not exist. */
+const NO_TIME: PrintedTime = [0, 0, 0, 0, 0, 0];
 
 export interface TableTimes {
   readonly hour: Int32Array;
   readonly year: Int16Array;
   readonly offsetMin: number;
+  readonly notes: readonly Finding[];
 }
 
 /**
@@ -23,10 +26,11 @@ export const tableTimes = (cells: Cells, name: string, label: HourLabel, problem
   const year = new Int16Array(cells.count);
   const leap = new Uint8Array(cells.count);
   const begins = new Float64Array(cells.count).fill(UNKNOWN);
+  const { read, notes } = printedTimes(cells, name, problems);
   for (let row = 0; row < cells.count; row++) {
     if (cells.faulty[row]) continue;
-    const time = ISO.exec(cells.cell(0, row));
-    const [y, month, day, h, minute, second] = (time ?? []).slice(1).map((part) => Number(part ?? 0));
+    const time = read(cells.cell(0, row));
+    const [y, month, day, h, minute, second] = time ?? NO_TIME;
     const dayIndex = time ? dayOfYear(month, day) : -1;
     leap[row] = time && isLeapDay(month, day) ? 1 : 0;
     if (leap[row]) continue;
@@ -37,7 +41,7 @@ export const tableTimes = (cells: Cells, name: string, label: HourLabel, problem
     begins[row] = dayIndex * 1440 + h * 60 + minute - MINUTES_BEFORE_LABEL[label];
     year[row] = y;
   }
-  return { year, ...wholeHours(begins, leap, cells, problems) };
+  return { year, notes, ...wholeHours(begins, leap, cells, problems) };
 };
 
 /** Splits beginnings in minutes into hours of the year and one offset. The year is a ring. */
@@ -77,7 +81,7 @@ const badTime = (cells: Cells, row: number, name: string, problems: Problems): v
     code: 'bad-time',
     line: cells.line[row],
     field: name,
-    expected: 'local standard time without a zone, as 2021-01-31 13:00',
+    expected: 'local standard time without a zone, as 2021-01-31 13:00, in one form all through',
     found: JSON.stringify(cells.cell(0, row).trim().slice(0, 40)),
     fix: 'Rewrite the time column; the offset from UTC goes to site.utc_offset.',
   });

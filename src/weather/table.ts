@@ -8,6 +8,7 @@ import { readNumbers } from './columns.ts';
 import type { Problems } from './problems.ts';
 import type { ColumnName, ReaderInput, Reading, WeatherReader } from './raw-year.ts';
 import type { TableColumns } from './spec.ts';
+import { looksLikeDate } from './table-dates.ts';
 import { checkNames, namedColumns, type TableLayout, tableLayout } from './table-layout.ts';
 import { tableTimes } from './table-times.ts';
 import { unitConverter } from './table-units.ts';
@@ -24,7 +25,7 @@ const readTable = async ({ lines, table, label: wantedLabel, problems }: ReaderI
   problems.throwIfAny();
   const cells = await bodyCells(lines, layout, columns, problems);
   const label = wantedLabel ?? 'end';
-  const { offsetMin, ...times } = tableTimes(cells, columns.time.name, label, problems);
+  const { offsetMin, notes: timeNotes, ...times } = tableTimes(cells, columns.time.name, label, problems);
   const names = namedColumns(columns);
   const decimalComma = hasDecimalComma(cells, names.length);
   const codes = { count: 0 };
@@ -51,7 +52,7 @@ const readTable = async ({ lines, table, label: wantedLabel, problems }: ReaderI
     label,
     offsetMin,
     begins: 'any hour',
-    notes: notesOn(codes.count, decimalComma),
+    notes: [...timeNotes, ...notesOn(codes.count, decimalComma)],
   };
 };
 
@@ -77,7 +78,7 @@ const tabbed = (lines: readonly string[], from: number, timeColumn: number): str
   lines.map((line, i) => {
     if (i < from) return line;
     const cells = line.trim().split(/\s+/);
-    if (/^\d{4}[-/]\d+[-/]\d+$/.test(cells[timeColumn] ?? '') && /^\d+:\d/.test(cells[timeColumn + 1] ?? ''))
+    if (looksLikeDate(cells[timeColumn] ?? '') && /^\d+:\d/.test(cells[timeColumn + 1] ?? ''))
       cells.splice(timeColumn, 2, `${cells[timeColumn]} ${cells[timeColumn + 1]}`);
     return cells.join('\t');
   });

@@ -4,10 +4,14 @@ import { checkLimits, type LimitResult } from './limits.ts';
 import type { WindSpec } from './spec.ts';
 import { velocityPressure } from './velocity-pressure.ts';
 
-/** Wind screening of one mount: where its highest edge is, the pressure there, and whether it keeps its limit. */
+/**
+ * Wind screening of one mount: where its highest edge is, the pressure there, and whether it keeps its limit.
+ * @param readingErrorM how far the edge may be out, either way, because an angle was read with an error
+ */
 export const screenWind = (
   geometry: EdgeGeometry,
   wind: WindSpec | null,
+  readingErrorM = 0,
 ): { wind: MountWind; limits: LimitResult[] } => {
   const edge = highestEdge(geometry);
   const designGustMs = wind?.designGustMs ?? null;
@@ -24,6 +28,6 @@ export const screenWind = (
       kz: pressure?.kz ?? null,
       missing: [...edge.missing],
     },
-    limits: checkLimits(geometry.arrangement, edge, wind?.limits ?? null),
+    limits: checkLimits(geometry.arrangement, edge, wind?.limits ?? null, readingErrorM),
   };
 };

@@ -46,7 +46,7 @@ test('lead and doubt are the difference in cost per kWh and half its range over 
   expect(lead.lead).toBeCloseTo(0.015, 12);
   expect(lead.doubt).toBeCloseTo(0.003, 12);
   expect(lead.why).toBe(
-    'the lead is 0.0150 USD per kWh, 5 times the doubt of 0.00300; GCR 0.45 against 0.40',
+    'the lead is 0.0150 USD per kWh, more than twice the doubt of sky models (0.00300); GCR 0.45 against 0.40',
   );
 });
 
@@ -68,7 +68,7 @@ test('reading errors of the angles widen the doubt in quadrature, and the why sa
   const read = leadOf(0.04);
   expect(read.doubt).toBeCloseTo(0.005, 12);
   expect(read.confidence).toBe('likely');
-  expect(read.why).toContain('1.6 times the doubt of 0.00500, reading errors of roof included');
+  expect(read.why).toContain('1.6 times the doubt of sky models and of the reading errors of roof (0.00500)');
 });
 
 test('a smaller lead over the same doubt is likely, then too close', () => {
@@ -77,7 +77,7 @@ test('a smaller lead over the same doubt is likely, then too close', () => {
   const close = advise(study([ground, tracker({ cost: [0.111, 0.115, 0.109] })])); // 0.002 under 0.003
   expect([close.choice, close.confidence]).toEqual(['ground', 'too_close']);
   expect(close.headline).toBe(
-    'TOO CLOSE TO CALL: ground and tracker. ground is ahead of tracker by 0.00200 USD per kWh, within the doubt of 0.00300',
+    'TOO CLOSE TO CALL: ground and tracker. ground is ahead of tracker by 0.00200 USD per kWh, within the doubt of sky models (0.00300)',
   );
 });
 
@@ -190,32 +190,19 @@ test('a tracker whose downtime is blank is never a clear choice, and still loses
   expect(loses.doubts).toContain('Downtime of tracker is blank and not counted, which flatters it.');
 });
 
-test('without a cost for every mount the ranking is by energy, says what is lacking, and is never clear', () => {
-  const input = study([ground, tracker({ cost: null, energy: 1900 })]);
+test('only where no mount has a cost is the ranking by energy, says what is lacking, and is never clear', () => {
+  const input = study([mount({ id: 'ground', cost: null }), tracker({ cost: null, energy: 1900 })]);
   expect(rankingBasis(input)).toEqual({
     objective: 'lowest cost per kWh',
     rankedBy: 'most kWh per kW',
-    lacking: 'the capital cost of tracker',
+    lacking: 'the capital cost of ground and tracker',
   });
   const result = advise(input);
   expect([result.choice, result.confidence]).toEqual(['tracker', 'likely']);
   expect(result.headline).toContain('on energy alone, costs not weighed');
   expect(result.leads[0]).toMatchObject({ unit: 'kWh per kW', lead: 300 });
-  expect(result.reasons.join('\n')).toContain('to weigh costs the study lacks the capital cost of tracker');
-});
-
-test('without a rate the ranking is by energy, names the key, and tells who is cheapest at each rate', () => {
-  const bare = { lcoe_per_kwh: null } as const;
-  const input = study(
-    [
-      mount({ id: 'ground', ...bare, lcoe_at_rates: { '4 %': 0.08, '7 %': 0.1 } }),
-      tracker({ ...bare, energy: 1900, lcoe_at_rates: { '4 %': 0.07, '7 %': 0.12 } }),
-    ],
-    { realRate: null },
-  );
-  expect(rankingBasis(input).lacking).toBe('finance.real_rate');
-  expect(advise(input).reasons).toContain(
-    'Without a rate, the lowest USD per kWh is that of tracker at 4 % (0.07000) and ground at 7 % (0.1000).',
+  expect(result.reasons.join('\n')).toContain(
+    'to weigh costs the study lacks the capital cost of ground and tracker',
   );
 });
 

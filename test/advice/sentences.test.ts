@@ -54,6 +54,7 @@ test('the same-energy result is quoted whole', () => {
     module_area_m2: null,
     capital: null,
     capital_difference: null,
+    present_cost_difference: null,
     text: '33 modules do it.',
   };
   expect(advise(study([ground, losing], { sameEnergy: [same] })).reasons).toContain(

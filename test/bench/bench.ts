@@ -11,10 +11,12 @@ import { fileURLToPath } from 'node:url';
 import { Bench } from 'tinybench';
 import { type ChainSpec, deliver, OPEN_RACK, planeViews } from '../../src/energy/index.ts';
 import {
+  axisTiltOnSlope,
   type Pointing,
   pointDualAxis,
   pointFixed,
   pointSingleAxis,
+  pointTurntable,
   type RowSpec,
 } from '../../src/mounts/index.ts';
 import type { HourlyYear } from '../../src/shared/index.ts';
@@ -47,6 +49,26 @@ const fiveMounts: Record<string, (s: SunHours) => Pointing> = {
   'lone mast': (s) => pointDualAxis(s, { kind: 'dual-axis', rows: null }),
 };
 const field = (s: SunHours) => pointDualAxis(s, { kind: 'dual-axis', rows: { gcr: 0.2, lowSun: 'shade' } });
+const rows: RowSpec = { gcr: 0.2, lowSun: 'shade' };
+const others: Record<string, (s: SunHours) => Pointing> = {
+  'sloping ground, backtracking': (s) =>
+    pointSingleAxis(s, {
+      kind: 'single-axis',
+      axisAzimuthDeg: 180,
+      axisTiltDeg: axisTiltOnSlope(8, 230, 180),
+      swingDeg: 60,
+      rows: { gcr: 0.4, lowSun: 'backtrack' },
+      ground: { slopeDeg: 8, fallsTowardDeg: 230 },
+    }),
+  'mast with limits, in a field': (s) =>
+    pointDualAxis(s, {
+      kind: 'dual-axis',
+      rows,
+      turns: { fromDeg: 90, toDeg: 270 },
+      elevation: { lowestDeg: 15, highestDeg: 80 },
+    }),
+  'turntable, alone': (s) => pointTurntable(s, { kind: 'turntable', planeTiltDeg: 50, rows: null }),
+};
 const chain: ChainSpec = {
   ambient: year,
   heatLoss: OPEN_RACK,
@@ -63,6 +85,7 @@ const mountYear = (point: (s: SunHours) => Pointing, s = sun, light = sky) =>
 const core = new Bench({ time: 800, warmupTime: 300 });
 core.add('sun', sunOfYear).add('sky, Perez', () => skyOverHours(sun, year, 0.2, 'perez'));
 for (const [name, point] of Object.entries(fiveMounts)) core.add(name, () => mountYear(point));
+for (const [name, point] of Object.entries(others)) core.add(name, () => mountYear(point));
 core
   .add('field of masts', () => mountYear(field))
   .add('sun, sky and five mounts', () => {

@@ -96,6 +96,7 @@ export const inventedMount = (m: InventedMount): MountResult => {
     label: m.label ?? m.id,
     tilt_deg: tracker ? null : (m.tilt ?? 34),
     azimuth_deg: tracker ? null : (m.azimuth ?? 186),
+    pointing: tracker ? 'axis level, north-south' : 'as given',
     tilt_basis: tracker ? null : 'given',
     orientation_factor: tracker ? null : (m.tof ?? light / PEAK),
     ...inventedSurvey(m, tracker ? null : (m.tof ?? light / PEAK), light > 0 ? season : null),

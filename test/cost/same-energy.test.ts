@@ -32,11 +32,32 @@ test('whole modules are rounded up to the first that reaches the target', () => 
   expect(found.capital).toBeCloseTo(500 + 1900 * 18, 6);
   expect(found.capital_difference).toBeCloseTo(4700, 6);
   expect(found.text).toBe(
-    '45 modules on the ground rack in place of 30 deliver the 21 000 kWh a year of the tracker ' +
-      '(under the same 10 kW inverter): 4 700 USD more capital.',
+    '45 fixed modules (18 kW, 90 m2) on the ground rack in place of 30 deliver the 21 000 kWh a year of the tracker ' +
+      'under the same 10 kW inverter, for 4 700 USD more capital than the tracker.',
   );
   expect(sameEnergy(question({ targetKwh: 21_001 })).modules).toBe(46);
 });
+
+test('upkeep and renewals of both are discounted over the life where rate and years are known', () => {
+  const reference = { capitalPerKw: 1900, capital: 500, upkeepPerKw: 20, upkeep: null, renewals: [{ what: 'inverter', year: 1, cost: 1100 }] };
+  const cost = { capitalPerKw: 2500, capital: null, upkeepPerKw: null, upkeep: 1000, renewals: [{ what: 'drive', year: 2, cost: 2420 }] };
+  const tracker = { id: 'tracker', label: 'T2', capital: 30_000, cost };
+  const asked = { tracker, reference: { id: 'g', label: 'ground', cost: reference }, finance: { realRate: 0.1, years: 2 } };
+  const found = sameEnergy(question(asked));
+  // By hand at 10 % over 2 years, 1 a year is worth 1 / 1.1 + 1 / 1.21 = 1.735537.
+  // Fixed: 34 700 + 18 x 20 x 1.735537 + 1100 / 1.1 = 36 324.79; tracker: 30 000 + 1735.54 + 2420 / 1.21 = 33 735.54.
+  expect(found.present_cost_difference).toBeCloseTo(2589.26, 2);
+  expect(found.text).toContain('for 4 700 USD more capital than the tracker and 2 589 USD more over 2 years (present cost at 10 %).');
+  const dear = sameEnergy(question({ ...asked, tracker: { ...tracker, cost: { ...cost, upkeep: 5000 } } }));
+  // 4000 a year more for the tracker: 2589.26 - 4000 x 1.735537 = -4352.89.
+  expect(dear.present_cost_difference).toBeCloseTo(-4352.89, 2);
+  expect(dear.text).toContain('and 4 353 USD less over 2 years');
+  // A blank upkeep is not zero.
+  const blank = sameEnergy(question({ ...asked, tracker: { ...tracker, cost: { ...cost, upkeep: null } } }));
+  expect(blank.present_cost_difference).toBeNull();
+  expect(blank.text).toMatch(/more capital than the tracker\.$/);
+  expect(sameEnergy(question({ ...asked, finance: { realRate: null, years: 2 } })).present_cost_difference).toBeNull();
+}); // biome-ignore format: long rows
 
 test('without a module the rating is exact', () => {
   const found = sameEnergy(question({ moduleKw: null }));

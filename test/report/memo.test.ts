@@ -99,6 +99,24 @@ test('the printed light times the printed shares is the printed energy, within t
   expect(compared).toBe(4);
 });
 
+test('stages stand under three heads, each with what its own stages keep together', () => {
+  const table = tablesOf(memo(invented)).find(([head]) => head[0] === 'Share kept')!;
+  const row = (name: string) => table.find(([first]) => first === name)!;
+  // By hand for the ground rack: 0.975; 0.972 x 0.957 x 0.98 x 0.99; 0.985 x 0.965 x 0.998.
+  expect(row('*Before the glass, together*')[1]).toBe('*97.50 %*');
+  expect(row('*In the modules, together*')[1]).toBe('*90.25 %*');
+  expect(row('*On the way to the meter, together*')[1]).toBe('*94.86 %*');
+  const places = ['*Before the glass, together*', 'rows', '*In the modules, together*', 'heat', '*On the way to the meter, together*', 'cables'].map((name) => table.indexOf(row(name))); // biome-ignore format: in order
+  expect(places).toEqual([...places].sort((a, b) => a - b));
+});
+
+test('a tracker tells its axis where a fixed mount tells its tilt', () => {
+  const table = tablesOf(memo(invented)).find(([head]) => head.includes('Where it points'))!;
+  expect(table.find(([name]) => name === 'Tracker')![2]).toBe(
+    'axis level, north-south, swing 60°, backtracks',
+  );
+});
+
 test('stages that only some mounts have keep their place in the chain', () => {
   const [ground, , , mast] = invented().mounts;
   expect(stageOrder([ground, mast]).at(-1)).toBe('drive');
@@ -182,7 +200,7 @@ test('break-even figures stand beside what was quoted, negative ones too', () =>
   const c = invented();
   c.mounts[3].break_even_premium_per_kw = -120.4;
   const text = memoMarkdown(c, EXTRAS);
-  expect(text).toContain('| Tracker | +400 | +67 | +13.1\u00a0% | +27.9\u00a0% |');
+  expect(text).toContain('| Tracker | +400 | +66.7 | +13.1\u00a0% | +27.9\u00a0% |');
   expect(text).toContain('| Mast | +1\u00a0500 | -120 |');
 });
 

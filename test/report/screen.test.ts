@@ -1,7 +1,9 @@
 import { expect, test } from 'vitest';
-import { screenTable } from '../../src/report/index.ts';
+import { memoMarkdown, screenTable } from '../../src/report/index.ts';
 import { clockWords } from '../../src/report/screen.ts';
+import type { Comparison } from '../../src/shared/index.ts';
 import {
+  EXTRAS,
   HOSTILE,
   invented,
   inventedAlone,
@@ -162,6 +164,40 @@ test('the clock words tell slow from fast', () => {
 test('the plane of the worst month is named, with its tilt and its yield', () => {
   expect(screen(invented)).toContain('a fixed plane tilted for December (66°) would give 3.80 in that month');
   expect(screen(inventedSouth)).toContain('a fixed plane tilted for June (5°)');
+});
+
+test('where the sun stays down in the worst month, that is said in words', () => {
+  const polar = (): Comparison => {
+    const c = invented();
+    const noNovember = (values: number[]) => values.map((v, m) => (m === 10 || m === 11 ? 0 : v));
+    return {
+      ...c,
+      weather: { ...c.weather, ghi_monthly_kwh_m2: noNovember(c.weather.ghi_monthly_kwh_m2) },
+      tilted_for_month: c.tilted_for_month.map((t, m) => (m > 9 ? { ...t, kwh_per_kw_day: 0 } : t)),
+      mounts: c.mounts.map((m) => ({
+        ...m,
+        energy_monthly_kwh_per_kw: noNovember(m.energy_monthly_kwh_per_kw),
+        worst_month: { month: 'Nov', kwh_per_kw_day: 0 },
+      })),
+    };
+  };
+  expect(screen(polar)).toContain('no mount delivers in November and December: the sun stays down');
+  expect(screen(polar)).not.toContain('a fixed plane tilted for');
+  const memo = memoMarkdown(polar(), EXTRAS);
+  expect(memo).toContain('No mount delivers in November and December: the sun stays down.');
+  expect(screen(invented)).not.toContain('no mount delivers');
+});
+
+test('a name that begins a sentence is written as the study writes it', () => {
+  const c = invented();
+  const mounts = c.mounts.map((m) => (m.id === 'tracker' ? { ...m, label: 'fixed_rows' } : m));
+  const text = screenTable({
+    ...c,
+    mounts,
+    advice: { ...c.advice, switch_points: ['fixed racks cost less.'] },
+  });
+  expect(text).toContain('\nfixed_rows delivers');
+  expect(text).toContain('\nFixed racks cost less.');
 });
 
 test('every tracker has its answer to "more modules instead"', () => {

@@ -48,7 +48,7 @@ describe('the band that reading errors allow', () => {
 });
 
 describe('a programme', () => {
-  const of = (factorNow: number, b: { low: number; high: number } | null, shading: number) =>
+  const of = (factorNow: number, b: { low: number; high: number } | null, shading: number | null) =>
     programmeLimits({ minimumTof: 0.75, minimumTsrf: 0.75 }, factorNow, b, shading).map(
       (l) => `${l.name} ${l.status}`,
     );
@@ -62,6 +62,11 @@ describe('a programme', () => {
     ]);
     expect(of(0.7, null, 0)).toEqual(['TOF broken', 'TSRF broken']);
     expect(of(0.75, null, 0)).toEqual(['TOF kept', 'TSRF kept']);
+  });
+
+  test('is not certified for TSRF where nobody measured the shade, but may be ruled out', () => {
+    expect(of(0.9, null, null)).toEqual(['TOF kept', 'TSRF not_checked']);
+    expect(of(0.7, null, null)).toEqual(['TOF broken', 'TSRF broken']);
   });
 
   test('that asks nothing sets no limit', () => {

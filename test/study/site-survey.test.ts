@@ -43,7 +43,7 @@ describe('a bearing read on site', () => {
       steps: ['150 + 16 E = 166 true', 'taken facing out from the plane: 166 true, faces south-south-east'],
       mistakes: { forgottenDeg: 150, reversedDeg: 134 },
     });
-    expect(declinations).toEqual(['16 E as entered']);
+    expect(declinations).toEqual(['16 E as entered, applied to the bearing of roof']);
     expect(findings).toEqual([]);
   });
 
@@ -71,7 +71,7 @@ describe('a bearing read on site', () => {
       expect(declinations[0]).toContain(words);
       expect(declinations[0]).toMatch(/^\d+\.\d\d degrees/);
       expect(declinations[0].split(words)[1]).toMatch(
-        /^0\.\d+ degrees a year toward (east|west), \+- 0\.\d\d\)$/,
+        /^0\.\d+ degrees a year toward (east|west), \+- 0\.\d\d\), applied to the bearing of roof$/,
       );
     },
   );
@@ -216,7 +216,7 @@ describe('a skyline', () => {
     expect(skyline?.worst.name).toBe('gate');
     for (const [bearing, elevation] of EVERY_15)
       expect(elevationAt(skyline!.worst, bearing + 16)).toBeCloseTo(elevation, 12);
-    expect(declinations).toEqual(['16 E as entered']);
+    expect(declinations).toEqual(['16 E as entered, applied to the skyline at gate']);
     expect(findings).toEqual([]);
   });
 

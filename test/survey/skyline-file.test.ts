@@ -13,6 +13,8 @@ test('a skyline file is read in any of its usual dresses', async () => {
     '\uFEFFbearing,elevation\r\n90,5\r\n\r\n120.5,12.25',
     'Elevation; Bearing\n5; 90\n12.25; 120.5\n',
     'bearing\televation\n90\t5\n"120.5"\t12.25\n',
+    'bearing;elevation\n90;5\n120,5;12,25\n',
+    '\uFEFF\r\nelevation\tbearing\r\n5,0\t90\r\n12,25\t120,5\r\n',
   ];
   for (const text of dresses) expect(await readSkylineFile('hill.csv', text), text).toEqual(POINTS);
 });
@@ -29,6 +31,19 @@ test('every problem of a file is told with its line', async () => {
     [9, 'not-a-number', 'hill.csv'],
     [10, 'two-elevations', 'hill.csv'],
   ]);
+});
+
+test('a comma beside a decimal point, or one that may divide columns, is not taken for a decimal comma', async () => {
+  const mixed = await problemsOf(() =>
+    readSkylineFile('hill.csv', 'bearing;elevation\n90;5.5\n120,5;12\n1,200;3\n'),
+  );
+  expect(mixed.map((p) => [p.code, p.line])).toEqual([
+    ['not-a-number', 3],
+    ['not-a-number', 4],
+  ]);
+  const commas = await problemsOf(() => readSkylineFile('hill.csv', 'bearing,elevation\n90,5,7,5\n'));
+  expect(commas.map((p) => [p.code, p.line])).toContainEqual(['column-count', 2]);
+  expect(commas.find((p) => p.code === 'column-count')?.fix).toContain('semicolons');
 });
 
 test('a file without header, without rows, with one point, empty or badly quoted is refused', async () => {

@@ -281,17 +281,64 @@ test('troubles of different sorts are reported together: a wrong place, a bad nu
   expect(codes(await errorIn(bad)).sort()).toEqual(['impossible-place', 'missing-hours', 'not-a-number']);
 });
 
-test('of many troubles the message spells out ten and counts the rest, which the list carries', async () => {
-  const bad = EPW.map((line, i) => (i >= 100 && i < 124 ? line.split(',').with(13, '?').join(',') : line));
-  const error = await errorIn(bad);
-  expect(error.problems).toHaveLength(24);
-  expect(error.message.split('\n')).toHaveLength(11);
-  expect(error.message).toMatch(/\nand 14 more$/);
-  const worse = await errorIn(
-    EPW.map((line, i) => (i >= 8 ? line.split(',').with(13, '?').join(',') : line)),
+test('of a trouble that repeats in a column three lines are told and the others counted, in every format', async () => {
+  const wholeBody = (lines: readonly string[], header: number, edit: (line: string) => string) =>
+    lines.map((line, i) => (i < header ? line : edit(line)));
+  const bad = (cell: number) => (line: string) => line.split(',').with(cell, '?').join(',');
+  const cases = [
+    ['EPW', wholeBody(EPW, 8, bad(13)), 8, 'not-a-number'],
+    ['TMY2', wholeBody(TMY2, 1, (line) => `${line.slice(0, 17)}12x4${line.slice(21)}`), 1, 'not-a-number'],
+    ['TMY3', wholeBody(TMY3, 2, bad(0)), 2, 'bad-date'],
+    ['table', wholeBody(TABLE, 1, bad(0)), 1, 'bad-time'],
+    ['table', wholeBody(TABLE, 1, (line) => `${line},7`), 1, 'column-count'],
+  ] as const;
+  for (const [format, lines, header, code] of cases) {
+    const error = await errorIn(lines, STUDY);
+    expect(codes(error), format).toEqual([code, code, code, code]);
+    expect(error.problems.map((p) => p.line)).toEqual([1, 2, 3, 4].map((row) => header + row));
+    // 8,760 rows less the three that are told.
+    expect(error.problems[3].found).toBe(`8,757 more lines like these, ${header + 4} to ${header + 8760}`);
+    expect(error.message.split('\n')).toHaveLength(4);
+  }
+});
+
+test('four of a kind are told one by one, and five as three and two', async () => {
+  const withBad = (n: number) =>
+    errorIn(EPW.map((line, i) => (i >= 100 && i < 100 + n ? line.split(',').with(13, '?').join(',') : line)));
+  expect((await withBad(4)).problems.map((p) => p.found)).toEqual(Array(4).fill('"?"'));
+  expect((await withBad(5)).problems.map((p) => p.found)).toEqual([
+    '"?"',
+    '"?"',
+    '"?"',
+    '2 more lines like these, 104 to 105',
+  ]);
+});
+
+test('of many sorts of trouble the message spells out ten and counts the rest, which the list carries', async () => {
+  const bad = EPW.map((line, i) =>
+    i >= 100 && i < 124
+      ? [6, 13, 14, 15].reduce((cells, cell) => cells.with(cell, '?'), line.split(',')).join(',')
+      : line,
   );
-  expect(worse.problems).toHaveLength(500);
-  expect(worse.message).toMatch(/\nand 8750 more$/);
+  const error = await errorIn(bad);
+  expect(error.problems).toHaveLength(16); // four columns: three lines and the count of the others each
+  expect(error.message.split('\n')).toHaveLength(11);
+  // Told are the first ten in the file's order: lines 101 and 102 of all four columns and two of line 103. Of 96, 86 are left.
+  expect(error.message).toMatch(/\nand 86 more$/);
+});
+
+test('a table that turns day and month round is refused with both lines', async () => {
+  const slashed = TABLE.map((line) => line.replace(/^(\d{4})-(\d\d)-(\d\d)/, '$2/$3/$1'));
+  const error = await errorIn(
+    change(slashed, 500, (line) => line.replace('01/21/2021', '21/01/2021')),
+    STUDY,
+  );
+  // 13 January, the first day that tells, begins below line 1 + 12 x 24 with the row of 00:00.
+  expect(error.problems.map((p) => [p.code, p.line])).toEqual([
+    ['mixed-dates', 501],
+    ['bad-time', 501],
+  ]);
+  expect(error.problems[0].found).toBe('the day first here and last in line 289');
 });
 
 test('a stray quotation mark is named with its line', async () => {

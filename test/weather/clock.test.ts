@@ -8,7 +8,7 @@ import {
   weatherFindings,
 } from '../../src/weather/index.ts';
 import { describeWithWeather, realYear, realYearNames, sunOf } from '../support/real-years.ts';
-import { bytesOf, inventedYear, writeEpw } from '../support/weather-writers.ts';
+import { bytesOf, inventedYear, TABLE_COLUMNS, writeEpw, writeTable } from '../support/weather-writers.ts';
 
 const find = (year: HourlyYear): WeatherFindings => weatherFindings(year, sunOf(year));
 const blocked = (found: WeatherFindings) => found.findings.filter((f) => f.severity === 'block');
@@ -116,6 +116,23 @@ describeWithWeather('the clock of real years', () => {
       expect(Math.abs((found.timeShiftMin as number) + 60)).toBeLessThan(20);
     }
   });
+
+  test('the hemisphere exchanged is found in every file, from all components and from GHI alone, and blocks', async () => {
+    let seen = 0;
+    for (const name of names) {
+      const year = await realYear(name);
+      const place = { ...year.place, latitudeDeg: -year.place.latitudeDeg };
+      for (const base of [year, globalOnly(year)]) {
+        const [found, ...others] = blocked(find({ ...base, place }));
+        expect([name, found?.code, others]).toEqual([name, 'day-too-long', []]);
+        expect(found.fix).toContain(`latitude ${place.latitudeDeg.toFixed(2)}`);
+        expect(found.fix).toContain('site: { latitude: ');
+        expect(found.fix).toContain('weather: { accept_clock: true }');
+        seen++;
+      }
+    }
+    expect(seen).toBeGreaterThanOrEqual(32);
+  }, 60_000);
 
   test('times left in UTC, many hours off, are found too', async () => {
     const phoenix = await realYear('AZ-Phoenix.tmy2.gz');
@@ -252,6 +269,44 @@ describe('the clock of an invented clear year', () => {
     }
   });
 
+  test('a label that would mend the clock is named beside the minutes, in its own direction only', async () => {
+    const year = await read(41);
+    const fix = (format: HourlyYear['format'], label: HourlyYear['label'], offsetMin: number): string =>
+      blocked(find({ ...year, format, label, offsetMin }))[0].fix;
+    // The hours truly begin at offset 0; said to begin an hour early they need 60 minutes, as start for end gives.
+    expect(fix('table', 'end', -60)).toContain(
+      'add_minutes: 60 } in the study (or weather: { label: start }, if the printed times mark the start of the hour)',
+    );
+    expect(fix('table', 'end', -30)).toContain('label: middle }');
+    expect(fix('table', 'middle', -30)).toContain('label: start }');
+    expect(fix('table', 'start', 60)).toContain('label: end }');
+    expect(fix('EPW', 'start', 60)).toContain('label: end }');
+    // No label lies beyond these, and a manual's own label is not open to doubt.
+    expect(fix('table', 'end', 60)).not.toContain('label');
+    expect(fix('table', 'start', -60)).not.toContain('label');
+    expect(fix('EPW', 'end', -60)).not.toContain('label');
+  });
+
+  test('a table labelled at the start and read by the default is mended by the label that is named', async () => {
+    const place = { latitudeDeg: 41, longitudeDeg: -103.25, elevationM: 200, utcOffsetH: -7 };
+    const bytes = bytesOf(writeTable(inventedYear(place), { printedAfterMin: 0 }));
+    const readAs = async (label: 'start' | null) => {
+      const raw = await readWeather({ source: 'orlin.csv', bytes, table: TABLE_COLUMNS, place, label });
+      return find(fillByClosure(raw, sunOf(raw)(raw.offsetMin)));
+    };
+    expect(blocked(await readAs(null))[0].fix).toContain('weather: { label: start }');
+    expect(blocked(await readAs('start'))).toEqual([]);
+  });
+
+  test('a clock that fits by the minutes of the study says so', async () => {
+    const year = await read(41);
+    const said = (addedMin: number): string | undefined =>
+      weatherFindings(year, sunOf(year), addedMin).findings.find((f) => f.code === 'clock-fits')?.text;
+    expect(said(0)).toMatch(/^The clock fits the sun /);
+    expect(said(60)).toMatch(/^With the 60 minutes that the study adds the clock fits the sun /);
+    expect(said(-60)).toMatch(/^With the 60 minutes that the study takes off the clock fits the sun /);
+  });
+
   test('minutes that the study has added already are counted in the advice', async () => {
     const year = await read(41);
     const found = weatherFindings({ ...year, offsetMin: 90 }, sunOf(year), 90);
@@ -262,7 +317,7 @@ describe('the clock of an invented clear year', () => {
   test('the sun of another place does not fit at all: the wrong hemisphere is named', async () => {
     const year = await read(45);
     const wrong = { ...year, place: { ...year.place, latitudeDeg: -45 } };
-    expect(find(wrong).findings.map((f) => f.code)).toContain('day-too-long');
+    expect(blocked(find(wrong)).map((f) => f.code)).toEqual(['day-too-long']);
   });
 });
 

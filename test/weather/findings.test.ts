@@ -36,6 +36,19 @@ test('a clean year has notes only: clock, sums, closure, what was read', () => {
   );
 });
 
+test('what the study adds is said in words, not as a negative number of minutes', () => {
+  const said = (addedMin: number, filedMin = 0) =>
+    weatherFindings({ ...YEAR, offsetMin: filedMin + addedMin }, sunOf(YEAR), addedMin).findings.find(
+      (f) => f.code === 'year-read',
+    )?.text;
+  expect(said(-60)).toMatch(
+    /end of the hour; as the study has it, hours begin 60 minutes earlier than printed\.$/,
+  );
+  expect(said(30)).toMatch(/hours begin 30 minutes later than printed\.$/);
+  expect(said(0, -30)).toMatch(/end of the hour, hours begin 30 minutes past the full hour\.$/);
+  expect(said(0, 60)).toMatch(/end of the hour\.$/);
+});
+
 test('sums of year and months are plain sums of the columns', () => {
   const found = find(YEAR);
   const sum = (a: Float64Array, from = 0, to = 8760) => a.slice(from, to).reduce((s, v) => s + v, 0) / 1000;
@@ -94,6 +107,35 @@ describe('impossible values', () => {
     expect(finding?.text).toMatch(
       new RegExp(`^1 of \\d+ hours of daylight have .*worst 5 Jul 12:00: ${value} of at most`),
     );
+  });
+
+  test.each([
+    ['dni', 2500, 'dni-too-high'],
+    ['ghi', 2500, 'ghi-too-high'],
+  ] as const)(
+    '%s of %d W/m2 in five hours is a note, in six a warning with first hour and count',
+    (name, value, code) => {
+      // From the noon of 5 July, one a day.
+      const days = (n: number) =>
+        pick(
+          change(YEAR, name, (v, h) => (h >= NOON && h < NOON + n * 24 && h % 24 === 12 ? value : v)),
+          code,
+        );
+      expect(days(5)?.severity).toBe('note');
+      expect(days(6)?.severity).toBe('warning');
+      expect(days(6)?.text).toMatch(/^6 of \d+ hours of daylight have .*\(first 5 Jul 12:00, worst /);
+    },
+  );
+
+  test('DNI up to 2 % above the sunlight outside the air is taken for calibration', () => {
+    const outside = SUN.extraterrestrialWm2[NOON];
+    const at = (factor: number) =>
+      pick(
+        change(YEAR, 'dni', (v, h) => (h === NOON ? outside * factor : v)),
+        'dni-too-high',
+      );
+    expect(at(1.019)).toBeUndefined();
+    expect(at(1.03)).toBeDefined();
   });
 
   test('DHI above GHI is counted', () => {

@@ -137,6 +137,38 @@ describe('times of a table', () => {
     }
   });
 
+  test.each([
+    ['$3.$2.$1', 'day.month.year'],
+    ['$3/$2/$1', 'day/month/year'],
+    ['$2/$3/$1', 'month/day/year'],
+  ])('dates written %s are read as %s, which a note says', async (form, order) => {
+    for (const delimiter of [',', ';', ' ']) {
+      const lines = writeTable(YEAR, { delimiter }).map((line) =>
+        line.replace(/^(\d{4})-(\d\d)-(\d\d)/, form),
+      );
+      const got = await readTable(lines);
+      expect([...got.ghi]).toEqual(YEAR.ghi);
+      expect(got.calendarYear[200]).toBe(2021);
+      expect(got.notes.filter((n) => n.code === 'date-order').map((n) => [n.severity, n.text])).toEqual([
+        ['note', `Dates were read as ${order}.`],
+      ]);
+    }
+  });
+
+  test('dates without leading zeros, and 24:00 beside dots, are understood', async () => {
+    const lines = writeTable(YEAR).map((line) => {
+      const found = /^(\d{4})-(\d\d)-(\d\d) (\d\d):00(.*)$/.exec(line);
+      if (!found) return line;
+      const [, year, month, day, hour, rest] = found;
+      const noon = Date.UTC(Number(year), Number(month) - 1, Number(day));
+      const when = new Date(hour === '00' ? noon - 86_400_000 : noon);
+      const date = `${when.getUTCDate()}.${when.getUTCMonth() + 1}.${when.getUTCFullYear()}`;
+      return `${date} ${hour === '00' ? 24 : Number(hour)}:00${rest}`;
+    });
+    expect(lines.filter((line) => line.includes(' 24:00'))).toHaveLength(365);
+    expect([...(await readTable(lines)).ghi]).toEqual(YEAR.ghi);
+  });
+
   test('24:00, slashes, the letter T and seconds are understood', async () => {
     const lines = writeTable(YEAR).map((line, i) => {
       if (i === 0) return line;

@@ -20,9 +20,9 @@ export const answer = (c: Comparison): string =>
     `# ${md(c.title) || 'Untitled study'}`,
     `**${md(c.advice.headline)}**`,
     blocking(c),
-    sentences(gainSentences(c)),
+    sentences(c, gainSentences(c)),
     c.advice.switch_points.length > 0
-      ? blocks('What would reverse it:', sentences(c.advice.switch_points))
+      ? blocks('What would reverse it:', sentences(c, c.advice.switch_points))
       : '',
   );
 
@@ -48,4 +48,5 @@ const leads = (c: Comparison): string => {
 };
 
 /** Why, with every number that the answer rests on. */
-export const reasons = (c: Comparison): string => section('Reasons', sentences(c.advice.reasons), leads(c));
+export const reasons = (c: Comparison): string =>
+  section('Reasons', sentences(c, c.advice.reasons), leads(c));

@@ -26,12 +26,12 @@ export const notCountedAndDoubts = (c: Comparison): string =>
             ),
           ),
     ),
-    section('Doubts', sentences(c.advice.doubts)),
+    section('Doubts', sentences(c, c.advice.doubts)),
   );
 
 /** For whoever builds and keeps it. */
 export const cautions = (c: Comparison): string =>
-  section('Cautions', sentences([...new Set([...c.advice.cautions, ...cautionsOfSurvey(c)])]));
+  section('Cautions', sentences(c, [...new Set([...c.advice.cautions, ...cautionsOfSurvey(c)])]));
 
 /** Everything that a reviewer needs to repeat the work. */
 export const appendix = (

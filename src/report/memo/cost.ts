@@ -1,7 +1,8 @@
+import { inWords } from '../../cost/index.ts';
 import type { Comparison, MountResult } from '../../shared/index.ts';
 import { costLack, currencyOf, hasCapital, incompleteNote, lcoeColumns } from '../cost-columns.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
-import { formatGain, formatNumber, formatPercent, formatSigned } from '../numbers.ts';
+import { formatGain, formatNumber, formatPercent, UNKNOWN } from '../numbers.ts';
 import { capitalised, oneLine } from '../plain-text.ts';
 import { isTracker, mountById, nameOf } from '../words.ts';
 import { blocks, section } from './section.ts';
@@ -56,6 +57,9 @@ export const cost = (c: Comparison): string => {
   );
 };
 
+/** Money with its sign, rounded as the sentences of the advice round it. */
+const signed = (x: number | null): string => (x === null ? UNKNOWN : `${x > 0 ? '+' : ''}${inWords(x)}`);
+
 const breakEven = (c: Comparison, trackers: readonly MountResult[]): string => {
   const known = trackers.filter((m) => m.break_even_premium_per_kw !== null || m.break_even_gain !== null);
   if (known.length === 0)
@@ -74,8 +78,8 @@ const breakEven = (c: Comparison, trackers: readonly MountResult[]): string => {
     ['left', 'right', 'right', 'right', 'right'],
     known.map((m) => [
       md(nameOf(c, m)),
-      or(formatSigned(m.premium_per_kw), m.premium_per_kw, 'not quoted'),
-      or(formatSigned(m.break_even_premium_per_kw), m.break_even_premium_per_kw, 'not worked out'),
+      or(signed(m.premium_per_kw), m.premium_per_kw, 'not quoted'),
+      or(signed(m.break_even_premium_per_kw), m.break_even_premium_per_kw, 'not worked out'),
       formatGain(m.gain_over_reference),
       or(formatGain(m.break_even_gain), m.break_even_gain, 'not worked out'),
     ]),

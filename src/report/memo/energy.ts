@@ -1,10 +1,19 @@
-import { type Comparison, MONTH_DAYS, MONTH_NAMES, type MountResult } from '../../shared/index.ts';
+import {
+  type Comparison,
+  darkMonthsWords,
+  groupedStages,
+  MONTH_DAYS,
+  MONTH_NAMES,
+  type MountResult,
+  monthInFull,
+} from '../../shared/index.ts';
 import { downtimeSentences } from '../downtime-words.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
 import { formatDaily, formatGain, formatNumber, formatPercent, UNKNOWN } from '../numbers.ts';
+import { capitalised } from '../plain-text.ts';
 import { snowSentences } from '../snow-words.ts';
 import { stowMonths, stowSentences } from '../stow-words.ts';
-import { monthInFull, mountById, nameOf } from '../words.ts';
+import { mountById, nameOf } from '../words.ts';
 import { blocks, section } from './section.ts';
 
 /**
@@ -31,6 +40,15 @@ const stageTable = (c: Comparison): string => {
     const text = formatPercent(stage.efficiency, 2);
     return name === mount.weakest_stage ? `**${text}**` : text;
   };
+  const together = (mount: MountResult, names: readonly string[]): string => {
+    const own = mount.stages.filter((s) => names.includes(s.name));
+    return own.length === 0
+      ? UNKNOWN
+      : `*${formatPercent(
+          own.reduce((whole, s) => whole * s.efficiency, 1),
+          2,
+        )}*`;
+  };
   const row = (name: string, cell: (mount: MountResult) => string) => [name, ...c.mounts.map(cell)];
   const product = (m: MountResult) => m.stages.reduce((whole, { efficiency }) => whole * efficiency, 1);
   return mdTable(
@@ -38,7 +56,10 @@ const stageTable = (c: Comparison): string => {
     ['left', ...c.mounts.map(() => 'right' as const)],
     [
       row('Light on the plane, kWh/m²', (m) => formatNumber(m.irradiation_kwh_m2, 1)),
-      ...stageOrder(c.mounts).map((name) => row(md(name), (m) => share(m, name))),
+      ...groupedStages(stageOrder(c.mounts)).flatMap(({ head, stages }) => [
+        row(`*${capitalised(head)}, together*`, (m) => together(m, stages)),
+        ...stages.map((name) => row(md(name), (m) => share(m, name))),
+      ]),
       row('All stages', (m) => formatPercent(product(m), 2)),
       row('Delivered, kWh/kW', (m) => formatNumber(m.energy_kwh_per_kw, 1)),
       row('Whole array, kWh', (m) => formatNumber(m.energy_kwh)),
@@ -69,9 +90,11 @@ const monthTable = (c: Comparison): string => {
 };
 
 /** The question of every off-grid owner: what does each mount do in its worst month? */
-const worstMonths = (c: Comparison): string =>
-  mdList(
-    c.mounts.flatMap((mount) => {
+const worstMonths = (c: Comparison): string => {
+  const dark = darkMonthsWords(c);
+  return mdList([
+    ...(dark === null ? [] : [`${capitalised(dark)}.`]),
+    ...c.mounts.flatMap((mount) => {
       const { month, kwh_per_kw_day: daily } = mount.worst_month;
       const plane = c.tilted_for_month.find((entry) => entry.month === month);
       if (!plane || !(plane.kwh_per_kw_day > 0)) return [];
@@ -85,7 +108,8 @@ const worstMonths = (c: Comparison): string =>
           `a fixed plane tilted for ${monthInFull(month)} (${formatDaily(plane.kwh_per_kw_day)} kWh/kW·day).`,
       ];
     }),
-  );
+  ]);
+};
 
 /** Where the share of each stage comes from; mounts may differ. */
 const stageSources = (c: Comparison): string =>
@@ -124,7 +148,7 @@ export const energy = (c: Comparison): string =>
   section(
     'Energy and losses',
     'The light on the plane times the share that each stage keeps is the energy delivered in the first year. The table is rounded; ' +
-      `results.json holds the stages to ten digits. The weakest stage is in bold. ${UNKNOWN} means that the stage does not apply to the ` +
+      `results.json holds the stages to ten digits. The weakest stage, which keeps the smallest share, is in bold; what a group of stages keeps together is in italics. ${UNKNOWN} means that the stage does not apply to the ` +
       'mount or is not counted.',
     stageTable(c),
     stageSources(c),

@@ -1,12 +1,12 @@
 import type { Comparison, MountResult } from '../../shared/index.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
 import { formatNumber, UNKNOWN } from '../numbers.ts';
-import { facingWords, isTracker, KIND_WORDS, mountById, nameOf } from '../words.ts';
+import { facingWords, KIND_WORDS, mountById, nameOf } from '../words.ts';
 import { blocks, section } from './section.ts';
 
 const pointing = (mount: MountResult): string => {
   const facing = facingWords(mount);
-  if (facing === null) return isTracker(mount) ? 'follows the sun' : UNKNOWN;
+  if (facing === null) return md(mount.pointing);
   return mount.tilt_basis === null ? facing : `${facing}; ${md(mount.tilt_basis)}`;
 };
 
@@ -38,7 +38,7 @@ export const mountsCompared = (c: Comparison): string =>
     ),
     'Light on the front of each plane over the year, kWh/m², before shade and every loss.',
     mdTable(
-      ['Mount', 'Beam', 'Sky', 'Ground', 'All'],
+      ['Mount', 'Beam', 'Sky', 'Reflected by the ground', 'All'],
       ['left', 'right', 'right', 'right', 'right'],
       c.mounts.map((m) => [
         md(nameOf(c, m)),
