@@ -535,6 +535,21 @@ describe('the reach of a mast', () => {
     ['turntable', 'tilt: ¦95', 'tilt', 'wrong-value'],
     ['turntable', 'drive: { working: 97 %, stuck: ¦flat }', 'drive.stuck', 'wrong-value'],
     ['turntable', 'drive: ¦{ working: 97 % }', 'drive.stuck', 'missing-key'],
+    ['turntable', '¦stow: { gust: 18 }', 'stow', 'unknown-key'],
+    ['dual-axis', 'drive: { working: 97 %, stuck: ¦equator }', 'drive.stuck', 'wrong-value'],
+    [
+      'dual-axis',
+      'elevation: { highest: 60 }, drive: { working: 1, stuck: { tilt: ¦20, azimuth: 90 } }',
+      'drive.stuck.tilt',
+      'beyond-reach',
+    ],
+    [
+      'dual-axis',
+      'turns: { from: 120, to: 240 }, drive: { working: 1, stuck: { tilt: 20, azimuth: ¦90 } }',
+      'drive.stuck.azimuth',
+      'beyond-reach',
+    ],
+    ['dual-axis', 'elevation: { highest: 60 }, stow: { gust: 18, angle: ¦0 }', 'stow.angle', 'beyond-reach'],
   ])('%s with %s', async (kind, keys, field, code) => {
     const problem = await onlyProblem(MOUNT(`kind: ${kind}, ${keys}`));
     expect(problem).toMatchObject({ field: `mounts.m.${field}`, code });

@@ -42,7 +42,8 @@ describe('a single-axis tracker that stands still', () => {
         for (const s of [0, 5000, 11111, 17000]) {
           expect(still.cosIncidence[s]).toBeCloseTo(fixed.cosIncidence[s], 12);
           expect(still.cosTilt[s]).toBeCloseTo(fixed.cosTilt[s], 12);
-          expect(still.sinTilt[s]).toBeCloseTo(fixed.sinTilt[s], 12);
+          // By the root of 1 - cos2, whose rounding counts near flat: the root of 2e-16 is 1.5e-8.
+          expect(still.sinTilt[s]).toBeCloseTo(fixed.sinTilt[s], 7);
           if (Math.abs(turnDeg) > 0.01)
             expect(wrap180(still.azimuthDegAt(s) - fixed.azimuthDegAt(s))).toBeCloseTo(0, 6);
         }
