@@ -21,7 +21,7 @@ export const costChart = (comparison: Comparison): Chart => {
   const rows = costRows(comparison.mounts);
   if (!rows.some(hasCost)) return energyInPlaceOfCost(comparison);
   const unit = `${comparison.currency ?? 'money'} per kWh`;
-  const title = headline(rows, unit);
+  const title = headline(comparison, rows, unit);
   const incomplete = rows.filter((r) => hasCost(r) && r.mount.cost_incomplete).map((r) => named(r.mount));
   const finding = `${title}.${incomplete.length > 0 ? ` Some costs are blank for ${listed(incomplete)}: from what is known only.` : ''}`;
   const altText = `Points on a common scale: cost per kWh by mount, ${unit}. ${finding} ${rows.map((r) => `${labelOf(r.mount)}: ${inWords(r)}`).join('; ')}.`;
@@ -185,17 +185,48 @@ const inWords = (row: CostRow): string =>
     ? row.atRates.map((a) => `${money(a.cost)} at ${a.rate}`).join(', ')
     : valueWords(row);
 
-const headline = (rows: readonly CostRow[], unit: string): string => {
+/** The title names the cheapest of those that keep their limits, and is no surer than the verdict. */
+const headline = (comparison: Comparison, rows: readonly CostRow[], unit: string): string => {
   const costed = rows.filter(hasCost);
-  const [best, next] = costed;
-  if (best.likely === null) return headlineAtRates(costed, unit);
-  const figure = `${money(best.likely)} ${unit}`;
-  if (next === undefined) return sentence(`energy from ${named(best.mount)} costs ${figure}`);
+  const { excluded } = comparison.advice;
+  const keeping = costed.filter(({ mount }) => !excluded.some(({ id }) => id === mount.id));
+  const candidates = keeping.length > 0 ? keeping : costed;
+  const parts = [
+    keeping.length === 0 ? 'no mount with costs keeps its limits' : '',
+    keeping.length > 0 && candidates[0] !== costed[0] ? 'of the mounts that keep their limits' : '',
+    costed.some(({ mount }) => mount.cost_incomplete) ? 'from the costs given' : '',
+  ].filter((part) => part !== '');
+  const start = parts.length > 0 ? `${parts.join(', ')}, ` : '';
+  const rest =
+    candidates[0].likely === null
+      ? headlineAtRates(candidates, unit)
+      : headlineAtRate(comparison, candidates, unit);
+  return sentence(
+    start + rest,
+    costed.map((row) => named(row.mount)),
+  );
+};
+
+/** Whether the verdict finds these two too close to call by their costs. */
+const tooClose = ({ advice, ranked_by }: Comparison, a: CostRow, b: CostRow): boolean =>
+  ranked_by === 'lowest cost per kWh' &&
+  [[a, b], [b, a]].some(
+    ([chosen, other]) =>
+      advice.choice === chosen.mount.id &&
+      advice.leads.some((lead) => lead.over === other.mount.id && lead.confidence === 'too_close'),
+  ); // biome-ignore format: the two orders on one line
+
+const headlineAtRate = (comparison: Comparison, [best, next]: readonly CostRow[], unit: string): string => {
+  const currency = comparison.currency ?? 'money';
+  const figure = `${money(middle(best))} ${unit}`;
+  if (next === undefined) return `energy from ${named(best.mount)} costs ${figure}`;
+  if (tooClose(comparison, best, next))
+    return `cost per kWh: ${named(best.mount)} and ${named(next.mount)} are too close to call (${money(middle(best))} and ${money(middle(next))} ${currency})`;
   const ahead = middle(next) > 0 ? 1 - middle(best) / middle(next) : 0;
   return Math.abs(ahead) < 0.0005
-    ? sentence(`${named(best.mount)} and ${named(next.mount)} cost the same, ${figure}`)
-    : sentence(`${named(best.mount)} makes the cheapest energy: ${figure}, ${percentSize(ahead)} below ${named(next.mount)}`);
-}; // biome-ignore format: one sentence a line
+    ? `${named(best.mount)} and ${named(next.mount)} cost the same, ${figure}`
+    : `${named(best.mount)} makes the cheapest energy: ${figure}, ${percentSize(ahead)} below ${named(next.mount)}`;
+};
 
 /** Which mount is cheapest at which rate. */
 const headlineAtRates = (rows: readonly CostRow[], unit: string): string => {
@@ -209,11 +240,7 @@ const headlineAtRates = (rows: readonly CostRow[], unit: string): string => {
     .map((row) => ({ row, won: rates.filter((_, i) => winners[i] === row) }))
     .filter(({ won }) => won.length > 0);
   if (spans.length > 1)
-    return sentence(
-      `cheapest energy: ${listed(spans.map(({ row, won }) => `${named(row.mount)} at ${listed(won)}`))}`,
-    );
+    return `cheapest energy: ${listed(spans.map(({ row, won }) => `${named(row.mount)} at ${listed(won)}`))}`;
   const costs = rows[0].atRates.map((a) => a.cost);
-  return sentence(
-    `${named(spans[0].row.mount)} makes the cheapest energy at ${listed(rates)}: ${money(Math.min(...costs))} to ${money(Math.max(...costs))} ${unit}`,
-  );
+  return `${named(spans[0].row.mount)} makes the cheapest energy at ${listed(rates)}: ${money(Math.min(...costs))} to ${money(Math.max(...costs))} ${unit}`;
 };

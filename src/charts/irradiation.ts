@@ -7,11 +7,11 @@ import { textWidth } from './text.ts';
 import { highest, labelOf, listed, moreThan, named, ranked, referenceOf, sentence } from './words.ts';
 
 const PARTS = [
-  { part: 'beam', value: (m: MountResult) => m.beam_kwh_m2 },
-  { part: 'sky', value: (m: MountResult) => m.sky_diffuse_kwh_m2 },
-  { part: 'ground', value: (m: MountResult) => m.ground_reflected_kwh_m2 },
+  { part: 'beam', words: 'beam', value: (m: MountResult) => m.beam_kwh_m2 },
+  { part: 'sky', words: 'sky', value: (m: MountResult) => m.sky_diffuse_kwh_m2 },
+  { part: 'ground', words: 'reflected by the ground', value: (m: MountResult) => m.ground_reflected_kwh_m2 },
 ] as const;
-const RIGHT = 132;
+const RIGHT = 206;
 const VALUE_SIZE = 11;
 
 /** Yearly light on each mount, stacked by where it comes from: beam, sky, ground. */
@@ -21,7 +21,7 @@ export const irradiationChart = (comparison: Comparison): Chart => {
   const finding = `${title}. ${beamSentence(mounts)}`;
   const figures = mounts.map(
     (m) =>
-      `${labelOf(m)} ${whole(m.irradiation_kwh_m2)} (${PARTS.map((p) => `${p.part} ${whole(p.value(m))}`).join(', ')})`,
+      `${labelOf(m)} ${whole(m.irradiation_kwh_m2)} (${PARTS.map((p) => `${p.words} ${whole(p.value(m))}`).join(', ')})`,
   );
   const altText = `Stacked bars of yearly light by mount, kWh per m². ${finding} ${figures.join('; ')}.`;
 
@@ -149,7 +149,7 @@ const outsideGroundValues = (
       return {
         row: s.row,
         end: forSpec(mounts[s.row].irradiation_kwh_m2),
-        text: `ground ${whole(s.kwh_m2)}`,
+        text: `reflected by the ground ${whole(s.kwh_m2)}`,
         shift: Math.ceil(textWidth(total, 12, true)) + 17,
       };
     });
@@ -167,11 +167,11 @@ const outsideGroundValues = (
 /** Names of the parts above the first bar, each over its own part and pushed right where that is too short. */
 const partHeads = (first: MountResult, pxPerUnit: number) => {
   let [from, free] = [0, 0];
-  const heads = PARTS.map(({ part, value }) => {
+  const heads = PARTS.map(({ part, words, value }) => {
     const at = Math.max(from * pxPerUnit, free);
     from += value(first);
-    free = at + textWidth(part, VALUE_SIZE, true) + 22;
-    return { part, x: forSpec(at), text: part };
+    free = at + textWidth(words, VALUE_SIZE, true) + 22;
+    return { part, x: forSpec(at), text: words };
   });
   const shared = {
     y: { value: -6 },
@@ -200,13 +200,13 @@ const headline = (mounts: readonly MountResult[], reference: MountResult): strin
   const best = mounts[0];
   const other = best.id === reference.id ? mounts[1] : reference;
   if (other === undefined)
-    return sentence(`${named(best)} collects ${whole(best.irradiation_kwh_m2)} kWh/m² of light a year`);
+    return `${named(best)} collects ${whole(best.irradiation_kwh_m2)} kWh/m² of light a year`;
   const more = moreThan(best.irradiation_kwh_m2, other.irradiation_kwh_m2, 'light');
   return more === null
     ? sentence(
         `no light falls on ${named(other)}; ${named(best)} collects ${whole(best.irradiation_kwh_m2)} kWh/m²`,
       )
-    : sentence(`${named(best)} collects ${more} ${named(other)}`);
+    : `${named(best)} collects ${more} ${named(other)}`;
 };
 
 /** How much of the light is beam, which is what a tracker lives on. */

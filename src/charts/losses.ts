@@ -1,4 +1,4 @@
-import type { Comparison, MountResult } from '../shared/index.ts';
+import { type Comparison, groupedStages, type MountResult, type StageGroup } from '../shared/index.ts';
 import {
   CHART_WIDTH,
   type Chart,
@@ -12,7 +12,7 @@ import {
 import { forSpec, whole } from './numbers.ts';
 import { BAR, HAIRLINE, MUTED } from './palette.ts';
 import { oneLine, shorten, textWidth, wrap } from './text.ts';
-import { highest, labelOf, listed, named, sentence } from './words.ts';
+import { highest, labelOf, listed, named } from './words.ts';
 
 const MOUNTS_ABREAST = 4;
 const STAGE_ROOM = 120;
@@ -20,6 +20,7 @@ const ROW = 22;
 const BAR_THICK = 13;
 const HEAD = 40;
 const BLOCK_GAP = 18;
+const GROUP_GAP = 6;
 const VALUE_SIZE = 11;
 const VALUE_ROOM = 38;
 
@@ -32,7 +33,9 @@ interface StageLoss {
 /** What each stage takes from each mount, kWh per kW: small multiples on one scale. */
 export const lossesChart = (comparison: Comparison): Chart => {
   const { mounts } = comparison;
-  const stages = stageOrder(mounts);
+  const groups = groupedStages(stageOrder(mounts));
+  const stages = groups.flatMap((group) => group.stages);
+  const { places, heads, height: rowsHeight } = placesOf(groups);
   const losses = mounts.map((mount) => lossesOf(mount, stages));
   const title = headline(mounts, losses);
   const finding = `${title}. ${totals(mounts)}`;
@@ -40,7 +43,10 @@ export const lossesChart = (comparison: Comparison): Chart => {
 
   const abreast = Math.min(MOUNTS_ABREAST, mounts.length);
   const stageWidth = Math.ceil(
-    Math.max(...stages.map((s) => Math.min(STAGE_ROOM, textWidth(s, LABEL_SIZE)))),
+    Math.max(
+      ...stages.map((s) => Math.min(STAGE_ROOM, textWidth(s, LABEL_SIZE))),
+      ...heads.map(({ head }) => textWidth(head, VALUE_SIZE, true)),
+    ),
   );
   const left = MARGIN + stageWidth + 14;
   const columnWidth = (CHART_WIDTH - left - MARGIN) / abreast;
@@ -51,21 +57,29 @@ export const lossesChart = (comparison: Comparison): Chart => {
   const barRoom = Math.min(columnWidth, 300) - VALUE_ROOM - 12 - (scaleLow < 0 ? VALUE_ROOM : 0);
   const pxPerUnit = barRoom / (scaleTop - scaleLow);
   const zero = -scaleLow * pxPerUnit + (scaleLow < 0 ? VALUE_ROOM : 0);
-  const blockHeight = HEAD + stages.length * ROW + BLOCK_GAP;
+  const blockHeight = HEAD + rowsHeight + BLOCK_GAP;
   const blocks = Math.ceil(mounts.length / abreast);
 
   const layers = mounts.flatMap((mount, i) => {
     const x0 = (i % abreast) * columnWidth + zero;
     const y0 = Math.floor(i / abreast) * blockHeight + HEAD;
-    return panel(mount, losses[i], { x0, y0, pxPerUnit, columnWidth, zero });
+    return panel(mount, losses[i], { x0, y0, pxPerUnit, columnWidth, zero, places, height: rowsHeight });
   });
-  const stageNames = Array.from({ length: blocks }, (_, b) =>
-    textLayer(
-      stages.map((stage, s) => ({ y: b * blockHeight + HEAD + (s + 0.5) * ROW, text: shorten(stage, STAGE_ROOM, LABEL_SIZE) })),
-      { y: pixels('y'), x: { value: -14 } },
-      { align: 'right', color: MUTED },
-    ),
-  ); // biome-ignore format: one layer
+  const names = Array.from({ length: blocks }, (_, b) => {
+    const top = b * blockHeight + HEAD;
+    return [
+      textLayer(
+        stages.map((stage, s) => ({ y: top + places[s], text: shorten(stage, STAGE_ROOM, LABEL_SIZE) })),
+        { y: pixels('y'), x: { value: -14 } },
+        { align: 'right', color: MUTED },
+      ),
+      textLayer(
+        heads.map(({ head, at }) => ({ y: top + at, text: head })),
+        { y: pixels('y'), x: { value: -14 } },
+        { align: 'right', fontSize: VALUE_SIZE, fontWeight: 'bold' },
+      ),
+    ];
+  }).flat();
   return {
     name: 'losses',
     title,
@@ -80,9 +94,26 @@ export const lossesChart = (comparison: Comparison): Chart => {
       height: blocks * blockHeight - BLOCK_GAP,
       above: 12,
       below: MARGIN,
-      layers: [...stageNames, ...layers],
+      layers: [...names, ...layers],
     }),
   };
+};
+
+/** Middles of the stages' rows and of the heads above each group, pixels below the first row's top. */
+const placesOf = (groups: readonly StageGroup[]) => {
+  const places: number[] = [];
+  const heads: { head: string; at: number }[] = [];
+  let y = 0;
+  for (const { head, stages } of groups) {
+    heads.push({ head, at: y + ROW / 2 });
+    y += ROW;
+    for (const _ of stages) {
+      places.push(y + ROW / 2);
+      y += ROW;
+    }
+    y += GROUP_GAP;
+  }
+  return { places, heads, height: Math.max(0, y - GROUP_GAP) };
 };
 
 /** Signs are explained only where they occur. */
@@ -125,6 +156,9 @@ interface Place {
   readonly pxPerUnit: number;
   readonly columnWidth: number;
   readonly zero: number;
+  /** Middles of the rows below `y0`, and how far they reach. */
+  readonly places: readonly number[];
+  readonly height: number;
 }
 
 /** Positions that are worked out here, in pixels of the plot. */
@@ -134,7 +168,7 @@ const panel = (mount: MountResult, losses: readonly StageLoss[], place: Place): 
   const { x0, y0, pxPerUnit } = place;
   const left = x0 - place.zero;
   const rows = losses.map(({ stage, taken }, s) => {
-    const y = y0 + (s + 0.5) * ROW;
+    const y = y0 + place.places[s];
     const end = x0 + (taken ?? 0) * pxPerUnit;
     return { stage, mount: labelOf(mount), taken_kwh_per_kw: taken === null ? null : forSpec(taken), y, top: y - BAR_THICK / 2, bottom: y + BAR_THICK / 2, x: forSpec(x0), x2: forSpec(end), text: taken === null ? '\u2013' : taken < -0.5 ? `+${whole(-taken)}` : whole(Math.abs(taken)) };
   }); // biome-ignore format: one row
@@ -162,13 +196,13 @@ const panel = (mount: MountResult, losses: readonly StageLoss[], place: Place): 
       encoding: {
         x: { value: forSpec(x0) },
         y: { value: y0 },
-        y2: { value: y0 + losses.length * ROW },
+        y2: { value: y0 + place.height },
       },
     },
   ]; // biome-ignore format: a list of layers
 };
 
-/** The stage that takes most, mount by mount; mounts that share it are named together. */
+/** The stage that takes most kWh, mount by mount; mounts that share it are named together. */
 const headline = (mounts: readonly MountResult[], losses: readonly StageLoss[][]): string => {
   const worst = mounts.map((mount, i) => ({ mount, ...highest(losses[i], (l) => l.taken ?? 0) }));
   const real = worst.filter((w) => (w.taken ?? 0) > 0);
@@ -178,11 +212,12 @@ const headline = (mounts: readonly MountResult[], losses: readonly StageLoss[][]
   const sizes = group.map((w) => w.taken ?? 0);
   const [low, high] = [whole(Math.min(...sizes)), whole(Math.max(...sizes))];
   const range = low === high ? high : `${low} to ${high}`;
-  const whom = group.length === mounts.length && group.length > 1 ? 'every mount' : listed(group.slice(0, 3).map((w) => named(w.mount)));
+  const every = group.length === mounts.length && group.length > 1;
+  const many = group.length > 3;
+  const whom = every ? 'Every mount' : many ? `${group.length} of ${mounts.length} mounts` : listed(group.map((w) => named(w.mount)));
+  const lose = every || group.length === 1 ? 'loses' : 'lose';
   const others = byStage.filter((g) => g !== group)[0]?.[0];
-  return sentence(
-    `${group[0].stage} takes most from ${group.length > 3 && group.length < mounts.length ? `${group.length} of ${mounts.length} mounts` : whom}: ${range} kWh per kW a year${others ? `; from ${named(others.mount)} it is ${others.stage}, ${whole(others.taken ?? 0)}` : ''}`,
-  );
+  return `${whom} ${lose} most kWh at ${group[0].stage}: ${range} per kW a year${others ? `; ${named(others.mount)} at ${others.stage}, ${whole(others.taken ?? 0)}` : ''}`;
 }; // biome-ignore format: one sentence
 
 const totals = (mounts: readonly MountResult[]): string => {

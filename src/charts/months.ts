@@ -1,4 +1,12 @@
-import { type Comparison, MONTH_DAYS, MONTH_NAMES, type MountResult } from '../shared/index.ts';
+import {
+  type Comparison,
+  darkMonthsWords,
+  isNothing,
+  MONTH_DAYS,
+  MONTH_NAMES,
+  type MountResult,
+  monthInFull,
+} from '../shared/index.ts';
 import {
   type Chart,
   frame,
@@ -52,7 +60,7 @@ export const monthsChart = (comparison: Comparison): Chart => {
     labels.reduce((sum, lines) => sum + roomFor(lines), 0),
   );
   const title = headline(comparison);
-  const finding = `${title}. ${againstMonthly(comparison)}`;
+  const finding = `${title}.${bestWorstMonth(comparison)}`;
   const altText =
     `Lines of energy delivered by month, kWh per kW per day. ${finding} ` +
     `${series.map((s) => `${s.name}: ${s.kwhPerKwDay.map((v, m) => `${MONTH_NAMES[m]} ${fixed(v, 2)}`).join(', ')}`).join('; ')}.`;
@@ -160,30 +168,34 @@ const endLabels = (
   return [...rules, ...marks, ...texts];
 };
 
-const worst = (mount: MountResult) =>
-  `${fixed(mount.worst_month.kwh_per_kw_day, 1)} kWh per kW a day in ${mount.worst_month.month}`;
+/** Two figures of one sentence may differ in the second decimal only. */
+const daily = (kwhPerKwDay: number): string => (isNothing(kwhPerKwDay) ? 'nothing' : fixed(kwhPerKwDay, 2));
 
+/** The mount that is chosen, else the reference. */
+const subjectOf = ({ mounts, advice, reference_id }: Comparison): MountResult =>
+  mounts.find(({ id }) => id === advice.choice) ?? referenceOf(mounts, reference_id);
+
+/** The chosen mount in its worst month against the plane tilted for that month; words where the sun stays down. */
 const headline = (comparison: Comparison): string => {
-  const { mounts } = comparison;
-  const best = highest(mounts, (m) => m.worst_month.kwh_per_kw_day);
-  const reference = referenceOf(mounts, comparison.reference_id);
-  if (mounts.length === 1)
-    return sentence(`${named(best)} delivers least in its worst month, ${worst(best)}`);
-  const other =
-    best.id === reference.id
-      ? highest(mounts.filter((m) => m.id !== best.id), (m) => m.worst_month.kwh_per_kw_day)
-      : reference; // biome-ignore format: one choice
-  const same = best.worst_month.month === other.worst_month.month;
-  return sentence(
-    `${named(best)} has the best worst month, ${worst(best)}; ${named(other)} gives ${fixed(other.worst_month.kwh_per_kw_day, 1)}${same ? '' : ` in ${other.worst_month.month}`}`,
-  );
+  const subject = subjectOf(comparison);
+  const { month, kwh_per_kw_day } = subject.worst_month;
+  const tilted = comparison.tilted_for_month.find((m) => m.month === month);
+  const dark = darkMonthsWords(comparison);
+  if (dark !== null && isNothing(tilted?.kwh_per_kw_day ?? 0)) return sentence(dark);
+  const least = isNothing(kwh_per_kw_day)
+    ? `${named(subject)} delivers nothing in ${monthInFull(month)}`
+    : `${named(subject)} delivers least in ${monthInFull(month)}, ${daily(kwh_per_kw_day)} kWh per kW a day`;
+  return tilted === undefined
+    ? least
+    : `${least}; a fixed plane tilted for that month would give ${daily(tilted.kwh_per_kw_day)}`;
 };
 
-/** The reference in its worst month against the plane tilted for that month. */
-const againstMonthly = (comparison: Comparison): string => {
-  const reference = referenceOf(comparison.mounts, comparison.reference_id);
-  const { month, kwh_per_kw_day } = reference.worst_month;
-  const tilted = comparison.tilted_for_month.find((m) => m.month === month);
-  if (tilted === undefined) return `The worst month of ${named(reference)} is ${month}.`;
-  return `A fixed plane tilted for ${month} would give ${fixed(tilted.kwh_per_kw_day, 1)} in that month, where ${named(reference)} gives ${fixed(kwh_per_kw_day, 1)}.`;
+/** Which of the mounts that keep their limits has the best worst month; empty where there is none to name. */
+const bestWorstMonth = ({ mounts, advice }: Comparison): string => {
+  const kept = mounts.filter(({ id }) => !advice.excluded.some((e) => e.id === id));
+  if (kept.length < 2) return '';
+  const best = highest(kept, (m) => m.worst_month.kwh_per_kw_day);
+  if (isNothing(best.worst_month.kwh_per_kw_day)) return '';
+  const whom = kept.length < mounts.length ? 'Of the mounts that keep their limits' : 'Of all mounts';
+  return ` ${whom}, ${named(best)} has the best worst month: ${daily(best.worst_month.kwh_per_kw_day)} in ${monthInFull(best.worst_month.month)}.`;
 };

@@ -1,5 +1,6 @@
 import type { Direction } from './azimuth-window.ts';
 import { LABEL_SIZE, type Layer, textLayer } from './frame.ts';
+import { elevationOf, sunStretches } from './hidden-sun.ts';
 import { type LineLabel, type Pixel, placeOnLines } from './line-labels.ts';
 import { forSpec } from './numbers.ts';
 import { HAIRLINE, HILL, INK, MUTED, PAPER, SUN_PATH } from './palette.ts';
@@ -29,19 +30,31 @@ const topOf = ({ profiles, paths }: Panorama): number => {
   return Math.min(90, 5 * Math.ceil((Math.max(8, ...all) * 1.06) / 5));
 };
 
-/** Sun's paths behind, the skyline in front, names on their lines. */
+/** Sun's paths behind, dashed where the skyline hides them, the skyline in front, names on their lines. */
 export const panoramaLayers = (panorama: Panorama): Layer[] => {
   const top = topOf(panorama);
   const axes = axesOf(panorama.start, top);
   const worst = panorama.profiles.find((p) => p.name === panorama.worst) ?? panorama.profiles[0];
+  const elevationAt = elevationOf(worst.pieces);
+  const stretches = (hidden: boolean): PanoramaLine[] =>
+    panorama.paths
+      .map(({ name, pieces }) => ({
+        name,
+        pieces: pieces
+          .flatMap((piece) => sunStretches(piece, elevationAt))
+          .filter((stretch) => stretch.hidden === hidden)
+          .map(({ points }) => points),
+      }))
+      .filter(({ pieces }) => pieces.length > 0);
   const line = (l: PanoramaLine, mark: Record<string, unknown>): Layer => ({
     data: { values: rowsOf(l) },
     mark: { type: 'line', strokeCap: 'round', strokeJoin: 'round', ...mark },
     encoding: { ...axes, order: { field: 'step', type: 'quantitative' }, detail: { field: 'piece', type: 'nominal' } },
   }); // biome-ignore format: one encoding
   return [
-    ...panorama.paths.map((p) => line(p, { color: SUN_PATH, strokeWidth: 2 })),
+    ...stretches(false).map((p) => line(p, { color: SUN_PATH, strokeWidth: 2 })),
     hill(worst, axes),
+    ...stretches(true).map((p) => line(p, { color: SUN_PATH, strokeWidth: 2, strokeDash: [2, 5] })),
     ...panorama.profiles.filter((p) => p !== worst).map((p) => line(p, { color: MUTED, strokeWidth: 1 })),
     line(worst, { color: INK, strokeWidth: 2 }),
     ...labels(panorama, worst, top),

@@ -1,6 +1,7 @@
 import type { Comparison, SkylineResult } from '../shared/index.ts';
 import { intoWindow, outlineLine, sunLines, windowStart } from './azimuth-window.ts';
 import { type Chart, frame, plotWidth } from './frame.ts';
+import { elevationOf } from './hidden-sun.ts';
 import { percentSize, whole } from './numbers.ts';
 import { type Panorama, panoramaLayers } from './panorama.ts';
 import { oneLine, shorten } from './text.ts';
@@ -55,14 +56,17 @@ export const skylineChart = (comparison: Comparison, skyline: SkylineResult): Ch
 
 const pointName = (name: string): string => shorten(oneLine(name) || 'unnamed', POINT_WIDTH, 12);
 
-const howToRead = ({ profiles, worst_point, sun_paths }: SkylineResult): string => {
+const howToRead = (skyline: SkylineResult): string => {
+  const { profiles, worst_point, sun_paths } = skyline;
+  const hidden = hiddenShares(skyline);
   const others = profiles.length - 1;
   const down = sun_paths.filter((p) => p.azimuths_deg.length === 0).map((p) => oneLine(p.name));
   return [
     others > 0
       ? `Filled: what stands before the sky at ${pointName(worst_point)}, the worst point of the array; thin lines: the ${others === 1 ? 'other point' : `other ${others} points`}.`
       : 'Filled: what stands before the sky.',
-    "Amber: the sun's paths on the solstices and, one line for both equinoxes, on 21 March.",
+    `Amber: the sun's paths on the solstices and, one line for both equinoxes, on 21 March${hidden.length > 0 ? ', dashed where the skyline hides the sun' : ''}.`,
+    hidden.length > 0 ? `Share of its time up that is hidden: ${listed(hidden)}.` : '',
     down.length > 0 ? `The sun stays down on ${listed(down)}.` : '',
   ]
     .filter((part) => part !== '')
@@ -90,6 +94,21 @@ const worstSentence = ({ mounts }: Comparison, { profiles, worst_point }: Skylin
   const most = highest(lit, (m) => m.shading_worst_point - m.shading_fraction);
   if (most.shading_worst_point - most.shading_fraction < NOTHING) return '';
   return ` At ${pointName(most.worst_point ?? worst_point)}, the worst of ${profiles.length} points for it, it takes ${percentSize(most.shading_worst_point)} from ${named(most)}.`;
+};
+
+/** `31 % on 21 December`, by path, from the samples at equal times; empty where nothing is hidden. */
+const hiddenShares = ({ profiles, worst_point, sun_paths }: SkylineResult): string[] => {
+  const worst = profiles.find((p) => p.name === worst_point) ?? profiles[0];
+  const elevationAt = elevationOf([outlineLine(worst.azimuths_deg, worst.elevations_deg)]);
+  const shares = sun_paths
+    .filter((p) => p.elevations_deg.length > 0)
+    .map(({ name, azimuths_deg, elevations_deg }) => ({
+      name: oneLine(name),
+      share: elevations_deg.filter((e, i) => e < elevationAt(azimuths_deg[i])).length / elevations_deg.length,
+    }));
+  return shares.some(({ share }) => share > 0)
+    ? shares.map(({ name, share }) => `${share > 0 ? percentSize(share) : 'none'} on ${name}`)
+    : [];
 };
 
 const figures = ({ mounts }: Comparison, { profiles, sun_paths }: SkylineResult): string => {

@@ -11,9 +11,11 @@ export const labelOf = (mount: MountResult): string => oneLine(mount.label) || o
 /** A mount within a sentence, as its user calls it. */
 export const named = (mount: MountResult): string => shorten(labelOf(mount), NAME_WIDTH, 12);
 
-/** First letter of a sentence, unless it belongs to a name. */
-export const sentence = (text: string): string =>
-  /^[a-z][a-z -]/.test(text) ? text[0].toUpperCase() + text.slice(1) : text;
+/** A capital for a sentence that begins with a plain word; one that begins with one of `names` is left as it is. */
+export const sentence = (text: string, names: readonly string[] = []): string =>
+  /^[a-z][a-z -]/.test(text) && !names.some((name) => text.startsWith(`${name} `))
+    ? text[0].toUpperCase() + text.slice(1)
+    : text;
 
 /** `a`, `a and b`, `a, b and c`. */
 export const listed = (items: readonly string[]): string =>

@@ -68,12 +68,12 @@ test('titles are worked out from the figures', () => {
   expect(chart('usual', 'irradiation').title).toBe(
     'Dual-axis mast collects 34\u00A0% more light than ground',
   );
-  expect(chart('usual', 'cost').title).toBe('Ground makes the cheapest energy: 0.109 USD per kWh, 3.5\u00A0% below Shop roof'); // biome-ignore format: a sentence
+  expect(chart('usual', 'cost').title).toBe('ground makes the cheapest energy: 0.109 USD per kWh, 3.5\u00A0% below Shop roof'); // biome-ignore format: a sentence
   expect(chart('usual', 'orientation').title).toBe('The best fixed plane is 34° tilt facing 186° (south); Shop roof loses 6.5\u00A0%'); // biome-ignore format: a sentence
   expect(chart('southern hemisphere', 'orientation').title).toContain('facing 354° (north)');
   expect(chart('no costs', 'cost').title).toMatch(/^No costs given: .* more energy than ground/);
   expect(chart('costs at three rates', 'cost').title).toContain('at 4\u00A0%, 7\u00A0% and 10\u00A0%: 0.087 to 0.142 USD'); // biome-ignore format: a sentence
-  expect(chart('usual', 'losses').title).toMatch(/^Heat takes most from every mount/);
+  expect(chart('usual', 'losses').title).toMatch(/^Every mount loses most kWh at heat: /);
 });
 
 test('beam, sky and ground bars sum to the irradiation of each mount', () => {

@@ -8,6 +8,7 @@ import {
   windowStart,
 } from '../../src/charts/azimuth-window.ts';
 import { errorBox } from '../../src/charts/error-box.ts';
+import { elevationOf, sunStretches } from '../../src/charts/hidden-sun.ts';
 import { type Pixel, placeOnLines } from '../../src/charts/line-labels.ts';
 import { inventedMount } from './fixture.ts';
 import { sunPath } from './skyline-fixture.ts';
@@ -111,4 +112,20 @@ test('the box of the reading errors is a sector, cut at flat and upright, a ring
   expect(mount(30, 5, 180)).toHaveLength(2);
   // Tilt alone leaves a line along one azimuth.
   for (const [, north] of mount(30, 5)![0]) expect(north).toBeCloseTo(0, 9);
+});
+
+test("a sun's path is parted where the skyline hides it, and loses no length", () => {
+  // Flat at 10 degrees, with a wall of 40 from 150 to 170.
+  const elevationAt = elevationOf([line([[0, 10], [150, 10], [150, 40], [170, 40], [170, 10], [360, 10]])]); // biome-ignore format: points
+  expect([100, 160, 300].map(elevationAt)).toEqual([10, 40, 10]);
+  const path = line([[100, 0], [140, 30], [180, 30], [240, 0]]); // biome-ignore format: points
+  const parts = sunStretches(path, elevationAt);
+  expect(parts.map((p) => p.hidden)).toEqual([true, false, true, false, true]);
+  // It rises over 10 degrees a third of the way from 100 to 140, and sets behind 10 two thirds from 180 to 240.
+  const ends = parts.map((p) => p.points.at(-1)!.azimuthDeg);
+  for (const [i, expected] of [100 + 40 / 3, 150, 170, 220, 240].entries())
+    expect(Math.abs(ends[i] - expected)).toBeLessThanOrEqual(0.51);
+  for (const [i, part] of parts.entries())
+    if (i > 0) expect(part.points[0]).toEqual(parts[i - 1].points.at(-1));
+  expect(sunStretches(path, () => 0)).toHaveLength(1);
 });
