@@ -11,7 +11,7 @@ const PARTS = [
   { part: 'sky', words: 'sky', value: (m: MountResult) => m.sky_diffuse_kwh_m2 },
   { part: 'ground', words: 'reflected by the ground', value: (m: MountResult) => m.ground_reflected_kwh_m2 },
 ] as const;
-const RIGHT = 206;
+const RIGHT = 166;
 const VALUE_SIZE = 11;
 
 /** Yearly light on each mount, stacked by where it comes from: beam, sky, ground. */
@@ -149,7 +149,7 @@ const outsideGroundValues = (
       return {
         row: s.row,
         end: forSpec(mounts[s.row].irradiation_kwh_m2),
-        text: `reflected by the ground ${whole(s.kwh_m2)}`,
+        text: `from the ground ${whole(s.kwh_m2)}`,
         shift: Math.ceil(textWidth(total, 12, true)) + 17,
       };
     });

@@ -216,8 +216,8 @@ const headline = (mounts: readonly MountResult[], losses: readonly StageLoss[][]
   const many = group.length > 3;
   const whom = every ? 'Every mount' : many ? `${group.length} of ${mounts.length} mounts` : listed(group.map((w) => named(w.mount)));
   const lose = every || group.length === 1 ? 'loses' : 'lose';
-  const others = byStage.filter((g) => g !== group)[0]?.[0];
-  return `${whom} ${lose} most kWh at ${group[0].stage}: ${range} per kW a year${others ? `; ${named(others.mount)} at ${others.stage}, ${whole(others.taken ?? 0)}` : ''}`;
+  const rest = byStage.filter((g) => g !== group).map((g) => `${g.length > 2 ? `${g.length} others` : listed(g.map((w) => named(w.mount)))} at ${g[0].stage}`);
+  return `${whom} ${lose} most kWh at ${group[0].stage}: ${range} per kW a year${rest.length > 0 ? `; ${listed(rest)}` : ''}`;
 }; // biome-ignore format: one sentence
 
 const totals = (mounts: readonly MountResult[]): string => {

@@ -21,7 +21,8 @@ export interface Panorama {
   /** Name of the profile that is filled and named. */
   readonly worst: string;
   readonly profiles: readonly PanoramaLine[];
-  readonly paths: readonly PanoramaLine[];
+  /** `label` is what stands on the line. */
+  readonly paths: readonly (PanoramaLine & { readonly label: string })[];
 }
 
 /** A round number of degrees above all that is drawn, so that the highest label has room. */
@@ -140,7 +141,7 @@ const labels = (panorama: Panorama, worst: PanoramaLine, top: number): Layer[] =
   // The longest name first, while there is most room.
   const wanted = [
     ...(several ? [labelOfLine(worst, worstName)] : []),
-    ...panorama.paths.filter((p) => p.pieces.length > 0).map((p) => labelOfLine(p, oneLine(p.name))),
+    ...panorama.paths.filter((p) => p.pieces.length > 0).map((p) => labelOfLine(p, p.label)),
   ];
   const rest = panorama.profiles.filter((p) => p !== worst || !several).map(sampled);
   const boxes = placeOnLines(wanted, [...wanted.map((w) => w.line), ...rest], LABEL_SIZE, {

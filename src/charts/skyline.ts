@@ -21,6 +21,7 @@ export const skylineChart = (comparison: Comparison, skyline: SkylineResult): Ch
   const finding = `${title}.${worstSentence(comparison, skyline)}`;
   const altText = `Panorama of the skyline by true azimuth and elevation with the sun's paths behind it. ${finding} ${figures(comparison, skyline)}`;
   const start = windowStart(comparison.site.latitude_deg);
+  const hidden = hiddenShares(skyline);
   const panorama: Panorama = {
     width: plotWidth(LEFT, RIGHT),
     height: HEIGHT,
@@ -30,8 +31,9 @@ export const skylineChart = (comparison: Comparison, skyline: SkylineResult): Ch
       name: p.name,
       pieces: intoWindow(outlineLine(p.azimuths_deg, p.elevations_deg), start),
     })),
-    paths: skyline.sun_paths.map((p) => ({
+    paths: skyline.sun_paths.map((p, i) => ({
       name: p.name,
+      label: hidden[i] > 0 ? `${oneLine(p.name)}: ${percentSize(hidden[i])} hidden` : oneLine(p.name),
       pieces: sunLines(p.azimuths_deg, p.elevations_deg).flatMap((line) => intoWindow(line, start)),
     })),
   };
@@ -58,15 +60,14 @@ const pointName = (name: string): string => shorten(oneLine(name) || 'unnamed', 
 
 const howToRead = (skyline: SkylineResult): string => {
   const { profiles, worst_point, sun_paths } = skyline;
-  const hidden = hiddenShares(skyline);
+  const anyHidden = hiddenShares(skyline).some((share) => share > 0);
   const others = profiles.length - 1;
   const down = sun_paths.filter((p) => p.azimuths_deg.length === 0).map((p) => oneLine(p.name));
   return [
     others > 0
       ? `Filled: what stands before the sky at ${pointName(worst_point)}, the worst point of the array; thin lines: the ${others === 1 ? 'other point' : `other ${others} points`}.`
       : 'Filled: what stands before the sky.',
-    `Amber: the sun's paths on the solstices and, one line for both equinoxes, on 21 March${hidden.length > 0 ? ', dashed where the skyline hides the sun' : ''}.`,
-    hidden.length > 0 ? `Share of its time up that is hidden: ${listed(hidden)}.` : '',
+    `Amber: the sun's paths on the solstices and, one line for both equinoxes, on 21 March${anyHidden ? '; dashed while hidden (% of the time it is up)' : ''}.`,
     down.length > 0 ? `The sun stays down on ${listed(down)}.` : '',
   ]
     .filter((part) => part !== '')
@@ -96,19 +97,15 @@ const worstSentence = ({ mounts }: Comparison, { profiles, worst_point }: Skylin
   return ` At ${pointName(most.worst_point ?? worst_point)}, the worst of ${profiles.length} points for it, it takes ${percentSize(most.shading_worst_point)} from ${named(most)}.`;
 };
 
-/** `31 % on 21 December`, by path, from the samples at equal times; empty where nothing is hidden. */
-const hiddenShares = ({ profiles, worst_point, sun_paths }: SkylineResult): string[] => {
+/** By path, the share of the time the sun is up in which the worst point's skyline hides it: its samples are at equal times. */
+const hiddenShares = ({ profiles, worst_point, sun_paths }: SkylineResult): number[] => {
   const worst = profiles.find((p) => p.name === worst_point) ?? profiles[0];
   const elevationAt = elevationOf([outlineLine(worst.azimuths_deg, worst.elevations_deg)]);
-  const shares = sun_paths
-    .filter((p) => p.elevations_deg.length > 0)
-    .map(({ name, azimuths_deg, elevations_deg }) => ({
-      name: oneLine(name),
-      share: elevations_deg.filter((e, i) => e < elevationAt(azimuths_deg[i])).length / elevations_deg.length,
-    }));
-  return shares.some(({ share }) => share > 0)
-    ? shares.map(({ name, share }) => `${share > 0 ? percentSize(share) : 'none'} on ${name}`)
-    : [];
+  return sun_paths.map(({ azimuths_deg, elevations_deg }) =>
+    elevations_deg.length === 0
+      ? 0
+      : elevations_deg.filter((e, i) => e < elevationAt(azimuths_deg[i])).length / elevations_deg.length,
+  );
 };
 
 const figures = ({ mounts }: Comparison, { profiles, sun_paths }: SkylineResult): string => {

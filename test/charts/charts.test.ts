@@ -123,7 +123,10 @@ test('the title of the skyline tells who loses most and least, with the worst of
   const even = SKYLINES['six points']();
   const mounts = even.mounts.map((m) => ({ ...m, shading_worst_point: m.shading_fraction * 0.97 }));
   expect(chartSpecs({ ...even, mounts }).find((c) => c.name === 'skyline')!.finding).not.toContain('worst of');
-  expect(chart('polar day and night', 'skyline').spec.title).toMatchObject({ subtitle: expect.arrayContaining([expect.stringContaining('The sun stays down on 21 December')]) });
+  expect((chart('polar day and night', 'skyline').spec.title as { subtitle: string[] }).subtitle.join(' ')).toContain('The sun stays down on 21 December');
+  // One angle of 90 degrees all round hides the sun whenever it is up.
+  for (const day of ['21 June', '21 March', '21 December']) expect(JSON.stringify(chart('one angle all round', 'skyline').spec)).toContain(`${day}: 100\u00A0% hidden`);
+  expect(JSON.stringify(chart('open and dark', 'skyline').spec)).not.toMatch(/hidden|dashed/);
 }); // biome-ignore format: a sentence a line
 
 test('every line of the skyline chart stays inside its panorama, the sun in the middle', () => {
