@@ -40,7 +40,9 @@ test('a turntable at its best tilt collects more than at any other, and stands i
     best.stages.reduce((p, s) => p * s.efficiency, best.irradiation_kwh_m2) / best.energy_kwh_per_kw,
   ).toBeCloseTo(1, 12);
   const memo = memoMarkdown(c, EXTRAS);
-  expect(memo).toMatch(/\| table \| turntable \| turns about an upright axis at [\d.]+° tilt \| alone at [\d.]+° tilt/);
+  expect(memo).toMatch(
+    /\| table \| turntable \| turns about an upright axis at [\d.]+° tilt \| alone at [\d.]+° tilt/,
+  );
   const blanks = c.not_counted.map(({ what }) => what);
   expect(blanks).toContain('mounts.table.drive.working');
   expect(blanks).not.toContain('wind stow of table');
