@@ -101,6 +101,8 @@ export {
   exposureCoefficient,
   type HighestEdge,
   highestEdge,
+  type StowSpec,
+  stowHours,
   type VelocityPressure,
   velocityPressure,
   type WindSpec,
@@ -139,6 +141,7 @@ export {
   planeViews,
   type SkylineShade,
   type Stage,
+  type StuckAt,
   skylineShade,
 } from './energy/index.ts';
 

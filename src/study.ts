@@ -50,7 +50,7 @@ export const compareMounts = (study: Study, raw: RawYear, survey: SiteSurvey = N
   // advice
   const counted = { ...setting, runs, reference };
   const blanks = notCounted(counted);
-  const findings = [...ready.found.findings, ...survey.findings];
+  const findings = [...ready.found.findings, ...survey.findings, ...stowFindings(setting)];
   const adviceInput = {
     mounts: mounts.map((result, i) => adviceMount(result, runs[i], study, array)),
     referenceId: reference.mount.id,
@@ -106,6 +106,20 @@ export const compareMounts = (study: Study, raw: RawYear, survey: SiteSurvey = N
   };
 };
 
+/** A stow that cannot be counted must not pass for one that costs nothing. */
+const stowFindings = ({ study, year }: Setting): Finding[] => {
+  const parking = study.mounts.filter(({ stow }) => stow !== null).map(({ id }) => id);
+  if (parking.length === 0 || year.windMs) return [];
+  return [
+    {
+      code: 'stow-without-wind',
+      severity: 'warning',
+      text: `The weather file has no wind, so the stow of ${parking.join(', ')} is not counted, which flatters it.`,
+      fix: 'Use a year with wind at 10 m.',
+    },
+  ];
+};
+
 /** For each tracker, the array on the reference mount that delivers as much under the same inverter. */
 const fixedArraysInstead = (
   { study, array }: Setting,
@@ -155,6 +169,7 @@ const adviceMount = (result: MountResult, run: MountRun, study: Study, array: Ar
     }),
   ) as Record<SkyModel, AdviceMount['by_sky'][SkyModel]>,
   reading_error: readingError(result),
+  snow_counted: run.mount.snow !== null,
   downtime_blank: isTracker(run.geometry) && (run.mount.drive?.working ?? null) === null,
 });
 

@@ -39,6 +39,8 @@ export type AdviceMount = Readonly<
   readonly reading_error: number;
   /** True for a tracker whose `drive.working` is blank: then its downtime is not counted. */
   readonly downtime_blank: boolean;
+  /** False where the mount's snow is blank. */
+  readonly snow_counted: boolean;
 };
 
 export interface AdviceInput {

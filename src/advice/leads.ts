@@ -70,6 +70,10 @@ const caps = (chosen: AdviceMount, other: AdviceMount, ranking: Ranking): string
   if (isTracker(chosen) && chosen.downtime_blank) {
     clauses.push(`downtime of ${nameOf(chosen)} is blank, and blank is not zero`);
   }
+  if (chosen.snow_counted !== other.snow_counted) {
+    const [counted, blank] = chosen.snow_counted ? [chosen, other] : [other, chosen];
+    clauses.push(`snow is counted for ${nameOf(counted)} and blank for ${nameOf(blank)}`);
+  }
   return clauses;
 };
 

@@ -19,6 +19,8 @@ export interface ChainSpec {
   readonly windFactor: number;
   readonly heatPerK: number;
   readonly losses: LossSpec;
+  /** Share of each month's light that snow takes, twelve of them 0..1; null: not counted. */
+  readonly snow: readonly number[] | null;
   /** Inverter's AC rating per kW of DC; null: no ceiling. */
   readonly ceilingKwPerKw: number | null;
   readonly drive: DriveSpec | null;
@@ -37,12 +39,20 @@ export type StageName =
   | 'incidence'
   | 'heat'
   | 'dirt'
+  | 'snow'
   | 'module spread'
   | 'cables'
   | 'conversion'
   | 'inverter ceiling'
+  | 'stow'
   | 'drive'
   | 'downtime';
+
+/** A plane that is parked in some hours: which (1), and its views while it is. */
+export interface Parked {
+  readonly stowed: Uint8Array;
+  readonly views: PlaneViews;
+}
 
 /** What one kW of DC rating delivers. */
 export interface Delivered {
@@ -55,8 +65,14 @@ export interface Delivered {
   readonly stages: readonly Stage[];
   readonly energyKwhPerKw: number;
   readonly energyMonthlyKwhPerKw: readonly number[];
-  /** AC power before the inverter's ceiling, kW per kW, hour by hour. */
+  /** AC power before the inverter's ceiling, kW per kW, hour by hour; in parked hours that of the parked plane. */
   readonly uncappedKwPerKw: Float64Array;
+  /** What parking takes by month, before the drive's own use and downtime; negative where it gives. Null where not counted. */
+  readonly lostToStowMonthlyKwhPerKw: readonly number[] | null;
+  /** What one kW would deliver if its tracker stood dead all year; null where downtime is not counted. */
+  readonly deadKwhPerKw: number | null;
+  /** That over what the tracker delivers while it works; null where downtime is not counted. */
+  readonly keptWhileDead: number | null;
 }
 
 /** One pass over the year: sums at each depth, kWh per kW of DC rating (1 kWh/m2 of light is 1 kWh per kW). */
@@ -66,6 +82,8 @@ interface YearPass {
   readonly rows: number;
   readonly lit: number;
   readonly heated: number;
+  /** What of `heated` snow leaves. */
+  readonly clear: number;
   /** AC energy under the ceiling, by month. */
   readonly ac: number[];
   /** AC power before the ceiling, hour by hour, kW per kW. */
@@ -82,11 +100,23 @@ const passThroughYear = (sky: SkyHours, views: PlaneViews, spec: ChainSpec): Yea
   const kept = constantShares(spec.losses).reduce((product, [, share]) => product * (1 - share), 1);
   const uncapped = new Float64Array(sky.direct.length);
   const twelve = () => new Array<number>(12).fill(0);
-  const pass = { open: twelve(), skyline: twelve(), rows: 0, lit: 0, heated: 0, ac: twelve(), uncapped };
+  const pass = {
+    open: twelve(),
+    skyline: twelve(),
+    rows: 0,
+    lit: 0,
+    heated: 0,
+    clear: 0,
+    ac: twelve(),
+    uncapped,
+  };
   for (let month = 0; month < 12; month++) {
     let open = 0;
     let pastSkyline = 0;
     let ac = 0;
+    let heated = 0;
+    const clear = 1 - (spec.snow?.[month] ?? 0);
+    const keptClear = kept * clear;
     const end = MONTH_FIRST_DAY[month + 1] * 24;
     for (let h = MONTH_FIRST_DAY[month] * 24; h < end; h++) {
       const light = lightAt(sky, views.open, h) / 1000;
@@ -100,15 +130,17 @@ const passThroughYear = (sky: SkyHours, views: PlaneViews, spec: ChainSpec): Yea
         const moduleC = moduleTemperatureC(temperatureC[h], behindRows * 1000, wind, u0, u1);
         dc *= Math.max(0, powerAtTemperature(moduleC, spec.heatPerK));
       }
-      const power = dc * kept;
+      const power = dc * keptClear;
       open += light;
       pastSkyline += seen;
       pass.rows += behindRows;
       pass.lit += lit;
       pass.heated += dc;
+      heated += dc;
       uncapped[h] = power;
       ac += Math.min(power, ceiling);
     }
+    pass.clear += heated * clear;
     pass.open[month] = open;
     pass.skyline[month] = pastSkyline;
     pass.ac[month] = ac;
@@ -130,17 +162,21 @@ const constantShares = (losses: LossSpec): [StageName, number][] =>
 const sum = (monthly: readonly number[]): number => monthly.reduce((total, month) => total + month, 0);
 
 /**
- * From the views of a plane and a sky to delivered AC energy, stage by stage: skyline, rows, incidence, heat, dirt, module
- * spread, cables, conversion, the inverter's ceiling hour by hour, the drive's own use, and downtime.
+ * From the views of a plane and a sky to delivered AC energy, stage by stage: skyline, rows, incidence, heat, dirt, snow,
+ * module spread, cables, conversion, the inverter's ceiling hour by hour, stow, the drive's own use, and downtime.
+ * A parked plane goes through the same chain; stow is the step from a plane that never parks to one that does.
  * A tracker that does not work delivers what it does where it is stuck: energy is `working` times the tracker's own
  * and `1 - working` times the stuck plane's (expected value; failures are taken as even over the year).
- * @param stuck views of the plane where a dead tracker lies; needed where `drive.working` is given
+ * @param stuck views of the planes where a dead tracker may stand, each as likely as the others; needed where
+ *   `drive.working` is given
+ * @param parked null: never parked
  */
 export const deliver = (
   sky: SkyHours,
   views: PlaneViews,
   spec: ChainSpec,
-  stuck: PlaneViews | null = null,
+  stuck: readonly PlaneViews[] = [],
+  parked: Parked | null = null,
 ): Delivered => {
   const pass = passThroughYear(sky, views, spec);
   const irradiationKwhM2 = sum(pass.open);
@@ -154,17 +190,29 @@ export const deliver = (
   if (views.rows !== views.skyline) stage('rows', pass.rows);
   stage('incidence', pass.lit);
   if (spec.ambient.temperatureC) stage('heat', pass.heated);
-  for (const [name, share] of constantShares(spec.losses)) stage(name, now * (1 - share));
+  const shares = constantShares(spec.losses);
+  for (const [name, share] of shares) if (name === 'dirt') stage(name, now * (1 - share));
+  if (spec.snow) stage('snow', pass.heated > 0 ? (now * pass.clear) / pass.heated : 0);
+  for (const [name, share] of shares) if (name !== 'dirt') stage(name, now * (1 - share));
   let ac = pass.ac;
   if (spec.ceilingKwPerKw !== null) stage('inverter ceiling', sum(ac));
+  let lostToStow: number[] | null = null;
+  if (parked) {
+    lostToStow = park(pass.uncapped, passThroughYear(sky, parked.views, spec).uncapped, parked.stowed, spec);
+    ac = ac.map((kwh, month) => kwh - (lostToStow as number[])[month]);
+    stage('stow', sum(ac));
+  }
   const ownUse = spec.drive?.ownUse ?? null;
   if (ownUse !== null) {
     ac = ac.map((kwh) => kwh * (1 - ownUse));
     stage('drive', sum(ac));
   }
   const working = spec.drive?.working ?? null;
-  if (working !== null && stuck) {
-    const dead = passThroughYear(sky, stuck, spec).ac;
+  let [deadKwhPerKw, keptWhileDead]: (number | null)[] = [null, null];
+  if (working !== null && stuck.length > 0) {
+    const dead = meanOfMonths(stuck.map((views) => passThroughYear(sky, views, spec).ac));
+    deadKwhPerKw = sum(dead);
+    keptWhileDead = now > 0 ? deadKwhPerKw / now : null;
     ac = ac.map((kwh, month) => working * kwh + (1 - working) * dead[month]);
     stage('downtime', sum(ac));
   }
@@ -176,8 +224,33 @@ export const deliver = (
     energyKwhPerKw: sum(ac),
     energyMonthlyKwhPerKw: ac,
     uncappedKwPerKw: pass.uncapped,
+    lostToStowMonthlyKwhPerKw: lostToStow,
+    deadKwhPerKw,
+    keptWhileDead,
   };
 };
+
+/** Puts the parked plane's power in the parked hours of `uncapped`; returns what that takes under the ceiling, by month. */
+const park = (
+  uncapped: Float64Array,
+  still: Float64Array,
+  stowed: Uint8Array,
+  { ceilingKwPerKw }: ChainSpec,
+): number[] => {
+  const ceiling = ceilingKwPerKw ?? Number.POSITIVE_INFINITY;
+  const lost = new Array<number>(12).fill(0);
+  for (let month = 0; month < 12; month++)
+    for (let h = MONTH_FIRST_DAY[month] * 24; h < MONTH_FIRST_DAY[month + 1] * 24; h++) {
+      if (stowed[h] === 0) continue;
+      lost[month] += Math.min(uncapped[h], ceiling) - Math.min(still[h], ceiling);
+      uncapped[h] = still[h];
+    }
+  return lost;
+};
+
+/** Month by month, the mean of years that are equally likely. */
+const meanOfMonths = (years: readonly (readonly number[])[]): number[] =>
+  years[0].map((_, month) => years.reduce((total, year) => total + year[month], 0) / years.length);
 
 /** Yearly AC energy of an array of `dcKw` under an inverter of `inverterKw` (null: none), kWh, from one kW's hours. */
 export const energyUnderInverter = (

@@ -7,11 +7,25 @@ export interface LossSpec {
   readonly conversion: number | null;
 }
 
+/**
+ * Where a dead tracker stands: flat, or as flat as it goes; facing the equator at the tilt that it keeps (turntable);
+ * where it stopped, on average over every moment of daylight; turned about its axis (degrees, signed as for
+ * `pointSingleAxis`); or at a tilt and azimuth (dual-axis).
+ */
+export type StuckAt =
+  | 'flat'
+  | 'equator'
+  | 'average'
+  | { readonly turnDeg: number }
+  | { readonly tiltDeg: number; readonly azimuthDeg: number };
+
 export interface DriveSpec {
   /** Share of the time that the tracker works, 0..1. */
   readonly working: number | null;
-  /** How a tracker stands that does not work; a turntable faces the equator. Null with `working` blank. */
-  readonly stuck: 'flat' | 'equator' | null;
+  /** What a tracker that does not work does; null with `working` blank. */
+  readonly stuck: StuckAt | null;
+  /** Repair visits a year: listed, not priced. */
+  readonly visits: number | null;
   /** Share of the yield that the drive itself uses. */
   readonly ownUse: number | null;
 }

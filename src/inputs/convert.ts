@@ -6,6 +6,7 @@ export const KIND_OF_UNIT = {
   'm/s': 'speed',
   deg: 'angle',
   min: 'time',
+  h: 'time',
 } as const;
 export type Unit = keyof typeof KIND_OF_UNIT;
 
@@ -29,6 +30,7 @@ const SPELLINGS: readonly (readonly [RegExp, string])[] = [
   [/^(?:′|’)$/, 'ft'],
   [/^(?:″|”)$/, 'in'],
   [/^(?:minutes?|mins?)$/i, 'min'],
+  [/^(?:hours?|hrs?|h)$/i, 'h'],
 ];
 
 const respell = (unit: string): string => {

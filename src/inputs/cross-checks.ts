@@ -1,6 +1,7 @@
 import type { Fault } from './fault.ts';
 import { isGroup, rawAt } from './fault.ts';
 import { nearest } from './nearest.ts';
+import { SNOW_EXPECTED, SNOW_FIX } from './schema/snow.ts';
 import { shown } from './shown.ts';
 import { surveyFaults } from './survey-checks.ts';
 import type { Path, Position } from './text/place.ts';
@@ -93,6 +94,22 @@ const axisAndGround = (mounts: readonly unknown[]): Fault[] =>
           },
         ],
   );
+
+/** Braces without a month say neither that there is snow nor that there is none. */
+const emptySnow = (mounts: readonly unknown[]): Fault[] =>
+  mounts.flatMap((mount, i): Fault[] => {
+    const snow = rawAt(mount, ['snow']);
+    if (!isGroup(snow) || Object.values(snow).some((share) => share !== undefined)) return [];
+    return [
+      {
+        code: 'wrong-value',
+        path: ['mounts', i, 'snow'],
+        expected: SNOW_EXPECTED,
+        found: 'a group without keys',
+        fix: SNOW_FIX,
+      },
+    ];
+  });
 
 const asWhole = (raw: unknown): number => {
   const value = typeof raw === 'string' ? Number.parseFloat(raw) : raw;
@@ -188,6 +205,7 @@ export const crossFaults = (raw: unknown, at: (path: Path) => Position): Fault[]
     ...drives(mounts),
     ...axisAndGround(mounts),
     ...reach(mounts),
+    ...emptySnow(mounts),
     ...lateRenewals(raw, mounts),
     ...reference(raw, mounts),
     ...lightColumns(raw),

@@ -15,6 +15,7 @@ const EXAMPLES: Record<string, string> = {
   points: 'points: [ [90, 12], [105, 9] ]',
   obstacles: 'obstacles: [ { height: 6 m, distance: 20 m, from: 100, to: 130 } ]',
   bearing: 'bearing: { magnetic: 150, dated: 2026-05-01 }',
+  snow: 'snow: { Jan: 20 %, Feb: 15 % }',
   slope: 'slope: { reading: 3:12 }',
 };
 const A_MOUNT = '{ id: ground, kind: fixed-tilt }';

@@ -69,7 +69,6 @@ export const unknownKeyFix = (
   const glued = /^([\w$]+):(.+)$/.exec(key);
   if (glued && value === undefined) return `Put a space after the colon: ${glued[1]}: ${glued[2]}.`;
   const typo = nearest(key, known, 1);
-  if (typo) return `Did you mean ${typo}?`;
   const places = homes.flatMap(({ schema, name }) =>
     groupsOf(schema, '')
       .filter(({ keys }) => keys.includes(key))
@@ -77,6 +76,12 @@ export const unknownKeyFix = (
         path === '' ? name || 'the top level of the study' : `${path}${name && ` of ${name}`}`,
       ),
   );
+  if (typo) {
+    // A whole key of one kind of mount may be a slip away from one of another: stow and snow.
+    const kinds = places.filter((place) => homes.some(({ name }) => name === place));
+    const elsewhere = kinds.length > 0 ? ` ${key} belongs to ${listed([...new Set(kinds)])}.` : '';
+    return `Did you mean ${typo}?${elsewhere}`;
+  }
   if (places.length > 0)
     return `${key} belongs to ${listed([...new Set(places)])}; move it there or remove it.`;
   const close = nearest(key, known);

@@ -5,7 +5,7 @@ import type { MountGeometry, MountLengths } from '../mounts/index.ts';
 import type { HourLabel, Objective, Place, SkyModel } from '../shared/index.ts';
 import type { BearingReading, CalendarDate, Obstacle, SkylinePoint, Slope } from '../survey/index.ts';
 import type { TableColumns } from '../weather/index.ts';
-import type { WindSpec } from '../wind/index.ts';
+import type { StowSpec, WindSpec } from '../wind/index.ts';
 
 /** What turns the bearings of one reading from magnetic to true: a date (with the place), or the declination itself. */
 export interface North {
@@ -47,6 +47,10 @@ export interface StudyMount {
   readonly lengths: MountLengths;
   /** Null for mounts without a drive. */
   readonly drive: DriveSpec | null;
+  /** Null for mounts that do not move, and where blank: it never parks, which is listed as not counted. */
+  readonly stow: StowSpec | null;
+  /** Share of each month's light that snow takes, January first; null where blank. */
+  readonly snow: readonly number[] | null;
   readonly cost: CostSpec | null;
 }
 

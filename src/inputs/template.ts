@@ -66,6 +66,11 @@ array:
 # slope: { rise: 4 ft, run: 12 ft, rise_error: 1 in, run_error: 1 in } # the run is level
 # gcr is the slant length of a row over the distance from row to row. Give it for all ground mounts or for none:
 # where only one side has rows, no clear lead is claimed. Every price here is made up: put your quotes in.
+# snow is what snow on the modules takes of each month's light: months left out have none, or a list of twelve. Any
+# mount may have it; give it for all or for none. Blank: not counted.
+# A dead tracker may also stand at a known angle: about one axis, or for a tracker that faces the sun.
+# drive: { working: 97 %, stuck: { turn: 45, faces: east } }
+# drive: { working: 97 %, stuck: { tilt: 30, azimuth: 90 } }
 mounts:
   - id: ground
     kind: fixed-tilt
@@ -74,6 +79,7 @@ mounts:
     rows: { gcr: 0.45 }
 #    slant: 3.5 m       # length of the rack along its slope. Blank: height is not checked
 #    lower_edge: 0.8 m  # height of its lower edge above ground
+#    snow: { Jan: 20 %, Feb: 15 %, Mar: 0, Apr: 0, May: 0, Jun: 0, Jul: 0, Aug: 0, Sep: 0, Oct: 0, Nov: 5 %, Dec: 20 % }
 #    cost: { capital_per_kw: 1700, upkeep_per_kw: 15 } # blank: mounts are ranked by energy
   - id: tracker
     kind: single-axis
@@ -87,8 +93,16 @@ mounts:
 #    axis_height: 1.5 m # above ground
 #    drive:
 #      working: 97 %  # share of the time. Blank: downtime is not counted, which flatters the tracker
-#      stuck: flat    # how it stands when it does not work; needed with working
+#      stuck: flat    # how it stands when it does not work: flat, or average for where it stopped; needed with working
+#      visits: 2      # repair visits a year: listed, not priced
 #      own_use: 0.3 % # of the yield, used by the drive itself
+#    stow: # parking in wind. Blank: not counted, which flatters the tracker
+#      gust: 18 m/s    # it parks when the weather's hourly wind at 10 m times gust_factor reaches this
+#      gust_factor: 1.5 # gust over hourly mean (default 1.5, an assumption)
+#      release: 12 m/s # it goes back to work once gusts stay below this. Blank: as gust
+#      hold: 3 h       # for so long. Blank: 0
+#      angle: 30       # turn from flat while parked; on a mast, tilt towards the equator. Blank: 0, flat
+#      faces: west     # the side to which it is turned
 #    cost: # those without _per_kw are for the whole array
 #      capital_per_kw: 2100
 #      capital: 500

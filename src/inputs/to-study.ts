@@ -1,5 +1,5 @@
 import type { CostSpec } from '../cost/index.ts';
-import type { ArraySpec, DriveSpec } from '../energy/index.ts';
+import type { ArraySpec, DriveSpec, StuckAt } from '../energy/index.ts';
 import {
   axisTiltOnSlope,
   type DualAxis,
@@ -9,16 +9,15 @@ import {
   type SingleAxis,
 } from '../mounts/index.ts';
 import type { TableColumn, TableColumns } from '../weather/index.ts';
-import type { WindSpec } from '../wind/index.ts';
+import type { StowSpec, WindSpec } from '../wind/index.ts';
+import { DEFAULT_ALBEDO, DEFAULT_AXIS_AZIMUTH_DEG, DEFAULT_SWING_DEG } from './defaults.ts';
+import type { Side } from './fields/angles.ts';
 import type { RawMount } from './schema/mounts.ts';
+import { monthlyShares } from './schema/snow.ts';
 import type { RawStudy } from './schema/study.ts';
+import { sideTurn } from './side-turn.ts';
 import type { MountReadings, Study, StudyMount } from './study-file.ts';
 import { readingsOf, skylinesOf } from './to-readings.ts';
-
-/** Common practice, no source: grass and bare soil lie between 0.15 and 0.25. */
-const DEFAULT_ALBEDO = 0.2;
-/** Common practice, no source: the usual limit of a horizontal tracker. */
-const DEFAULT_SWING_DEG = 60;
 
 /** Only single-axis rows turn back; other rows take the shade as it falls. */
 const rowsOf = (
@@ -37,7 +36,11 @@ type RawSingleAxis = Extract<RawMount, { kind: 'single-axis' }>;
 /** What the ground says of a tracker on it: the tilt of its axis is never given beside it (checked before). */
 const onGround = ({ axis, ground, slope_limits }: RawSingleAxis): Partial<SingleAxis> => ({
   ...(ground && {
-    axisTiltDeg: axisTiltOnSlope(ground.slope, ground.falls_toward, axis?.azimuth ?? 180),
+    axisTiltDeg: axisTiltOnSlope(
+      ground.slope,
+      ground.falls_toward,
+      axis?.azimuth ?? DEFAULT_AXIS_AZIMUTH_DEG,
+    ),
     ground: { slopeDeg: ground.slope, fallsTowardDeg: ground.falls_toward },
   }),
   ...(slope_limits && {
@@ -74,7 +77,7 @@ const geometryOf = (mount: RawMount, readings: MountReadings | null): MountGeome
     case 'single-axis':
       return {
         kind: mount.kind,
-        axisAzimuthDeg: mount.axis?.azimuth ?? 180,
+        axisAzimuthDeg: mount.axis?.azimuth ?? DEFAULT_AXIS_AZIMUTH_DEG,
         axisTiltDeg: mount.axis?.tilt ?? 0,
         swingDeg: mount.swing ?? DEFAULT_SWING_DEG,
         rows: rowsOf(mount.rows, 'backtrack'),
@@ -100,12 +103,40 @@ const lengthsOf = (mount: RawMount): MountLengths => ({
   airBehindM: ('air_behind' in mount ? mount.air_behind : null) ?? null,
 });
 
+type RawTracker = Extract<RawMount, { kind: 'single-axis' | 'dual-axis' | 'turntable' }>;
+
+/** A turn with its sign from the side that it faces, once the axis is known. */
+const signed = (mount: RawTracker, turnDeg: number, faces: Side | undefined): number => {
+  const azimuthDeg = mount.kind === 'single-axis' ? mount.axis?.azimuth : undefined;
+  return (faces && sideTurn(turnDeg, faces, azimuthDeg ?? DEFAULT_AXIS_AZIMUTH_DEG)) ?? turnDeg;
+};
+
+const stuckOf = (mount: RawTracker): StuckAt | null => {
+  const stuck = mount.drive?.stuck;
+  if (stuck === undefined || typeof stuck === 'string') return stuck ?? null;
+  if ('tilt' in stuck) return { tiltDeg: stuck.tilt, azimuthDeg: stuck.azimuth };
+  return { turnDeg: signed(mount, stuck.turn, stuck.faces) };
+};
+
+const stowOf = (mount: RawMount): StowSpec | null => {
+  if (!('stow' in mount) || !mount.stow) return null;
+  const { stow } = mount;
+  return {
+    gustMs: stow.gust,
+    gustFactor: stow.gust_factor ?? null,
+    releaseMs: stow.release ?? null,
+    holdH: stow.hold ?? 0,
+    angleDeg: signed(mount, stow.angle ?? 0, 'faces' in stow ? stow.faces : undefined),
+  };
+};
+
 /** Every tracker has a drive, even where the study says nothing of it. */
 const driveOf = (mount: RawMount): DriveSpec | null =>
   mount.kind === 'single-axis' || mount.kind === 'dual-axis' || mount.kind === 'turntable'
     ? {
         working: mount.drive?.working ?? null,
-        stuck: mount.drive?.stuck ?? null,
+        stuck: stuckOf(mount),
+        visits: mount.drive?.visits ?? null,
         ownUse: mount.drive?.own_use ?? null,
       }
     : null;
@@ -130,6 +161,8 @@ const mountOf = (mount: RawMount): StudyMount => {
     readings,
     lengths: lengthsOf(mount),
     drive: driveOf(mount),
+    stow: stowOf(mount),
+    snow: mount.snow === undefined ? null : monthlyShares(mount.snow),
     cost: costOf(mount),
   };
 };

@@ -9,4 +9,6 @@ export * from './row-view.ts';
 export * from './single-axis.ts';
 export * from './slope.ts';
 export type * from './spec.ts';
+export * from './still-tracker.ts';
+export * from './stopped-at-random.ts';
 export * from './turntable.ts';

@@ -21,6 +21,19 @@ export const nearestAzimuth = (turns: TurnRange | null, azimuthDeg: number): num
   return wrap360(past - width < 360 - past ? turns.toDeg : turns.fromDeg);
 };
 
+/** The plane within reach that faces nearest to a direction, by the rule of {@link pointOnMast}. */
+export const nearestPlane = (
+  { turns, elevation }: MastReach,
+  azimuthDeg: number,
+  elevationDeg: number,
+): { tiltDeg: number; azimuthDeg: number } => {
+  const facedAzimuthDeg = nearestAzimuth(turns, azimuthDeg);
+  const ahead = cosDeg(elevationDeg) * cosDeg(facedAzimuthDeg - azimuthDeg);
+  const bestDeg = atan2Deg(Math.max(0, sinDeg(elevationDeg)), ahead);
+  const facedDeg = Math.min(elevation.highestDeg, Math.max(elevation.lowestDeg, bestDeg));
+  return { tiltDeg: 90 - facedDeg, azimuthDeg: facedAzimuthDeg };
+};
+
 /**
  * A plane on a mast that faces as near to the sun as its reach allows. Seen at azimuth A and elevation E of its normal, the
  * cosine of incidence is cos h cos E cos(A - a) + sin h sin E for a sun at azimuth a and elevation h (Duffie & Beckman,

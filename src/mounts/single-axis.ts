@@ -35,8 +35,8 @@ export const trackerRowShade = (
   return cosIncidence > 0 ? rowShade(up, cosIncidence, gcr) : 0;
 };
 
-/** The way a tracker's plane faces in one sample, 0..360: its normal turned out of the axis's frame. */
-const facingAt = (sun: SunHours, mount: SingleAxis, s: number): number => {
+/** Turn of a tracker in one sample, degrees, within its swing; positive as for {@link pointSingleAxis}. */
+export const turnAt = (sun: SunHours, mount: SingleAxis, s: number): number => {
   const [sinAz, cosAz] = [sinDeg(mount.axisAzimuthDeg), cosDeg(mount.axisAzimuthDeg)];
   const [sinAxis, cosAxis] = [sinDeg(mount.axisTiltDeg), cosDeg(mount.axisTiltDeg)];
   const across = sun.east[s] * cosAz - sun.north[s] * sinAz;
@@ -46,7 +46,13 @@ const facingAt = (sun: SunHours, mount: SingleAxis, s: number): number => {
     mount.rows?.lowSun === 'backtrack'
       ? backtrackTurn(trueTurnDeg, mount.rows.gcr, crossAxisTiltOf(mount))
       : trueTurnDeg;
-  const turnDeg = Math.max(-mount.swingDeg, Math.min(mount.swingDeg, free));
+  return Math.max(-mount.swingDeg, Math.min(mount.swingDeg, free));
+};
+
+/** The way a plane turned about an axis faces, 0..360: its normal taken out of the axis's frame. */
+export const facingOfTurn = (mount: SingleAxis, turnDeg: number): number => {
+  const [sinAz, cosAz] = [sinDeg(mount.axisAzimuthDeg), cosDeg(mount.axisAzimuthDeg)];
+  const sinAxis = sinDeg(mount.axisTiltDeg);
   const [aside, forward] = [sinDeg(turnDeg), cosDeg(turnDeg) * sinAxis];
   return wrap360(atan2Deg(aside * cosAz + forward * sinAz, forward * cosAz - aside * sinAz));
 };
@@ -62,7 +68,7 @@ const facingAt = (sun: SunHours, mount: SingleAxis, s: number): number => {
  */
 export const pointSingleAxis = (sun: SunHours, mount: SingleAxis, used: Pointing | null = null): Pointing => {
   const gcr = mount.rows?.gcr ?? null;
-  const pointing = emptyPointing(sun, gcr !== null, (s) => facingAt(sun, mount, s), used);
+  const pointing = emptyPointing(sun, gcr !== null, (s) => facingOfTurn(mount, turnAt(sun, mount, s)), used);
   const { cosIncidence, cosTilt, sinTilt, neighbours } = pointing;
   const [sinAz, cosAz] = [sinDeg(mount.axisAzimuthDeg), cosDeg(mount.axisAzimuthDeg)];
   const [sinAxis, cosAxis] = [sinDeg(mount.axisTiltDeg), cosDeg(mount.axisTiltDeg)];

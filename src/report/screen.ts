@@ -1,10 +1,12 @@
 import { type Comparison, darkMonthsWords, isNothing, monthInFull } from '../shared/index.ts';
 import { columnsOf, hanging, shorten, wrap } from './columns.ts';
 import { costLack } from './cost-columns.ts';
+import { downtimeSentences } from './downtime-words.ts';
 import { gainSentences } from './gain-words.ts';
 import { formatDaily, formatNumber, formatPlace } from './numbers.ts';
 import { capitalised, oneLine } from './plain-text.ts';
 import { tableLines, tableNotes } from './screen-table.ts';
+import { stowSentences } from './stow-words.ts';
 import { shadingLine } from './survey-words.ts';
 import { showsWind, windDeferral } from './wind-words.ts';
 import { mountById, mountNames, nameOf, ratingWords, yearWords } from './words.ts';
@@ -23,6 +25,8 @@ const TITLE_COLUMNS = 48;
 /** A screen has room for so many paragraphs of one sort; the memo has them all. */
 const MOST_NOT_COUNTED = 4;
 const MOST_DOUBTS = 2;
+const MOST_DOWNTIMES = 3;
+const MOST_STOWS = 2;
 const MOST_GAINS = 3;
 const MOST_SWITCH_POINTS = 3;
 /** The design's limit for a clock that a recommendation can stand on. */
@@ -144,6 +148,8 @@ export const screenTable = (
     ...insteadLines(c, width),
     '',
     ...(lack === null ? [] : hanging('Costs', lack, INDENT, width)),
+    ...namedLines('Stow', stowSentences(c), MOST_STOWS, width),
+    ...namedLines('Downtime', downtimeSentences(c), MOST_DOWNTIMES, width),
     ...namedLines(
       'Not counted',
       c.not_counted.map(({ what, effect }) => (effect ? `${what}: ${effect}` : what)),

@@ -6,7 +6,8 @@ import { isGrade } from './limit-words.ts';
 export const showsWind = (c: Comparison): boolean =>
   c.wind_basis !== null ||
   c.mounts.some(
-    ({ limits, wind }) =>
+    ({ limits, wind, stow }) =>
+      stow !== null ||
       limits.some((limit) => limit.bound === 'most' && !isGrade(limit) && limit.status !== 'not_checked') ||
       wind.highest_edge_m !== null ||
       wind.roof_projection_m !== null ||

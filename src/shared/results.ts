@@ -144,6 +144,45 @@ export interface MountResult {
   /** Product of the efficiencies times `irradiation_kwh_m2` is `energy_kwh_per_kw`. Counted stages only. */
   stages: { name: string; efficiency: number; kwh_per_kw_after: number; source: string }[];
   weakest_stage: string;
+  /** What snow on the modules takes; null where that is not counted. */
+  snow: {
+    /** Twelve shares of each month's light, as given. */
+    monthly_shares: number[];
+    /** In its place in the chain, before later stages. */
+    taken_kwh_per_kw: number;
+    /** Of a rack above ground, as given: room for snow that slides off. Null where blank. */
+    lower_edge_m: number | null;
+  } | null;
+  /** When a tracker parks in wind and what that takes; null where that is not counted. */
+  stow: {
+    /** Gusts at 10 m: it parks at this one and is released below that one, after so many hours. */
+    gust_ms: number;
+    gust_factor: number;
+    release_ms: number;
+    hold_h: number;
+    /** How it stands while it is parked, in words. */
+    parked: string;
+    /** Parked hours, those of them with daylight, runs of them, and the longest run. */
+    hours: number;
+    daylight_hours: number;
+    events: number;
+    longest_h: number;
+    /** What parking takes, before the drive's own use and downtime; negative where it gives. */
+    lost_kwh_per_kw: number;
+    lost_monthly_kwh_per_kw: number[];
+  } | null;
+  /** What a tracker does while it does not work; null where that is not counted. */
+  downtime: {
+    /** Share of the time that it works. */
+    working: number;
+    /** How it stands while it does not, in words. */
+    stuck: string;
+    /** kWh per kW that it would deliver in a year of standing so, and that over a year of working; null without light. */
+    stuck_kwh_per_kw: number;
+    kept_while_stuck: number | null;
+  } | null;
+  /** Repair visits a year, as given: listed, not priced. */
+  visits_per_year: number | null;
   capital: number | null;
   capital_per_kw: number | null;
   upkeep_per_year: number | null;

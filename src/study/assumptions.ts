@@ -2,6 +2,7 @@ import { crossAxisTiltOf, isTracker } from '../mounts/index.ts';
 import type { Assumption } from '../shared/index.ts';
 import { SAMPLES_PER_HOUR, SOLAR_CONSTANT_WM2 } from '../sun/index.ts';
 import { HORIZON_BAND_DEG } from '../survey/index.ts';
+import { GUST_FACTOR } from '../wind/index.ts';
 import { type MountRun, USUAL_HEAT_PER_K } from './mount-run.ts';
 import type { Counted } from './not-counted.ts';
 import { OVERCAST_DIFFUSE, overcastHours } from './overcast.ts';
@@ -156,6 +157,32 @@ export const assumptionsOf = (c: Counted): Assumption[] => {
       ...trackers.flatMap(reachLine),
       ...cloudyLine(c),
     );
+  const snowy = runs.filter((run) => run.mount.snow !== null);
+  if (snowy.length > 0)
+    list.push({
+      what: `snow on ${ids(snowy)}`,
+      value:
+        'takes the same share of every hour of its month, working, parked or dead; snow on the ground brightens nothing',
+      source: 'the study, and assumption',
+    });
+  for (const { mount, parked } of trackers)
+    if (mount.stow && parked)
+      list.push({
+        what: `stow of ${mount.id}`,
+        value: `gust = hourly mean wind at 10 m x ${mount.stow.gustFactor ?? GUST_FACTOR}; an hour is parked whole or not at all; the rows or masts beside it park alike`,
+        source:
+          mount.stow.gustFactor === null
+            ? 'assumption: the study gives no gust_factor; some sites gust more'
+            : 'the study, and assumption',
+      });
+  const down = trackers.filter((run) => run.mount.drive?.working != null);
+  if (down.length > 0)
+    list.push({
+      what: `downtime of ${ids(down)}`,
+      value:
+        'failures even over the year; while stuck, the rows or masts beside it stand alike; where it stopped on average: 7 turns or 18 directions of equal daylight',
+      source: 'the study, and assumption',
+    });
   if (study.array.given === false)
     list.push({ what: 'array', value: '1 kW of DC rating', source: 'the study gives no array' });
   if (study.finance.years !== null)

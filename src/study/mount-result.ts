@@ -1,5 +1,5 @@
 import { breakEven, costOfEnergy, mountCost } from '../cost/index.ts';
-import { lightBySource } from '../energy/index.ts';
+import { type Delivered, lightBySource } from '../energy/index.ts';
 import type { Study, StudyMount } from '../inputs/index.ts';
 import { crossAxisTiltOf, isTracker, type ResolvedGeometry, type SingleAxis } from '../mounts/index.ts';
 import {
@@ -13,6 +13,7 @@ import {
 } from '../shared/index.ts';
 import {
   type EdgeGeometry,
+  GUST_FACTOR,
   screenWind,
   steepestChordAboveSlopeDeg,
   steepestChordTiltDeg,
@@ -22,6 +23,7 @@ import { factorBand, programmeLimits } from './orientation.ts';
 import { pointingWords } from './pointing-words.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
 import { slopeLimits } from './slope-limits.ts';
+import { parkedWords, stuckWords } from './still-planes.ts';
 
 /** Energy per kW of DC rating in the month that gives least a day. */
 export const worstMonth = (monthlyKwhPerKw: readonly number[]): MountResult['worst_month'] => {
@@ -196,6 +198,10 @@ export const mountResult = (run: MountRun, reference: MountRun, setting: Setting
       source: STAGE_SOURCES[s.name](run),
     })),
     weakest_stage: weakest.name,
+    snow: snowOf(run, setting),
+    stow: stowOf(run, setting),
+    downtime: downtimeOf(run, delivered),
+    visits_per_year: mount.drive?.visits ?? null,
     capital: cost.capital,
     capital_per_kw: cost.capitalPerKw,
     upkeep_per_year: cost.upkeepPerYear,
@@ -248,11 +254,62 @@ const STAGE_SOURCES: Record<
   incidence: () => 'Martin & Ruiz 2001, a_r 0.16',
   heat: ({ chain }) => chain.heatLoss.source,
   dirt: () => 'given',
+  snow: () => 'given by month; dims every hour of its month alike',
   'module spread': () => 'given',
   cables: () => 'given',
   conversion: () => 'given',
   'inverter ceiling': () => "the inverter's AC rating, hour by hour",
+  stow: () =>
+    'given gust and hold time against hourly wind at 10 m; parked hours take the light of the parked plane',
   drive: () => 'given',
-  downtime: ({ mount }) =>
-    `given share of time working; stuck ${mount.drive?.stuck === 'equator' ? 'facing the equator' : 'flat'} else`,
+  downtime: ({ mount, geometry }) =>
+    `given share of time working; stuck ${stuckWords(mount.drive?.stuck ?? 'flat', geometry)} else`,
+};
+
+/** What snow takes from a mount; null where that is not counted. */
+const snowOf = ({ mount, delivered }: MountRun, { study }: Setting): MountResult['snow'] => {
+  const { stages } = delivered[study.sky.model];
+  const stage = stages.find(({ name }) => name === 'snow');
+  if (!mount.snow || !stage) return null;
+  const before = stages[stages.indexOf(stage) - 1].kwhPerKwAfter;
+  return {
+    monthly_shares: [...mount.snow],
+    // Sums in another order may differ in the last digit; snow never gives.
+    taken_kwh_per_kw: Math.max(0, before - stage.kwhPerKwAfter),
+    lower_edge_m: mount.lengths.lowerEdgeM,
+  };
+};
+
+/** What parking in wind costs a tracker; null where that is not counted. */
+const stowOf = ({ mount, geometry, parked, delivered }: MountRun, setting: Setting): MountResult['stow'] => {
+  const lost = delivered[setting.study.sky.model].lostToStowMonthlyKwhPerKw;
+  if (!mount.stow || !parked || !lost) return null;
+  const { gustMs, gustFactor, releaseMs, holdH } = mount.stow;
+  const lit = setting.sun.sunlit;
+  return {
+    gust_ms: gustMs,
+    gust_factor: gustFactor ?? GUST_FACTOR,
+    release_ms: releaseMs ?? gustMs,
+    hold_h: holdH,
+    parked: parkedWords(mount.stow, geometry, setting),
+    hours: parked.hours,
+    daylight_hours: parked.stowed.reduce((sum, stowed, h) => sum + (stowed && lit[h] > 0 ? 1 : 0), 0),
+    events: parked.events,
+    longest_h: parked.longestH,
+    lost_kwh_per_kw: lost.reduce((sum, month) => sum + month, 0),
+    lost_monthly_kwh_per_kw: [...lost],
+  };
+};
+
+/** What a tracker delivers while it is dead; null where that is not counted. */
+const downtimeOf = ({ mount, geometry }: MountRun, delivered: Delivered): MountResult['downtime'] => {
+  const { working, stuck } = mount.drive ?? {};
+  const { deadKwhPerKw, keptWhileDead } = delivered;
+  if (working == null || stuck == null || deadKwhPerKw === null) return null;
+  return {
+    working,
+    stuck: stuckWords(stuck, geometry),
+    stuck_kwh_per_kw: deadKwhPerKw,
+    kept_while_stuck: keptWhileDead,
+  };
 };

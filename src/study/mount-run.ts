@@ -7,6 +7,7 @@ import {
   OPEN_RACK,
   onRoof,
   otherwiseIn,
+  type Parked,
   type PlaneViews,
   planeViews,
   type SkylineShade,
@@ -14,26 +15,21 @@ import {
 import type { StudyMount } from '../inputs/index.ts';
 import {
   type BestAngles,
-  type DualAxis,
-  type ElevationRange,
-  isTracker,
-  nearestAzimuth,
   type Pointing,
+  pointAtTurn,
   pointMount,
-  pointSingleAxis,
-  pointStoppedTurntable,
   pointTurntable,
   type ResolvedGeometry,
   resolveAngles,
-  type TiltedTurntable,
   type Turntable,
 } from '../mounts/index.ts';
 import { goldenMaximum, type SkyModel, sinDeg, yearlySum } from '../shared/index.ts';
 import { bestAzimuthAtTilt, bestTiltFacing } from '../sky/index.ts';
-import { powerLawFactor } from '../wind/index.ts';
+import { powerLawFactor, type StowHours } from '../wind/index.ts';
 import { overcastHours } from './overcast.ts';
 import { ALL_MODELS, type Setting } from './setting.ts';
 import type { MountSurvey } from './site-survey.ts';
+import { flatPlane, parkedPlane, stuckPlanes } from './still-planes.ts';
 
 /** One mount with all that was worked out for it before money. */
 export interface MountRun {
@@ -41,8 +37,12 @@ export interface MountRun {
   readonly geometry: ResolvedGeometry;
   readonly gcr: number | null;
   readonly views: PlaneViews;
-  /** Trackers: the plane where a dead one lies, among its rows. */
-  readonly stuck: PlaneViews | null;
+  /** Trackers: the plane lying flat, or what comes nearest to it, see {@link flatPlane}. */
+  readonly flat: PlaneViews | null;
+  /** Trackers: the planes where a dead one may stand, each as likely as the others. */
+  readonly stuck: readonly PlaneViews[];
+  /** Trackers: the hours in which it is parked, and its plane then; null where stow is not given, or the file has no wind. */
+  readonly parked: (StowHours & Parked) | null;
   readonly chain: ChainSpec;
   readonly arrayHeightM: number;
   readonly survey: MountSurvey | null;
@@ -79,6 +79,7 @@ const chainOf = ({ study, year, array }: Setting, mount: StudyMount, arrayHeight
   windFactor: powerLawFactor(arrayHeightM),
   heatPerK: study.array.module?.heatPerK ?? USUAL_HEAT_PER_K,
   losses: study.losses,
+  snow: mount.snow,
   ceilingKwPerKw: array.ac_kw === null ? null : array.ac_kw / array.dc_kw,
   drive: mount.drive,
 });
@@ -91,49 +92,31 @@ const runMount = (
 ): MountRun => {
   const viewsPast = lyingFlatWhenCloudy(geometry, pointing, setting);
   const views = viewsPast(setting.shade);
-  const stuck = stuckViews(geometry, setting);
+  const flat = flatPlane(setting, geometry);
+  const stuck = stuckPlanes(setting, geometry, mount.drive?.stuck ?? 'flat', flat);
+  const parked = parkedPlane(setting, mount, geometry, flat);
   const arrayHeightM = arrayHeight(mount, geometry, setting.study.site.roofHeightM);
   const chain = chainOf(setting, mount, arrayHeightM);
   const delivered = {} as Record<SkyModel, Delivered>;
-  for (const model of ALL_MODELS) delivered[model] = deliver(setting.skies[model], views, chain, stuck);
+  for (const model of ALL_MODELS)
+    delivered[model] = deliver(setting.skies[model], views, chain, stuck, parked);
   const gcr = 'rows' in geometry ? (geometry.rows?.gcr ?? null) : null;
   const survey = setting.survey.mounts.get(mount.id) ?? null;
   const worstPoint = worstPointOf(setting, views, viewsPast);
-  return { mount, geometry, gcr, views, stuck, chain, arrayHeightM, survey, worstPoint, delivered };
-};
-
-const asFlatAsItGoes = ({ rows }: DualAxis, { highestDeg }: ElevationRange): TiltedTurntable => ({
-  kind: 'turntable',
-  planeTiltDeg: 90 - highestDeg,
-  rows,
-});
-
-/**
- * Where a dead tracker lies: level, or flat along a tilted axis; a mast that cannot lie flat as flat as it goes, and a
- * turntable at its tilt, both facing the equator or as near to it as they turn.
- */
-const stuckViews = (geometry: ResolvedGeometry, { sun, shade, flat, year }: Setting): PlaneViews | null => {
-  if (!isTracker(geometry)) return null;
-  const equatorDeg = year.place.latitudeDeg < 0 ? 0 : 180;
-  if (geometry.kind === 'turntable')
-    return planeViews(
-      sun,
-      pointStoppedTurntable(sun, geometry, nearestAzimuth(geometry.turns ?? null, equatorDeg)),
-      shade,
-    );
-  if (geometry.kind === 'dual-axis' && geometry.elevation && geometry.elevation.highestDeg < 90)
-    return planeViews(
-      sun,
-      pointStoppedTurntable(
-        sun,
-        asFlatAsItGoes(geometry, geometry.elevation),
-        nearestAzimuth(geometry.turns ?? null, equatorDeg),
-      ),
-      shade,
-    );
-  return geometry.kind === 'single-axis' && (geometry.axisTiltDeg !== 0 || geometry.ground)
-    ? planeViews(sun, pointSingleAxis(sun, { ...geometry, swingDeg: 0 }), shade)
-    : flat;
+  return {
+    mount,
+    geometry,
+    gcr,
+    views,
+    flat,
+    stuck,
+    parked,
+    chain,
+    arrayHeightM,
+    survey,
+    worstPoint,
+    delivered,
+  };
 };
 
 /** What a mount's plane sees past a skyline, with the overcast hours of a `cloudy: flat` tracker spent lying flat. */
@@ -145,7 +128,7 @@ const lyingFlatWhenCloudy = (
   const tracking = (shade: SkylineShade | null) => planeViews(sun, pointing, shade);
   if (geometry.kind !== 'single-axis' || geometry.cloudy !== 'flat') return tracking;
   const overcast = overcastHours(year);
-  const flat = pointSingleAxis(sun, { ...geometry, swingDeg: 0 });
+  const flat = pointAtTurn(sun, geometry, 0);
   return (shade) => otherwiseIn(overcast, tracking(shade), planeViews(sun, flat, shade));
 };
 

@@ -2,6 +2,7 @@ import { mountCost, presentEnergy } from '../cost/index.ts';
 import { type ChainSpec, type Delivered, deliver, energyUnderInverter } from '../energy/index.ts';
 import { isTracker } from '../mounts/index.ts';
 import type { NotCounted } from '../shared/index.ts';
+import { GUST_FACTOR } from '../wind/index.ts';
 import type { MountRun } from './mount-run.ts';
 import type { Setting } from './setting.ts';
 
@@ -24,7 +25,6 @@ const LOSS_KEYS = {
 const DC_PER_AC_EXAMPLE = 1.2;
 const AGEING_EXAMPLE = 0.005;
 const STOW_GUST_MS = 15;
-const GUST_FACTOR = 1.5;
 const LOW_SUN = Math.sin((10 * Math.PI) / 180);
 const SNOW_EXAMPLE = 0.2;
 const RENEWAL_EXAMPLE = { share: 0.05, year: 12 };
@@ -34,7 +34,7 @@ const kwh = (x: number): string => `${Math.round(x)} kWh/kW·yr`;
 
 const deliveredBy = (c: Counted, run: MountRun): Delivered => run.delivered[c.study.sky.model];
 const again = (c: Counted, run: MountRun, change: Partial<ChainSpec>): Delivered =>
-  deliver(c.sky, run.views, { ...run.chain, ...change }, run.stuck);
+  deliver(c.sky, run.views, { ...run.chain, ...change }, run.stuck, run.parked);
 const each = (c: Counted, share: (run: MountRun) => number): string =>
   c.runs.map((run) => `${run.mount.id} ${percent(share(run))}`).join(', ');
 
@@ -55,7 +55,7 @@ const driveLines = (c: Counted): NotCounted[] =>
     .filter((run) => isTracker(run.geometry))
     .flatMap((run) => {
       const energy = deliveredBy(c, run).energyKwhPerKw;
-      const drive = run.mount.drive ?? { working: null, stuck: null, ownUse: null };
+      const drive = run.mount.drive ?? { working: null, stuck: null, visits: null, ownUse: null };
       const loss = (change: Partial<typeof drive>) =>
         percent(1 - again(c, run, { drive: { ...drive, ...change } }).energyKwhPerKw / energy);
       const stuck = run.geometry.kind === 'turntable' ? 'equator' : 'flat';
@@ -70,7 +70,13 @@ const driveLines = (c: Counted): NotCounted[] =>
           what: `mounts.${run.mount.id}.drive.own_use`,
           effect: `${percent(OWN_USE_EXAMPLE)} would cost ${run.mount.id} ${loss({ ownUse: OWN_USE_EXAMPLE })} of its energy`,
         });
-      if (run.geometry.kind !== 'turntable') lines.push(stowLine(c, run)); // it has no flat to go to
+      if (drive.visits !== null)
+        lines.push({
+          what: `mounts.${run.mount.id}.drive.visits`,
+          effect: `${Number(drive.visits.toFixed(2))} visits a year are listed, not priced: put what they cost into its upkeep`,
+        });
+      // A turntable has no flat to go to.
+      if (!run.parked && run.geometry.kind !== 'turntable') lines.push(stowLine(c, run));
       return lines;
     });
 
@@ -78,9 +84,11 @@ const driveLines = (c: Counted): NotCounted[] =>
 const stowLine = (c: Counted, run: MountRun): NotCounted => {
   const what = `wind stow of ${run.mount.id}`;
   const wind = c.year.windMs;
-  if (!wind || !run.stuck) return { what, effect: 'the weather file has no wind, so it cannot be estimated' };
+  if (run.mount.stow && !wind)
+    return { what, effect: 'given, but the weather file has no wind: not counted, which is not zero' };
+  if (!wind || !run.flat) return { what, effect: 'the weather file has no wind, so it cannot be estimated' };
   const working = deliver(c.sky, run.views, { ...run.chain, drive: null }).uncappedKwPerKw;
-  const flat = deliver(c.sky, run.stuck, { ...run.chain, drive: null }).uncappedKwPerKw;
+  const flat = deliver(c.sky, run.flat, { ...run.chain, drive: null }).uncappedKwPerKw;
   const ceiling = run.chain.ceilingKwPerKw ?? Number.POSITIVE_INFINITY;
   let [all, lost, hours] = [0, 0, 0];
   for (let h = 0; h < wind.length; h++) {
@@ -129,7 +137,19 @@ const skylineLine = (c: Counted): NotCounted[] => {
   return [{ what: 'site.skyline', effect }];
 };
 
+/** Snow where no mount has it; where some have, the others are named. */
 const snowLine = (c: Counted): NotCounted[] => {
+  const [blank, given] = [true, false].map((isBlank) =>
+    c.runs.filter(({ mount }) => (mount.snow === null) === isBlank).map(({ mount }) => mount.id),
+  );
+  if (blank.length === 0) return [];
+  if (given.length > 0)
+    return [
+      {
+        what: `snow of ${blank.join(', ')}`,
+        effect: `counted for ${given.join(', ')} and not here, which flatters ${blank.length === 1 ? 'it' : 'them'}; give snow for all ${c.runs.length} mounts`,
+      },
+    ];
   const air = c.year.temperatureC;
   if (!air)
     return [{ what: 'snow', effect: 'the weather file has no temperature, so it cannot be estimated' }];

@@ -51,6 +51,7 @@ export const mount = (sketch: Sketch): AdviceMount => {
     limits: [],
     reading_error: 0,
     downtime_blank: false,
+    snow_counted: false,
     ...rest,
     by_sky,
   };

@@ -76,6 +76,7 @@ const chain: ChainSpec = {
   heatPerK: -0.0035,
   losses: { dirt: 0.02, moduleSpread: 0.01, cables: 0.015, conversion: 0.035 },
   ceilingKwPerKw: 10 / 12,
+  snow: null,
   drive: null,
 };
 const mountYear = (point: (s: SunHours) => Pointing, s = sun, light = sky) =>

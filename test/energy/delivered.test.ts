@@ -38,6 +38,7 @@ const nothing: ChainSpec = {
   heatPerK: -0.004,
   losses: { dirt: null, moduleSpread: null, cables: null, conversion: null },
   ceilingKwPerKw: null,
+  snow: null,
   drive: null,
 };
 const warm = { temperatureC: site.temperatureC, windMs: site.windMs };
@@ -55,9 +56,17 @@ const anySpec: fc.Arbitrary<ChainSpec> = fc.record({
     cables: share(0.1),
     conversion: share(0.1),
   }),
+  snow: fc.option(fc.array(fc.double({ min: 0, max: 0.9, noNaN: true }), { minLength: 12, maxLength: 12 }), {
+    nil: null,
+  }),
   ceilingKwPerKw: fc.option(fc.double({ min: 0.2, max: 1.2, noNaN: true }), { nil: null }),
   drive: fc.option(
-    fc.record({ working: share(1), stuck: fc.constant('flat' as const), ownUse: share(0.05) }),
+    fc.record({
+      working: share(1),
+      stuck: fc.constant('flat' as const),
+      visits: fc.constant(null),
+      ownUse: share(0.05),
+    }),
     { nil: null },
   ),
 });
@@ -67,7 +76,7 @@ describe('the chain', () => {
   test('multiplies: irradiation times every stage is the energy, to the last digits', () => {
     fc.assert(
       fc.property(anyViews, anySpec, (views, spec) => {
-        const d = deliver(sky, views, spec, flat);
+        const d = deliver(sky, views, spec, [flat]);
         expect(Math.abs(product(d) / d.energyKwhPerKw - 1)).toBeLessThan(1e-12);
         expect(d.stages.at(-1)!.kwhPerKwAfter / d.energyKwhPerKw).toBeCloseTo(1, 12);
         expect(d.energyMonthlyKwhPerKw.reduce((a, b) => a + b) / d.energyKwhPerKw).toBeCloseTo(1, 12);
@@ -80,7 +89,7 @@ describe('the chain', () => {
   test('never gains where it must not: every stage but heat and downtime keeps at most all', () => {
     fc.assert(
       fc.property(anyViews, anySpec, (views, spec) => {
-        for (const stage of deliver(sky, views, spec, flat).stages) {
+        for (const stage of deliver(sky, views, spec, [flat]).stages) {
           expect(stage.efficiency).toBeGreaterThan(0);
           // Cold modules beat their rating; a tracker stuck flat may beat one that turns out of its rows' shade.
           if (stage.name !== 'heat' && stage.name !== 'downtime')
@@ -94,9 +103,10 @@ describe('the chain', () => {
   test('counts only what is given: a blank takes no stage, and delivers what nothing would', () => {
     fc.assert(
       fc.property(anySpec, (spec) => {
-        const names = deliver(sky, lone, spec, flat).stages.map((s) => s.name);
+        const names = deliver(sky, lone, spec, [flat]).stages.map((s) => s.name);
         expect(names.includes('heat')).toBe(spec.ambient.temperatureC !== null);
         expect(names.includes('dirt')).toBe(spec.losses.dirt !== null);
+        expect(names.includes('snow')).toBe(spec.snow !== null);
         expect(names.includes('module spread')).toBe(spec.losses.moduleSpread !== null);
         expect(names.includes('cables')).toBe(spec.losses.cables !== null);
         expect(names.includes('conversion')).toBe(spec.losses.conversion !== null);
@@ -115,8 +125,8 @@ describe('the chain', () => {
     const blankDrive = deliver(
       sky,
       lone,
-      { ...nothing, drive: { working: null, stuck: null, ownUse: null } },
-      flat,
+      { ...nothing, drive: { working: null, stuck: null, visits: null, ownUse: null } },
+      [flat],
     );
     expect(blankDrive).toEqual(blank);
   });
@@ -127,6 +137,25 @@ describe('the chain', () => {
     const bare = deliver(sky, lone, nothing).energyKwhPerKw;
     expect(d.energyKwhPerKw / bare).toBeCloseTo(0.98 * 0.99 * 0.985 * 0.965, 12);
   });
+});
+
+test('snow takes each month its share, after dirt and before the rest, so that a ceiling sees it', () => {
+  const snow = [0.5, 0.25, 0, 0, 0, 0, 0, 0, 0, 0, 0, 1];
+  const spec = { ...nothing, ambient: warm, losses: { ...nothing.losses, dirt: 0.02, conversion: 0.03 } };
+  const [clear, under] = [deliver(sky, lone, spec), deliver(sky, lone, { ...spec, snow })];
+  for (let m = 0; m < 12; m++)
+    expect(under.energyMonthlyKwhPerKw[m]).toBeCloseTo(clear.energyMonthlyKwhPerKw[m] * (1 - snow[m]), 9);
+  expect(under.irradiationKwhM2).toBe(clear.irradiationKwhM2);
+  expect(under.stages.map((s) => s.name)).toEqual(['incidence', 'heat', 'dirt', 'snow', 'conversion']);
+  expect(under.stages.find((s) => s.name === 'snow')!.efficiency).toBeCloseTo(
+    under.energyKwhPerKw / clear.energyKwhPerKw,
+    12,
+  );
+  const zero = deliver(sky, lone, { ...spec, snow: new Array<number>(12).fill(0) });
+  expect(zero.energyMonthlyKwhPerKw).toEqual(clear.energyMonthlyKwhPerKw);
+  const capped = { ...spec, snow, ceilingKwPerKw: 0.4 };
+  const d = deliver(sky, lone, capped);
+  expect(energyUnderInverter(d.uncappedKwPerKw, 1, 0.4)).toBeCloseTo(d.energyKwhPerKw, 9);
 });
 
 describe('the inverter’s ceiling', () => {
@@ -178,8 +207,13 @@ describe('a tracker that is down', () => {
     deliver(
       sky,
       tracker,
-      { ...nothing, ambient: warm, ceilingKwPerKw: 0.7, drive: { working, stuck: 'flat', ownUse: null } },
-      flat,
+      {
+        ...nothing,
+        ambient: warm,
+        ceilingKwPerKw: 0.7,
+        drive: { working, stuck: 'flat', visits: null, ownUse: null },
+      },
+      [flat],
     );
 
   test('all year delivers what a flat plane does, and one that always works loses nothing', () => {
@@ -194,6 +228,51 @@ describe('a tracker that is down', () => {
     expect(all).toBeGreaterThan(none);
     expect(run(0.93).energyKwhPerKw).toBeCloseTo(0.93 * all + 0.07 * none, 9);
   });
+});
+
+describe('a tracker that parks', () => {
+  const marks = fc.array(fc.boolean(), { minLength: 24, maxLength: 24 });
+  const hoursOf = (day: boolean[]) => Uint8Array.from({ length: 8760 }, (_, h) => Number(day[h % 24]));
+
+  test('multiplies whatever the chain, and its months and its hours close', () => {
+    fc.assert(
+      fc.property(anySpec, marks, (spec, day) => {
+        const parked = { stowed: hoursOf(day), views: flat };
+        const d = deliver(sky, tracker, spec, [flat, lone], parked);
+        const without = deliver(sky, tracker, { ...spec, drive: null });
+        expect(Math.abs(product(d) / d.energyKwhPerKw - 1)).toBeLessThan(1e-9);
+        expect(d.energyMonthlyKwhPerKw.reduce((a, b) => a + b) / d.energyKwhPerKw).toBeCloseTo(1, 12);
+        const after = d.stages.find((s) => s.name === 'stow')!.kwhPerKwAfter;
+        const lost = d.lostToStowMonthlyKwhPerKw!.reduce((a, b) => a + b);
+        expect(after).toBeCloseTo(without.energyKwhPerKw - lost, 9);
+        // The hours before the ceiling are those of the plane as it stood.
+        expect(energyUnderInverter(d.uncappedKwPerKw, 1, spec.ceilingKwPerKw)).toBeCloseTo(after, 9);
+      }),
+      { numRuns: 40 },
+    );
+  });
+
+  test('in no hour changes nothing, and in every hour is the parked plane', () => {
+    const spec = { ...nothing, ambient: warm, ceilingKwPerKw: 0.7 };
+    const park = (at: number) =>
+      deliver(sky, tracker, spec, [], { stowed: new Uint8Array(8760).fill(at), views: flat });
+    const never = deliver(sky, tracker, spec);
+    expect(park(0).energyMonthlyKwhPerKw).toEqual(never.energyMonthlyKwhPerKw);
+    expect(never.lostToStowMonthlyKwhPerKw).toBeNull();
+    expect(park(1).energyKwhPerKw / deliver(sky, flat, spec).energyKwhPerKw).toBeCloseTo(1, 12);
+    expect(park(1).irradiationKwhM2).toBe(never.irradiationKwhM2);
+  });
+});
+
+test('a dead tracker that may stand in several ways delivers their mean, each through the chain by itself', () => {
+  const spec = { ...nothing, ambient: warm, ceilingKwPerKw: 0.5 };
+  const drive = { working: 0.8, stuck: 'average' as const, visits: null, ownUse: null };
+  const d = deliver(sky, tracker, { ...spec, drive }, [flat, lone, inRows]);
+  const alone = [flat, lone, inRows].map((views) => deliver(sky, views, spec).energyKwhPerKw);
+  expect(d.deadKwhPerKw).toBeCloseTo((alone[0] + alone[1] + alone[2]) / 3, 9);
+  const working = deliver(sky, tracker, spec).energyKwhPerKw;
+  expect(d.keptWhileDead).toBeCloseTo(d.deadKwhPerKw! / working, 12);
+  expect(d.energyKwhPerKw).toBeCloseTo(0.8 * working + 0.2 * d.deadKwhPerKw!, 9);
 });
 
 test('rows never add energy, the closer they stand the less there is', () => {

@@ -27,6 +27,7 @@ const spec = (temperatureC: Float64Array | null, windMs: Float64Array | null): C
   heatPerK: -0.0035,
   losses: { dirt: 0.02, moduleSpread: 0.01, cables: 0.015, conversion: 0.035 },
   ceilingKwPerKw: 10 / 12,
+  snow: null,
   drive: null,
 });
 

@@ -25,7 +25,7 @@ const BLANK: Omit<Study, 'title' | 'weather' | 'mounts'> = {
 };
 const WEATHER = { table: null, label: null, addMinutes: 0, acceptClock: false };
 const NO_LENGTHS = { slantM: null, axisHeightM: null, lowerEdgeM: null, airBehindM: null };
-const BLANK_DRIVE = { working: null, stuck: null, ownUse: null };
+const BLANK_DRIVE = { working: null, stuck: null, visits: null, ownUse: null };
 
 test('the simplest study gets the documented defaults, and null for all that is blank', async () => {
   const study = await read(`title: Orlin Bench
@@ -53,6 +53,8 @@ mounts:
         readings: null,
         lengths: NO_LENGTHS,
         drive: null,
+        stow: null,
+        snow: null,
         cost: null,
       },
       {
@@ -68,6 +70,8 @@ mounts:
         readings: null,
         lengths: NO_LENGTHS,
         drive: BLANK_DRIVE,
+        stow: null,
+        snow: null,
         cost: null,
       },
     ],
@@ -124,6 +128,8 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         readings: null,
         lengths: { ...NO_LENGTHS, airBehindM: 0.1 },
         drive: null,
+        stow: null,
+        snow: null,
         cost: { ...NO_COST, capitalPerKw: 1700, upkeepPerKw: 15 },
       },
       {
@@ -138,6 +144,8 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         readings: null,
         lengths: NO_LENGTHS,
         drive: null,
+        stow: null,
+        snow: null,
         cost: { ...NO_COST, capital: 21000 },
       },
       {
@@ -152,7 +160,9 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         },
         readings: null,
         lengths: NO_LENGTHS,
-        drive: { working: 0.97, stuck: 'flat', ownUse: 0.003 },
+        drive: { working: 0.97, stuck: 'flat', visits: null, ownUse: 0.003 },
+        stow: null,
+        snow: null,
         cost: { ...NO_COST, upkeep: 0, renewals: [{ what: 'drive', year: 12, cost: 800 }] },
       },
       {
@@ -162,6 +172,8 @@ test('the fuller study comes out in metres, m/s, degrees and fractions', async (
         readings: null,
         lengths: NO_LENGTHS,
         drive: BLANK_DRIVE,
+        stow: null,
+        snow: null,
         cost: null,
       },
     ],
@@ -294,7 +306,7 @@ mounts:
     rows: { gcr: 0.3, lowSun: 'shade' },
   });
   expect(mounts[1].lengths).toStrictEqual({ ...NO_LENGTHS, slantM: 2, axisHeightM: 1.5 });
-  expect(mounts[2].drive).toStrictEqual({ working: null, stuck: null, ownUse: 0.002 });
+  expect(mounts[2].drive).toStrictEqual({ working: null, stuck: null, visits: null, ownUse: 0.002 });
 });
 
 test('the tilt of an axis on sloping ground follows from the ground', async () => {
@@ -339,8 +351,8 @@ mounts:
     },
     { kind: 'turntable', planeTiltDeg: 'best', rows: { gcr: 0.2, lowSun: 'shade' } },
   ]);
-  expect(mounts[1].drive).toStrictEqual({ working: 0.9, stuck: 'equator', ownUse: null });
-  expect(mounts[2].drive).toStrictEqual({ working: null, stuck: null, ownUse: null });
+  expect(mounts[1].drive).toStrictEqual({ working: 0.9, stuck: 'equator', visits: null, ownUse: null });
+  expect(mounts[2].drive).toStrictEqual({ working: null, stuck: null, visits: null, ownUse: null });
 });
 
 test('anchors and aliases may share a group between mounts', async () => {
@@ -356,4 +368,70 @@ test('what is read is not shared between two studies', async () => {
   const [a, b] = [await read(FULL), await read(FULL)];
   expect(a).toStrictEqual(b);
   expect(a.mounts[0]).not.toBe(b.mounts[0]);
+});
+
+test('a dead tracker stands flat, where it stopped, or as given; a side is a word and not a sign', async () => {
+  const stuck = async (kind: string, keys: string) => {
+    const text = `weather: { file: a }\nmounts: [ { id: m, kind: ${kind}, ${keys} } ]\n`;
+    return (await readStudy({ file: 'x', text })).mounts[0].drive;
+  };
+  const single = (at: string, keys = '') =>
+    stuck('single-axis', `drive: { working: 97 %, stuck: ${at}, visits: 2 }${keys}`);
+  expect(await single('average')).toStrictEqual({ working: 0.97, stuck: 'average', visits: 2, ownUse: null });
+  // With the axis falling south a positive turn faces west (src/mounts/single-axis.ts).
+  expect((await single('{ turn: 45, faces: west }'))?.stuck).toEqual({ turnDeg: 45 });
+  expect((await single('{ turn: 45, faces: east }'))?.stuck).toEqual({ turnDeg: -45 });
+  expect((await single('{ turn: 0 }'))?.stuck).toEqual({ turnDeg: 0 });
+  expect((await single('{ turn: 30, faces: east }', ', axis: { azimuth: 0 }'))?.stuck).toEqual({
+    turnDeg: 30,
+  });
+  expect((await single('{ turn: 30, faces: north }', ', axis: { azimuth: 270 }'))?.stuck).toEqual({
+    turnDeg: 30,
+  });
+  const dual = await stuck('dual-axis', 'drive: { working: 90 %, stuck: { tilt: 30, azimuth: 90 } }');
+  expect(dual?.stuck).toEqual({ tiltDeg: 30, azimuthDeg: 90 });
+});
+
+test('stow is read with its blanks; speeds and times in any unit; a side is a word', async () => {
+  const stow = async (kind: string, keys: string) => {
+    const text = `weather: { file: a }\nmounts: [ { id: m, kind: ${kind}, ${keys} } ]\n`;
+    return (await readStudy({ file: 'x', text })).mounts[0].stow;
+  };
+  expect(await stow('single-axis', 'stow: { gust: 18 m/s }')).toStrictEqual({
+    gustMs: 18,
+    gustFactor: null,
+    releaseMs: null,
+    holdH: 0,
+    angleDeg: 0,
+  });
+  const full =
+    'stow: { gust: 72 km/h, gust_factor: 1.4, release: 36 km/h, hold: 90 min, angle: 30, faces: west }';
+  expect(await stow('single-axis', full)).toStrictEqual({
+    gustMs: 20,
+    gustFactor: 1.4,
+    releaseMs: 10,
+    holdH: 1.5,
+    angleDeg: 30,
+  });
+  expect((await stow('single-axis', full.replace('west', 'east')))?.angleDeg).toBe(-30);
+  expect((await stow('single-axis', 'stow: { gust: 18, hold: 3 h }'))?.holdH).toBe(3);
+  expect((await stow('dual-axis', 'stow: { gust: 18, hold: 3, angle: 20 }'))?.angleDeg).toBe(20);
+});
+
+test('snow is a list of twelve months or those that have any, on every kind of mount', async () => {
+  const snow = async (keys: string) =>
+    (await readStudy({ file: 'x', text: `weather: { file: a }\nmounts: [ { id: m, ${keys} } ]\n` })).mounts[0]
+      .snow;
+  const expected = [0.2, 0.15, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0.1];
+  const list = 'snow: [ 20 %, 0.15, 0, 0, 0, 0, 0, 0, 0, 0, 0, 10 % ]';
+  const named = 'snow: { Feb: 15 %, Jan: 20 %, Dec: 0.1 }';
+  for (const kind of [
+    'kind: fixed-tilt',
+    'kind: single-axis',
+    'kind: dual-axis',
+    'kind: roof-plane, tilt: 3, azimuth: 9',
+  ])
+    for (const keys of [list, named]) expect(await snow(`${kind}, ${keys}`)).toEqual(expected);
+  expect(await snow('kind: fixed-tilt, snow: { Jan: 100 % }')).toEqual([1, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0]);
+  expect(await snow('kind: fixed-tilt')).toBeNull();
 });

@@ -40,7 +40,9 @@ test('a turntable at its best tilt collects more than at any other, and stands i
     best.stages.reduce((p, s) => p * s.efficiency, best.irradiation_kwh_m2) / best.energy_kwh_per_kw,
   ).toBeCloseTo(1, 12);
   const memo = memoMarkdown(c, EXTRAS);
-  expect(memo).toMatch(/\| table \| turntable \| turns about an upright axis at [\d.]+° tilt \| alone at [\d.]+° tilt/);
+  expect(memo).toMatch(
+    /\| table \| turntable \| turns about an upright axis at [\d.]+° tilt \| alone at [\d.]+° tilt/,
+  );
   const blanks = c.not_counted.map(({ what }) => what);
   expect(blanks).toContain('mounts.table.drive.working');
   expect(blanks).not.toContain('wind stow of table');
@@ -65,6 +67,22 @@ test('a dead turntable is a fixed plane to the equator at its tilt, a mast that 
   const energy = c.mounts.slice(1).map((m) => m.energy_kwh_per_kw);
   for (const i of [0, 2, 4, 6]) expect(energy[i] / energy[i + 1]).toBeCloseTo(1, 9);
   expect(c.mounts[1].stages.find(({ name }) => name === 'downtime')?.source).toContain('facing the equator');
+});
+
+test('a mast that cannot lie flat parks as flat as it goes, and a turntable has repair visits', async () => {
+  const c = await compare(
+    'id: m, kind: dual-axis, elevation: { highest: 60 }, stow: { gust: 0.01 }, drive: { working: 50 %, stuck: flat }',
+    'id: s, kind: dual-axis, elevation: { highest: 60 }, stow: { gust: 0.01, angle: 30 }, drive: { working: 50 %, stuck: { tilt: 30, azimuth: 180 } }',
+    'id: t, kind: turntable, tilt: 50, drive: { working: 90 %, stuck: equator, visits: 2 }',
+  );
+  const [m, s, t] = c.mounts.slice(1);
+  expect(m.stow?.parked).toBe('as flat as it goes');
+  expect(m.downtime?.stuck).toBe('as flat as it goes');
+  expect(s.stow?.parked).toBe('tilted 30° to face south');
+  expect(m.energy_kwh_per_kw / s.energy_kwh_per_kw).toBeCloseTo(1, 9);
+  expect(t.visits_per_year).toBe(2);
+  expect(t.downtime?.stuck).toBe('facing the equator');
+  expect(t.stow).toBeNull();
 });
 
 test('limits of a mast cost energy, more the narrower they are, and are printed', async () => {

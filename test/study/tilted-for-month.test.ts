@@ -23,6 +23,7 @@ const chain = {
   heatPerK: -0.0035,
   losses: { dirt: null, moduleSpread: null, cables: null, conversion: null },
   ceilingKwPerKw: null,
+  snow: null,
   drive: null,
 };
 

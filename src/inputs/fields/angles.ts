@@ -5,6 +5,7 @@ import type { QuantityRule } from './quantity.ts';
 import { numberOrText, quantity, quantityWords, readQuantity } from './quantity.ts';
 import { inRange, plainText } from './range.ts';
 import { asWritten, bySurvey } from './readings.ts';
+import { choice } from './words.ts';
 
 type AngleRule = Omit<QuantityRule, 'description'>;
 
@@ -104,3 +105,18 @@ export const faced = (convert: Convert, description: string) => quantity(convert
 
 /** Greatest turn of a tracker either way from flat. */
 export const swing = (convert: Convert, description: string) => quantity(convert, { ...SWING, description });
+
+const TURN: AngleRule = {
+  what: 'a turn from flat',
+  unit: 'deg',
+  range: { min: 0, max: 90 },
+  example: '45 deg',
+  fix: 'Write it without a sign, for example turn: 45, and the side that it faces, for example faces: east.',
+};
+
+/** How far a tracker is turned from flat; which way is a word of its own, since signs mislead. */
+export const turn = (convert: Convert, description: string) => quantity(convert, { ...TURN, description });
+
+const SIDES = ['east', 'west', 'north', 'south'] as const;
+export type Side = (typeof SIDES)[number];
+export const side = () => choice(SIDES, 'The side that it faces when turned.');

@@ -23,7 +23,7 @@ const UNIT_EXAMPLES: Record<(typeof KIND_OF_UNIT)[Unit], string> = {
   angle: 'deg or rad',
   time: 'min or h',
 };
-const UNIT_WORDS: Partial<Record<Unit, string>> = { deg: 'degrees', min: 'minutes' };
+const UNIT_WORDS: Partial<Record<Unit, string>> = { deg: 'degrees', min: 'minutes', h: 'hours' };
 
 /** The words of a quantity field for messages. */
 export const quantityWords = ({ what, unit, range }: Omit<QuantityRule, 'description'>): string =>

@@ -98,3 +98,26 @@ export const wholeYears = (what: string, range: Range, description: string, exam
     },
     (raw) => readWhole(raw, what, range, example),
   );
+
+/** A plain number without a unit. */
+export const bareNumber = (
+  what: string,
+  range: Range,
+  description: string,
+  example: string,
+  fix?: string,
+) => {
+  const expected = `${what}, a bare number${rangeWords(range)}`;
+  const form = {
+    anyOf: [
+      { type: 'number', ...rangeForm(range) },
+      { type: 'string', pattern: '^ *[+-]?[0-9.]+ *$' },
+    ],
+  };
+  return field({ description, example, expected, form }, (raw): number => {
+    const advice = fix ?? `Write for example ${example}.`;
+    const [amount, rest] = numberAndRest(raw, expected, advice);
+    if (rest !== '' || !inRange(amount, range)) throw new Refusal(expected, advice);
+    return amount;
+  });
+};

@@ -1,13 +1,16 @@
 import * as z from 'zod/mini';
 import type { Convert } from '../convert.ts';
+import { azimuth, side, tilt, turn } from '../fields/angles.ts';
 import { hints } from '../fields/field.ts';
 import { quantity } from '../fields/quantity.ts';
 import { share } from '../fields/share.ts';
-import { choice, text } from '../fields/words.ts';
+import { bareNumber, choice, text } from '../fields/words.ts';
 import { cost } from './money.ts';
 import type { Present } from './present.ts';
 import { wherePresent } from './present.ts';
 import { bearingGroup, slopeGroup } from './readings.ts';
+import { snow } from './snow.ts';
+import { stowTilt, stowTurn } from './stow.ts';
 
 /** An id names files and JSON fields, so it stays plain. */
 const ID = /^[a-z0-9][a-z0-9_-]*$/;
@@ -59,7 +62,16 @@ const trackerRows = () =>
     })
     .register(hints, { description: 'Rows of trackers. Blank: one row, true tracking.' });
 
-const drive = (stuck: ReturnType<typeof choice<'flat' | 'equator'>>) =>
+const visits = () =>
+  bareNumber(
+    'visits a year',
+    { min: 0, max: 366 },
+    'Repair visits a year. Listed, not priced: put what they cost into upkeep.',
+    '2',
+    'Write for example 2, or 0.5 for one in two years.',
+  );
+
+const drive = <S extends z.ZodMiniType>(stuckAt: S) =>
   z
     .strictObject({
       working: z.optional(
@@ -71,7 +83,8 @@ const drive = (stuck: ReturnType<typeof choice<'flat' | 'equator'>>) =>
             'Share of the time that the tracker works. Blank: downtime is not counted, which flatters it.',
         }),
       ),
-      stuck: z.optional(stuck),
+      stuck: z.optional(stuckAt),
+      visits: z.optional(visits()),
       own_use: z.optional(
         share({
           what: 'a share of the yield',
@@ -82,6 +95,32 @@ const drive = (stuck: ReturnType<typeof choice<'flat' | 'equator'>>) =>
       ),
     })
     .register(hints, { description: 'The drive of a tracker.' });
+
+const STUCK = { description: 'How it stands while it does not work. Needed with working.' };
+const stuckWord = () =>
+  choice(['flat', 'average'], 'Lying flat, or where it stopped, on average over all daylight.');
+
+const stuckTurn = (convert: Convert) =>
+  z
+    .union([
+      stuckWord(),
+      z.strictObject({
+        turn: turn(convert, 'Turn from flat about the axis, without a sign.'),
+        faces: z.optional(side()),
+      }),
+    ])
+    .register(hints, STUCK);
+
+const stuckPlane = (convert: Convert) =>
+  z
+    .union([
+      stuckWord(),
+      z.strictObject({
+        tilt: tilt(convert, 'Degrees from horizontal, a slope (3:12), a grade (25 %).'),
+        azimuth: azimuth(convert, 'The way it faces: degrees clockwise from true north, 180 is south.'),
+      }),
+    ])
+    .register(hints, STUCK);
 
 /** The parts that the kinds of mount share, each made once: making schemas is what reading a study costs most. */
 export const mountParts = (convert: Convert, has: Present) => ({
@@ -96,6 +135,7 @@ export const mountParts = (convert: Convert, has: Present) => ({
       }),
     ),
     cost: z.optional(cost()),
+    snow: wherePresent(has('snow'), () => z.optional(snow())),
   },
   onSite: {
     bearing: wherePresent(has('bearing'), () => z.optional(bearingGroup(convert))),
@@ -103,7 +143,8 @@ export const mountParts = (convert: Convert, has: Present) => ({
   },
   rows: z.optional(rows()),
   trackerRows: z.optional(trackerRows()),
-  drive: z.optional(drive(choice(['flat'], 'How it stands while it does not work. Needed with working.'))),
+  turningDrive: z.optional(drive(stuckTurn(convert))),
+  facingDrive: z.optional(drive(stuckPlane(convert))),
   turntableDrive: wherePresent(has('drive'), () =>
     z.optional(
       drive(
@@ -111,6 +152,8 @@ export const mountParts = (convert: Convert, has: Present) => ({
       ),
     ),
   ),
+  turningStow: wherePresent(has('stow'), () => z.optional(stowTurn(convert))),
+  facingStow: wherePresent(has('stow'), () => z.optional(stowTilt(convert))),
   slant: length(convert, 'a slant length', '3.5 m', 'Length of a rack or tracker, measured along its slope.'),
   axisHeight: length(convert, 'a height', '1.5 m', 'Height of the axis above ground.'),
   lowerEdge: length(convert, 'a height', '0.8 m', 'Height of the lower edge above ground.', 'or zero'),

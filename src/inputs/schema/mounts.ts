@@ -6,6 +6,8 @@ import { choice } from '../fields/words.ts';
 import { mountParts } from './mount-parts.ts';
 import type { Present } from './present.ts';
 import { once, wherePresent } from './present.ts';
+import { reachIssues } from './reach.ts';
+import { turnIssues } from './turns.ts';
 
 type Parts = ReturnType<typeof mountParts>;
 
@@ -81,7 +83,7 @@ const slopeLimits = (convert: Convert) =>
 
 const singleAxis = (
   convert: Convert,
-  { common, trackerRows, slant, axisHeight, drive }: Parts,
+  { common, trackerRows, slant, axisHeight, turningDrive, turningStow }: Parts,
   has: Present,
 ) =>
   z
@@ -98,7 +100,11 @@ const singleAxis = (
       rows: trackerRows,
       slant,
       axis_height: axisHeight,
-      drive,
+      drive: turningDrive,
+      stow: turningStow,
+    })
+    .check(({ value, issues }) => {
+      issues.push(...turnIssues(value));
     })
     .register(hints, { description: 'A tracker that turns about one axis.' });
 
@@ -122,7 +128,11 @@ const elevation = (convert: Convert) =>
     })
     .register(hints, { description: 'How high it can face: 90 less its tilt. Blank: from upright to flat.' });
 
-const dualAxis = (convert: Convert, { common, rows, slant, axisHeight, drive }: Parts, has: Present) =>
+const dualAxis = (
+  convert: Convert,
+  { common, rows, slant, axisHeight, facingDrive, facingStow }: Parts,
+  has: Present,
+) =>
   z
     .strictObject({
       kind: z.literal('dual-axis'),
@@ -132,7 +142,11 @@ const dualAxis = (convert: Convert, { common, rows, slant, axisHeight, drive }: 
       rows,
       slant,
       axis_height: axisHeight,
-      drive,
+      drive: facingDrive,
+      stow: facingStow,
+    })
+    .check(({ value, issues }) => {
+      issues.push(...reachIssues(value));
     })
     .register(hints, { description: 'A tracker that faces the sun. Without rows it is a lone mast.' });
 

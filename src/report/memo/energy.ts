@@ -7,11 +7,14 @@ import {
   type MountResult,
   monthInFull,
 } from '../../shared/index.ts';
+import { downtimeSentences } from '../downtime-words.ts';
 import { md, mdList, mdTable } from '../markdown.ts';
 import { formatDaily, formatGain, formatNumber, formatPercent, UNKNOWN } from '../numbers.ts';
 import { capitalised } from '../plain-text.ts';
+import { snowSentences } from '../snow-words.ts';
+import { stowMonths, stowSentences } from '../stow-words.ts';
 import { mountById, nameOf } from '../words.ts';
-import { section } from './section.ts';
+import { blocks, section } from './section.ts';
 
 /**
  * All stage names in the order of the chain, where mounts do not share every stage: a stage that only some have
@@ -119,6 +122,27 @@ const stageSources = (c: Comparison): string =>
     }),
   );
 
+const snow = (c: Comparison): string => {
+  const sentences = snowSentences(c);
+  return sentences.length === 0 ? '' : blocks('### Snow', mdList(sentences.map(md)));
+};
+
+const stow = (c: Comparison): string => {
+  const { names, rows } = stowMonths(c);
+  if (names.length === 0) return '';
+  const table = mdTable(
+    ['Taken by stow, kWh/kW', ...names.map(md)],
+    ['left', ...names.map(() => 'right' as const)],
+    rows,
+  );
+  return blocks('### Wind stow', mdList(stowSentences(c).map(md)), table);
+};
+
+const downtime = (c: Comparison): string => {
+  const sentences = downtimeSentences(c);
+  return sentences.length === 0 ? '' : blocks('### Downtime', mdList(sentences.map(md)));
+};
+
 /** Losses stage by stage, and each month against a fixed plane tilted for it. */
 export const energy = (c: Comparison): string =>
   section(
@@ -128,6 +152,9 @@ export const energy = (c: Comparison): string =>
       'mount or is not counted.',
     stageTable(c),
     stageSources(c),
+    snow(c),
+    stow(c),
+    downtime(c),
     '### Month by month',
     'Each mount against the fixed plane that would yield most in that month, on the rows and losses of ' +
       `${md(nameOf(c, mountById(c, c.reference_id)))}. In brackets: the mount over that plane.`,
