@@ -81,7 +81,7 @@ const moneyWords = (q: SameEnergyQuestion, { capital, presentCost }: Differences
       ? ''
       : ` and ${presentCost === 0 ? 'the same' : moreOrLess(presentCost)} over ${sizeWords(years)} years ` +
         `(present cost at ${sizeWords(realRate * 100)} %)`;
-  return `, for ${paid} the tracker${overLife}`;
+  return `, for ${paid} ${q.tracker.label}${overLife}`;
 };
 
 const sentence = (
