@@ -52,7 +52,11 @@ test('both forms of plane agree on the same site', async () => {
       JSON.stringify(ofOptions[key as keyof PlaneReport]),
   );
   // The mount, the file and the skyline are called otherwise, and the options ask for no minimum.
-  expect(different.filter((key) => !['mount', 'weather', 'limits', 'findings'].includes(key))).toEqual([]);
+  expect(
+    different.filter((key) => !['mount', 'weather', 'limits', 'findings', 'declinations'].includes(key)),
+  ).toEqual([]);
+  const declinations = (p: PlaneReport) => p.declinations.map((d) => d.replace(/, applied to .*/, ''));
+  expect(declinations(ofStudy)).toEqual(declinations(ofOptions));
   expect(ofStudy.findings.map(({ code }) => code)).toEqual(ofOptions.findings.map(({ code }) => code));
   expect(ofStudy.shading_fraction).toBeGreaterThan(0.01);
 });

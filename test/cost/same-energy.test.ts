@@ -47,7 +47,7 @@ test('upkeep and renewals of both are discounted over the life where rate and ye
   // By hand at 10 % over 2 years, 1 a year is worth 1 / 1.1 + 1 / 1.21 = 1.735537.
   // Fixed: 34 700 + 18 x 20 x 1.735537 + 1100 / 1.1 = 36 324.79; tracker: 30 000 + 1735.54 + 2420 / 1.21 = 33 735.54.
   expect(found.present_cost_difference).toBeCloseTo(2589.26, 2);
-  expect(found.text).toContain('for 4 700 USD more capital than the tracker and 2 589 USD more over 2 years (present cost at 10 %).');
+  expect(found.text).toContain('for 4 700 USD more capital than T2 and 2 589 USD more over 2 years (present cost at 10 %).');
   const dear = sameEnergy(question({ ...asked, tracker: { ...tracker, cost: { ...cost, upkeep: 5000 } } }));
   // 4000 a year more for the tracker: 2589.26 - 4000 x 1.735537 = -4352.89.
   expect(dear.present_cost_difference).toBeCloseTo(-4352.89, 2);
