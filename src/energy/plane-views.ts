@@ -122,6 +122,8 @@ const behindSkyline = (
 ): Views => {
   const views = { ...emptyViews(sun.cosZenith.length), ground: open.ground };
   const { cosIncidence, azimuthDegAt } = pointing;
+  // A plane that stands still asks the same question all year.
+  let [askedCosTilt, askedAzimuthDeg, skyLeft, bandLeft] = [Number.NaN, Number.NaN, 1, 1];
   for (let h = 0; h < sun.cosZenith.length; h++) {
     const from = sun.first[h];
     const to = sun.first[h + 1];
@@ -129,11 +131,16 @@ const behindSkyline = (
     let beam = 0;
     for (let s = from; s < to; s++) if (cosIncidence[s] > 0) beam += cosIncidence[s] * (1 - shade.hidden[s]);
     const azimuthDeg = azimuthDegAt((from + to) >> 1);
-    const skyLeft = shade.skyLeft(acosDeg(cosTilt[h]), azimuthDeg);
+    if (!(Math.abs(cosTilt[h] - askedCosTilt) < 1e-12) || azimuthDeg !== askedAzimuthDeg) {
+      askedCosTilt = cosTilt[h];
+      askedAzimuthDeg = azimuthDeg;
+      skyLeft = shade.skyLeft(acosDeg(askedCosTilt), azimuthDeg);
+      bandLeft = shade.bandLeft(azimuthDeg);
+    }
     views.beam[h] = beam / (to - from);
     views.sky[h] = open.sky[h] * skyLeft;
     views.steep[h] = open.steep[h] * skyLeft;
-    views.horizon[h] = open.horizon[h] * shade.bandLeft(azimuthDeg);
+    views.horizon[h] = open.horizon[h] * bandLeft;
   }
   return views;
 };
