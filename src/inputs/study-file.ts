@@ -14,6 +14,8 @@ export interface North {
   readonly dated: CalendarDate | null;
   /** Entered by hand, east positive; null: worked out from the date and the place. */
   readonly declinationDeg: number | null;
+  /** The year that a map prints beside a declination entered by hand; null where not given. */
+  readonly printedYear: number | null;
 }
 
 /** A mount's bearing as read on site. `surveySite` turns it into an azimuth, once the place is known. */

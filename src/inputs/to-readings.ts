@@ -25,7 +25,8 @@ const bearingOf = (raw: RawBearing): StudyBearing | null => {
     north: reading.north,
     reading,
     dated: raw.dated ?? null,
-    declinationDeg: raw.declination ?? null,
+    declinationDeg: raw.declination?.declinationDeg ?? null,
+    printedYear: raw.declination?.year ?? null,
   };
 };
 
@@ -83,7 +84,8 @@ export const skylinesOf = (raw: RawSkyline | RawSkyline[] | undefined): StudySky
     name: skylineName(one.name, index),
     north: one.bearings ?? 'true',
     dated: one.dated ?? null,
-    declinationDeg: one.declination ?? null,
+    declinationDeg: one.declination?.declinationDeg ?? null,
+    printedYear: one.declination?.year ?? null,
     file: one.file ?? null,
     points: one.points ?? null,
     obstacles: one.obstacles?.map(obstacleOf) ?? null,

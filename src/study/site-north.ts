@@ -28,12 +28,15 @@ export interface NorthFound {
  */
 export const northAt = async (north: North, place: SurveyPlace): Promise<NorthFound | null> => {
   if (north.north === 'true') return null;
-  const { declinationDeg, dated } = north;
+  const { declinationDeg, dated, printedYear } = north;
   if (declinationDeg !== null)
     return {
       declinationDeg,
-      words: `${declinationShort(declinationDeg)} as entered`,
-      findings: dated ? await secondLook(declinationDeg, place, dated) : [],
+      words: `${declinationShort(declinationDeg)} as entered${printedYear === null ? '' : `, printed for ${printedYear}`}`,
+      findings: [
+        ...(dated && printedYear !== null ? ageOf(declinationDeg, printedYear, dated) : []),
+        ...(dated ? await secondLook(declinationDeg, place, dated) : []),
+      ],
     };
   if (!dated) throw new RangeError('a magnetic bearing needs its date or its declination');
   const modelled = await declinationAt({ ...place, date: dated });
@@ -43,6 +46,21 @@ export const northAt = async (north: North, place: SurveyPlace): Promise<NorthFo
     findings: modelled.findings,
   };
 };
+
+/** Declination drifts by up to a fifth of a degree a year over most of the land (WMM2025 charts; from memory). */
+const OLD_YEARS = 5;
+
+const ageOf = (declinationDeg: number, printedYear: number, { year }: CalendarDate): Finding[] =>
+  Math.abs(year - printedYear) <= OLD_YEARS
+    ? []
+    : [
+        {
+          code: 'old-declination',
+          severity: 'warning',
+          text: `The declination ${declinationShort(declinationDeg)} was printed for ${printedYear}, ${Math.abs(year - printedYear)} years from the reading; it may have drifted by a degree or more.`,
+          fix: 'Leave declination out, and the model works it out for the date of the reading.',
+        },
+      ];
 
 /** Entering the declination is the way out where the model has none, so its refusal is no problem here. */
 const secondLook = async (byHandDeg: number, place: SurveyPlace, date: CalendarDate): Promise<Finding[]> => {

@@ -27,7 +27,9 @@ export {
 export {
   declinationShort,
   declinationWords,
+  type MapDeclination,
   parseDeclination,
+  parseMapDeclination,
   yearlyChangeWords,
 } from './declination-words.ts';
 export {

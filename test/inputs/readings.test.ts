@@ -12,7 +12,7 @@ const SITE = (skyline: string) =>
   `weather: { file: a.epw }\nmounts: [ { id: m, kind: dual-axis } ]\nsite: { skyline: ${skyline} }\n`;
 const skylinesOf = async (skyline: string) => (await read(SITE(skyline))).site.skyline;
 
-const NORTH = { north: 'true', dated: null, declinationDeg: null } as const;
+const NORTH = { north: 'true', dated: null, declinationDeg: null, printedYear: null } as const;
 const UNTURNED = { backDeg: null, taken: 'facing', downslope: null, errorDeg: null } as const;
 
 describe('a bearing as read on site', () => {
@@ -31,6 +31,7 @@ describe('a bearing as read on site', () => {
         reading: { ...UNTURNED, north: 'magnetic', bearingDeg: 150, errorDeg: 5 },
         dated: { year: 2026, month: 5, day: 1 },
         declinationDeg: null,
+        printedYear: null,
       },
       slope: null,
     });
@@ -50,6 +51,7 @@ describe('a bearing as read on site', () => {
       north: 'magnetic',
       dated: null,
       declinationDeg: -13,
+      printedYear: null,
       reading: {
         north: 'magnetic',
         bearingDeg: 60,
@@ -60,7 +62,11 @@ describe('a bearing as read on site', () => {
       },
     });
     const looking = await bearingOf("magnetic: '0', taken: looking_at, declination: 16°30' E");
-    expect(looking).toMatchObject({ declinationDeg: 16.5, reading: { bearingDeg: 0, taken: 'looking_at' } });
+    expect(looking).toMatchObject({
+      declinationDeg: 16.5,
+      printedYear: null,
+      reading: { bearingDeg: 0, taken: 'looking_at' },
+    });
     const rack = `weather: { file: a }\nmounts:\n  - id: m\n    kind: fixed-tilt\n    bearing:\n      true: 200\n`;
     expect((await read(rack)).mounts[0].geometry).toMatchObject({ tiltDeg: 'best', azimuthDeg: 'surveyed' });
   });
@@ -286,6 +292,7 @@ describe('a skyline', () => {
         north: 'magnetic',
         dated: { year: 2026, month: 5, day: 1 },
         declinationDeg: null,
+        printedYear: null,
         name: 'door',
         file: 'skyline.csv',
         points: null,
@@ -300,6 +307,7 @@ describe('a skyline', () => {
       {
         north: 'magnetic',
         declinationDeg: -13,
+        printedYear: null,
         points: null,
         obstacles: [{ heightM: 6, distanceM: 6.096, fromDeg: 100, toDeg: 130 }],
       },

@@ -280,3 +280,14 @@ test('problems of all mounts and skylines are told together, in the study or in 
 test('a fault that is no problem of the input is passed on', async () => {
   await expect(survey(SITE('{ file: a.csv }'))).rejects.toThrow('asked for a.csv');
 });
+
+test("a map's declination may carry its year, which is echoed, and an old one is warned of", async () => {
+  const read = (year: string) => roofOf(`magnetic: 150, declination: 16 E${year}, dated: 2026-05-01`);
+  const old = await read(' (1998)');
+  expect(old.roof.azimuthDeg).toBe(166);
+  expect(old.declinations).toEqual(['16 E as entered, printed for 1998, applied to the bearing of roof']);
+  expect(old.findings.map(({ code }) => code)).toContain('old-declination');
+  const recent = await read(' 2024');
+  expect(recent.declinations[0]).toContain('printed for 2024');
+  expect(recent.findings.map(({ code }) => code)).not.toContain('old-declination');
+});

@@ -1,10 +1,11 @@
 import { TrackworthError } from '../../shared/index.ts';
 import {
   type Downslope,
+  type MapDeclination,
   parseBearing,
   parseCalendarDate,
-  parseDeclination,
   parseDownslope,
+  parseMapDeclination,
 } from '../../survey/index.ts';
 import type { Convert } from '../convert.ts';
 import { field, Refusal } from './field.ts';
@@ -38,12 +39,13 @@ export const bearing = (description: string, example = '150') =>
 export const declination = () =>
   field(
     {
-      description: 'Declination by hand with its side, as maps print it: 16 E, 13 W. Blank: from the date.',
+      description:
+        'Declination by hand with its side, and the year of the map if it gives one: 16 E, 13 W, 16 E 2019. Blank: from the date.',
       example: '16 E',
       expected: 'a declination from 0 to 180 degrees with its side, E or W',
       form: { type: 'string', pattern: '[0-9].*[EeWw]' },
     },
-    (raw): number => bySurvey(() => parseDeclination(plain(raw))),
+    (raw): MapDeclination => bySurvey(() => parseMapDeclination(plain(raw))),
   );
 
 export const calendarDate = () =>

@@ -63,7 +63,7 @@ const checkBearing = (raw: RawBearing) =>
     const unknownNorth = reading.north === 'magnetic' && raw.declination === undefined;
     const judged =
       rough && unknownNorth ? { ...reading, taken: 'facing' as const, downslope: null } : reading;
-    planeAzimuth(judged, raw.declination ?? 0);
+    planeAzimuth(judged, raw.declination?.declinationDeg ?? 0);
   }, KEY_OF_CODE);
 
 export const bearingGroup = (convert: Convert) =>
