@@ -11,6 +11,7 @@ import {
 } from '../../src/mounts/index.ts';
 import { Worst } from '../shared/seeded.ts';
 import { sunAt } from './direction.ts';
+import { BACKTRACKED_TURNS } from './published-turns.ts';
 
 const DEG = Math.PI / 180;
 const acos = (x: number) => Math.acos(Math.min(1, x)) / DEG;
@@ -186,16 +187,7 @@ describe('on sloping ground (slope 10 degrees falling south, axis 195, GCR 0.5)'
 
 test('backtracking on level ground and across two slopes turns as worked out', () => {
   // Lorenzo, Narvarte & Munoz 2011 (Prog. Photovolt. 19, 747) and Anderson & Mikofski 2020, in another program (Python).
-  const table = [
-    [-74.7793, 0.4, 0, -25.8011],
-    [-74.7793, 0.5, 0, -16.4527],
-    [79.3724, 0.4, 0, 16.828],
-    [79.3724, 0.5, 0, 11.0171],
-    [70, 0.4, 0, 38.7653],
-    [-80, 0.5, 0, -10.322],
-    [75, 0.4, 5, 44.1281],
-    [75, 0.4, -5, 10.8349],
-  ];
+  const table = BACKTRACKED_TURNS;
   const worst = new Worst();
   for (const [turn, gcr, crossAxis, expected] of table) {
     const back = backtrackTurn(turn, gcr, crossAxis);

@@ -11,6 +11,7 @@ import {
 import { acosDeg } from '../../src/shared/index.ts';
 import { Worst } from '../shared/seeded.ts';
 import { sunAt } from './direction.ts';
+import { BACKTRACKED_TURNS } from './published-turns.ts';
 
 const DEG = Math.PI / 180;
 type Vector = readonly [number, number, number];
@@ -93,16 +94,7 @@ describe('the whole tracker against published turns', () => {
   test('eight turns on level ground and across two slopes', () => {
     // Lorenzo, Narvarte & Munoz 2011 (Prog. Photovolt. 19, 747) and Anderson & Mikofski 2020, in another program (Python):
     // turn that faces the sun, GCR, cross-axis slope, backtracked turn.
-    const table = [
-      [-74.7793, 0.4, 0, -25.8011],
-      [-74.7793, 0.5, 0, -16.4527],
-      [79.3724, 0.4, 0, 16.828],
-      [79.3724, 0.5, 0, 11.0171],
-      [70, 0.4, 0, 38.7653],
-      [-80, 0.5, 0, -10.322],
-      [75, 0.4, 5, 44.1281],
-      [75, 0.4, -5, 10.8349],
-    ];
+    const table = BACKTRACKED_TURNS;
     const worst = new Worst();
     for (const [turn, gcr, across, expected] of table) {
       const ground = { slopeDeg: Math.abs(across), fallsTowardDeg: across < 0 ? 90 : 270 };
