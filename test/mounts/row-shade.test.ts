@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import { rowShade, trackerRowShade } from '../../src/mounts/index.ts';
 import { Worst } from '../shared/seeded.ts';
+import { SHADED_ROWS } from './published-rows.ts';
 
 const DEG = Math.PI / 180;
 
@@ -12,16 +13,7 @@ const fixedShade = (slant: number, pitch: number, tiltDeg: number, profileDeg: n
 test('eight tracker rows are shaded as worked out', () => {
   // turn, turn that faces the sun, GCR, cross slope, shaded share: Anderson & Mikofski 2020, eq. 32, in another program
   // (Python), checked there by an independent ray trace.
-  const table = [
-    [60, 70, 0.4, 0, 0.13176],
-    [60, 75, 0.4, 0, 0.33013],
-    [45, 80, 0.5, 0, 0.57603],
-    [-60, -75, 0.5, 0, 0.4641],
-    [60, 70, 0.4, -5, 0.34046],
-    [60, 70, 0.4, 5, 0],
-    [-50, -72, 0.45, 5, 0.45879],
-    [0, 80, 0.5, 0, 0],
-  ];
+  const table = SHADED_ROWS;
   const worst = new Worst();
   for (const [turn, facing, gcr, crossAxis, expected] of table)
     worst.note(

@@ -11,7 +11,7 @@ import {
 } from '../../src/mounts/index.ts';
 import { Worst } from '../shared/seeded.ts';
 import { sunAt } from './direction.ts';
-import { BACKTRACKED_TURNS } from './published-turns.ts';
+import { BACKTRACKED_TURNS } from './published-rows.ts';
 
 const DEG = Math.PI / 180;
 const acos = (x: number) => Math.acos(Math.min(1, x)) / DEG;

@@ -11,7 +11,7 @@ import {
 import { acosDeg } from '../../src/shared/index.ts';
 import { Worst } from '../shared/seeded.ts';
 import { sunAt } from './direction.ts';
-import { BACKTRACKED_TURNS } from './published-turns.ts';
+import { BACKTRACKED_TURNS, SHADED_ROWS } from './published-rows.ts';
 
 const DEG = Math.PI / 180;
 type Vector = readonly [number, number, number];
@@ -111,16 +111,7 @@ describe('the whole tracker against published turns', () => {
   test('eight shaded shares of rows that do not backtrack', () => {
     // Anderson & Mikofski 2020, eq. 32, checked with a two-dimensional ray trace in another program (Python) to 5e-5: actual
     // turn (here the end of the swing), turn that faces the sun, GCR, cross-axis slope, share.
-    const table = [
-      [60, 70, 0.4, 0, 0.13176],
-      [60, 75, 0.4, 0, 0.33013],
-      [45, 80, 0.5, 0, 0.57603],
-      [-60, -75, 0.5, 0, 0.4641],
-      [60, 70, 0.4, -5, 0.34046],
-      [60, 70, 0.4, 5, 0],
-      [-50, -72, 0.45, 5, 0.45879],
-      [0, 80, 0.5, 0, 0],
-    ];
+    const table = SHADED_ROWS;
     const worst = new Worst();
     for (const [turn, facing, gcr, across, share] of table) {
       const ground = { slopeDeg: Math.abs(across), fallsTowardDeg: across < 0 ? 90 : 270 };
